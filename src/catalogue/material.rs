@@ -1,0 +1,45 @@
+//! A material as a member uses it.
+
+use crate::model::Name;
+use crate::quantity::{Density, Expansion, Length, Stress, ThermodynamicTemperature};
+
+/// A strength that a limit may be a share of.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+#[allow(missing_docs)]
+pub enum Strength {
+    Yield,
+    Ultimate,
+    Proof,
+    Crushing,
+}
+
+/// A material with what is known of it; what is not known is `None` and an error where it is needed.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Material {
+    /// Its id in the job or in the library.
+    pub id: Name,
+    /// The library entry or the job's own that it starts from.
+    pub like: Option<Name>,
+    /// Modulus of elasticity.
+    pub modulus: Stress,
+    /// Coefficient of linear expansion.
+    pub expansion: Option<Expansion>,
+    /// Density.
+    pub density: Option<Density>,
+    /// Yield strength at any thickness, or by thickness: up to this one, rows in rising order.
+    pub yield_strength: Vec<(Option<Length>, Stress)>,
+    /// Ultimate tensile strength.
+    pub ultimate: Option<Stress>,
+    /// Proof strength.
+    pub proof: Option<Stress>,
+    /// Crushing strength.
+    pub crushing: Option<Stress>,
+    /// The readings between which the values hold.
+    pub range: Option<(ThermodynamicTemperature, ThermodynamicTemperature)>,
+    /// `steel`, `aluminium`, `concrete` …
+    pub family: Option<String>,
+    /// What is worth knowing.
+    pub note: Option<String>,
+    /// Where the values come from.
+    pub source: Option<String>,
+}

@@ -1,0 +1,133 @@
+//! What is held: one [`Limit`] for each thing, names and shares already resolved.
+
+use super::{Name, Place, Purpose};
+use crate::quantity::{Force, Length, Stress};
+
+/// Which area a stress stands on.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, serde::Serialize, serde::Deserialize)]
+#[serde(rename_all = "lowercase")]
+#[allow(missing_docs)]
+pub enum AreaUsed {
+    Gross,
+    Net,
+}
+
+/// What a limit stands on. Indices are into the model's members and the member's lists.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Hash)]
+#[allow(missing_docs)]
+pub enum Target {
+    Member {
+        member: usize,
+    },
+    Segment {
+        member: usize,
+        segment: usize,
+    },
+    Layer {
+        member: usize,
+        segment: usize,
+        layer: usize,
+    },
+    Support {
+        member: usize,
+        support: usize,
+    },
+    Station {
+        member: usize,
+        station: usize,
+    },
+}
+
+impl Target {
+    /// The member that it belongs to.
+    pub fn member(&self) -> usize {
+        match *self {
+            Target::Member { member }
+            | Target::Segment { member, .. }
+            | Target::Layer { member, .. }
+            | Target::Support { member, .. }
+            | Target::Station { member, .. } => member,
+        }
+    }
+}
+
+/// A factor that the limit of a stress already holds, such as 0.6 in `"0.6 yield"`.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct ShareFactor(pub f64);
+
+/// The lower and the upper bound of a signed demand: lower ≤ 0 ≤ upper.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct MovementLimit<Q> {
+    /// Not less than this.
+    pub lower: Q,
+    /// Not more than this.
+    pub upper: Q,
+}
+
+/// What is held about the target.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub enum LimitKind {
+    /// Largest tensile stress of a segment's layer. Target: `Segment` (its only layer) or `Layer`.
+    Tension {
+        /// The size that is allowed, 0 or more.
+        limit: Stress,
+        /// The area that the stress stands on.
+        area: AreaUsed,
+        /// The factor, where the limit was written as a share of a strength.
+        share: Option<ShareFactor>,
+    },
+    /// Largest compressive stress, by size. Targets as `Tension`.
+    Compression {
+        /// The size that is allowed, 0 or more.
+        limit: Stress,
+        /// The area that the stress stands on.
+        area: AreaUsed,
+        /// The factor, where the limit was written as a share of a strength.
+        share: Option<ShareFactor>,
+    },
+    /// Axial force anywhere. Target: `Member` or `Segment`.
+    Force(MovementLimit<Force>),
+    /// Change of length. Target: `Member` or `Segment`.
+    Elongation(MovementLimit<Length>),
+    /// Displacement. Target: `Station`.
+    Displacement(MovementLimit<Length>),
+    /// Reaction of a support. Target: `Support`.
+    Reaction(MovementLimit<Force>),
+    /// What stays open. Target: `Support` with a stop, or `Segment` that is a gap.
+    Gap {
+        /// Not less than this.
+        min: Option<Length>,
+        /// Not more than this.
+        max: Option<Length>,
+    },
+    /// It must have closed. Targets as `Gap`.
+    Bears,
+}
+
+/// Which combinations a limit reads.
+#[derive(Debug, Clone, PartialEq)]
+pub enum Reads {
+    /// Those whose purpose is this one, and those without a purpose.
+    Purpose(Purpose),
+    /// These, by their index in the model; sorted.
+    Only(Vec<usize>),
+}
+
+/// One thing that is held.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Limit {
+    /// What is held.
+    pub kind: LimitKind,
+    /// Of what.
+    pub target: Target,
+    /// `H4`, `H4.shank`, `H4.shank.bars`, `H4.kerb`: what reports call the target.
+    pub on: Name,
+    /// In which combinations.
+    pub reads: Reads,
+    /// The combination whose movement is taken off first, by its index.
+    pub since: Option<usize>,
+    /// Where the limit comes from, in the job's words.
+    pub source: Option<Name>,
+    /// The value of the limit in the file.
+    pub place: Place,
+}

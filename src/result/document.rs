@@ -1,0 +1,162 @@
+//! The whole document: what one run found, job by job.
+
+use super::{CombinationResult, Envelope, Governing};
+use crate::model::Name;
+use crate::quantity::Units;
+use serde::{Deserialize, Serialize};
+
+/// One run.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+pub struct Document {
+    /// 1.
+    pub format: u32,
+    /// What made it.
+    pub tool: Tool,
+    /// The units of its numbers.
+    pub units: UnitNames,
+    /// The jobs in the order of their paths.
+    pub jobs: Vec<JobResult>,
+    /// What was looked at.
+    pub counts: Counts,
+}
+
+/// What made a document.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+#[allow(missing_docs)]
+pub struct Tool {
+    pub name: String,
+    pub version: String,
+    /// `sha256:` of the built-in catalogue.
+    pub catalogue: String,
+}
+
+/// The units of a document's numbers.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+#[allow(missing_docs)]
+pub struct UnitNames {
+    pub length: String,
+    pub force: String,
+    pub stress: String,
+    pub temperature: String,
+    pub angle: String,
+    pub stiffness: String,
+}
+
+impl Default for UnitNames {
+    fn default() -> Self {
+        UnitNames {
+            length: "m".into(),
+            force: "N".into(),
+            stress: "Pa".into(),
+            temperature: "K".into(),
+            angle: "rad".into(),
+            stiffness: "N/m".into(),
+        }
+    }
+}
+
+/// What a job came to.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Serialize, Deserialize)]
+#[serde(rename_all = "lowercase")]
+pub enum JobStatus {
+    /// Every check that was made holds, and at least one was made.
+    Pass,
+    /// A check fails.
+    Fail,
+    /// Nothing was checked.
+    Unchecked,
+    /// It could not be read, or a combination could not be solved.
+    Error,
+}
+
+/// One job.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+#[allow(missing_docs)] // the keys of `[job]`, and what their types describe
+pub struct JobResult {
+    pub file: String,
+    /// `sha256:` of the file's bytes; null where it could not be read.
+    pub digest: Option<String>,
+    pub title: Option<String>,
+    pub reference: Option<String>,
+    pub prepared_by: Option<String>,
+    pub checked_by: Option<String>,
+    pub date: Option<String>,
+    pub note: Option<String>,
+    /// K.
+    pub datum: Option<f64>,
+    pub units: Units,
+    pub status: JobStatus,
+    /// The first thousand, in the order of the file.
+    pub errors: Vec<ErrorEntry>,
+    /// How many there are.
+    pub errors_total: usize,
+    pub cautions: Vec<Caution>,
+    pub notes: Vec<Note>,
+    pub materials: Vec<MaterialEntry>,
+    pub combinations: Vec<CombinationResult>,
+    pub governing: Vec<Governing>,
+    pub envelope: Vec<Envelope>,
+}
+
+/// What is wrong, where, and what to write instead.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+#[allow(missing_docs)]
+pub struct ErrorEntry {
+    pub message: String,
+    /// From 1; null where there is no place, as for a file that cannot be opened.
+    pub line: Option<usize>,
+    /// Characters from 1.
+    pub column: Option<usize>,
+    pub help: Option<String>,
+    pub combination: Option<Name>,
+}
+
+/// Something for the engineer to act on.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+#[allow(missing_docs)]
+pub struct Caution {
+    pub about: String,
+    pub text: String,
+    pub line: Option<usize>,
+}
+
+/// Something to know.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+#[allow(missing_docs)]
+pub struct Note {
+    pub about: String,
+    pub text: String,
+}
+
+/// A material that the job uses, as it was used.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+#[allow(missing_docs)] // the keys of `[material]`; SI
+pub struct MaterialEntry {
+    pub id: Name,
+    pub modulus: f64,
+    pub expansion: Option<f64>,
+    pub density: Option<f64>,
+    #[serde(rename = "yield")]
+    pub yield_strength: Option<f64>,
+    pub ultimate: Option<f64>,
+    pub proof: Option<f64>,
+    pub crushing: Option<f64>,
+    pub family: Option<String>,
+    pub source: Option<String>,
+    pub like: Option<Name>,
+}
+
+/// How much was looked at, and what came of it.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default, Serialize, Deserialize)]
+#[allow(missing_docs)]
+pub struct Counts {
+    pub files: usize,
+    pub members: usize,
+    pub combinations: usize,
+    pub checks: usize,
+    pub pass: usize,
+    pub fail: usize,
+    pub unchecked_jobs: usize,
+    /// Errors, not jobs with errors.
+    pub errors: usize,
+}
