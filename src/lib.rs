@@ -4,3 +4,4 @@ pub mod catalogue;
 pub mod model;
 pub mod quantity;
 pub mod result;
+pub mod solve;
