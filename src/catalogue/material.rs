@@ -43,3 +43,15 @@ pub struct Material {
     /// Where the values come from.
     pub source: Option<String>,
 }
+
+impl Material {
+    /// The yield strength at a thickness; where that is not known, the lowest of the table. `None`
+    /// where the material gives none, or none for so great a thickness.
+    pub fn yield_at(&self, thickness: Option<Length>) -> Option<Stress> {
+        let Some(thickness) = thickness else {
+            return self.yield_strength.iter().map(|&(_, strength)| strength).reduce(Stress::min);
+        };
+        let row = self.yield_strength.iter().find(|(up_to, _)| up_to.is_none_or(|up_to| thickness <= up_to));
+        row.map(|&(_, strength)| strength)
+    }
+}
