@@ -103,12 +103,12 @@ const fn unit(name: &'static str, powers: Powers, over: f64, under: f64) -> Unit
 }
 
 /// 0.453 592 37 kg × 9.806 65 m/s², times 1e13.
-const POUND_FORCE: f64 = 44_482_216_152_605.0;
+pub(super) const POUND_FORCE: f64 = 44_482_216_152_605.0;
 /// 0.3048 m, cubed, times 1e12.
-const CUBIC_FOOT: f64 = 28_316_846_592.0;
+pub(super) const CUBIC_FOOT: f64 = 28_316_846_592.0;
 
 /// π to 32 digits, as the sum of two doubles.
-const PI: Twofold = Twofold {
+pub(super) const PI: Twofold = Twofold {
     high: std::f64::consts::PI,
     low: 1.224_646_799_147_353_2e-16,
 };
