@@ -323,7 +323,7 @@ fn tapering() -> Vec<Section> {
             flange: taper(9.0, 12.0),
             root,
         }),
-        Section::Thread(Thread::parse("M24").unwrap()),
+        Section::Thread(Thread::parse("M24").expect("M24 is in the series")),
     ]
 }
 
