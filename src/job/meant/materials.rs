@@ -244,7 +244,7 @@ fn value<T: Copy>(own: &Entry<T>, base: Option<T>) -> Option<Option<T>> {
 }
 
 fn unknown_help(id: &str, own: &Lookup<&str>) -> Option<String> {
-    let mut all: Vec<&str> = own.texts().collect();
-    all.extend(catalogue::ids());
+    let all = own.texts().chain(catalogue::ids().map(|id| id as &str));
+    let all: Vec<&str> = all.collect();
     remedy(id, all, "write one of the library, or define `[material.…]`; there are")
 }
