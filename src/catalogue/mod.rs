@@ -1,6 +1,7 @@
 //! Materials and sections: what the shipped tables in `materials/` hold, and how a section's
 //! dimensions become areas.
 
+mod entry;
 mod library;
 mod material;
 pub mod section;

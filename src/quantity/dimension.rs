@@ -1,5 +1,6 @@
 //! The kinds of quantity that a job and a report know.
 
+use super::unit::Powers;
 use super::{
     Angle, Area, Density, Expansion, Force, ForcePerLength, Length, Mass, MassPerLength, Ratio,
     Stress, TemperatureInterval, ThermodynamicTemperature, from_si,
@@ -93,6 +94,24 @@ impl Dimension {
         }
     }
 
+    /// The powers of the base quantities.
+    pub(super) fn powers(self) -> Powers {
+        match self {
+            Dimension::Length => Powers::LENGTH,
+            Dimension::Area => Powers::AREA,
+            Dimension::Force => Powers::FORCE,
+            Dimension::ForcePerLength => Powers::FORCE_PER_LENGTH,
+            Dimension::Stress => Powers::STRESS,
+            Dimension::Density => Powers::DENSITY,
+            Dimension::MassPerLength => Powers::MASS_PER_LENGTH,
+            Dimension::Mass => Powers::MASS,
+            Dimension::Expansion => Powers::EXPANSION,
+            Dimension::Temperature | Dimension::TemperatureChange => Powers::TEMPERATURE,
+            Dimension::Angle => Powers::ANGLE,
+            Dimension::Strain => Powers::NONE,
+        }
+    }
+
     /// The units in which a literal of this dimension is commonly written, for messages.
     pub fn accepted(self) -> &'static str {
         match self {
@@ -114,7 +133,7 @@ impl Dimension {
             Dimension::Temperature => "K degC degF",
             Dimension::TemperatureChange => "K degC degF",
             Dimension::Angle => "deg rad",
-            Dimension::Strain => "% ue microstrain mm/m in/in",
+            Dimension::Strain => "% ue microstrain mm/m in/in, or a bare number without quotes",
         }
     }
 }

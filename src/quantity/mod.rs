@@ -13,8 +13,10 @@
 
 mod curve;
 mod dimension;
+mod exact;
 mod literal;
 mod show;
+mod unit;
 
 pub use curve::Curve;
 pub use dimension::{Dimension, Measure};

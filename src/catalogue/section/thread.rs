@@ -49,20 +49,7 @@ pub struct Thread {
     pub stiffness_area: StiffnessArea,
 }
 
-/// Why a text is no thread of the series.
-#[derive(Debug, Clone, PartialEq, Eq, thiserror::Error)]
-pub enum ThreadError {
-    /// It does not read as a designation.
-    #[error("`{0}` is no thread designation")]
-    Form(String),
-}
-
 impl Thread {
-    /// The thread with this designation: `M24`, `M24x2`, `3/4-10 UNC`, `#10-24 UNC`.
-    pub fn parse(text: &str) -> Result<Thread, ThreadError> {
-        Err(ThreadError::Form(text.to_owned()))
-    }
-
     /// The area of the nominal diameter.
     pub fn nominal_area(&self) -> Area {
         circle(self.nominal)
