@@ -1,6 +1,9 @@
 //! Axial deformation of members, checked: from a job file to forces, stresses, elongations,
 //! reactions, gaps and verdicts that carry their own proof.
 pub mod catalogue;
+pub mod cli;
 pub mod model;
 pub mod quantity;
+pub mod report;
 pub mod result;
+pub mod run;
