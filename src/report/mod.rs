@@ -7,7 +7,7 @@ pub mod csv;
 mod finite;
 pub mod json;
 #[cfg(test)]
-mod sample;
+pub(crate) mod sample;
 pub mod text;
 
 pub use finite::{NotFinite, all_finite};

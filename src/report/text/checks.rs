@@ -87,7 +87,7 @@ pub(super) fn write_warnings(
             None => "where none is allowed".to_owned(),
         };
         let text = format!(
-            "{place}, combination {}: {} stress {} against {} allowable, {ratio}",
+            "{place}, combination {}: {} of {} against {} allowable, {ratio}",
             check.combination,
             check.check,
             style.quantity(Dimension::Stress, check.demand),
@@ -157,6 +157,8 @@ fn write_rows(out: &mut dyn Write, rows: &[Row], style: &Style, layout: &Layout)
         Some(AreaUsed::Net) => "net",
         None => "",
     });
+    let demand = rows.iter().map(|row| value(style, row.unit, row.demand));
+    let limit = rows.iter().map(|row| value(style, row.unit, row.limit));
     let used = rows.iter().map(|row| ratio(style, row.utilisation));
     let source = rows
         .iter()
@@ -167,23 +169,17 @@ fn write_rows(out: &mut dyn Write, rows: &[Row], style: &Style, layout: &Layout)
     ])
     .block([
         Column::text("combination", combination),
+        Column::number("demand", None, demand),
+        Column::number("limit", None, limit),
+        Column::text("unit", rows.iter().map(|row| unit(style, row.unit))),
+        Column::number("utilisation", None, used),
+        Column::verdicts(rows.iter().map(|row| verdict(row.status))),
+    ])
+    .block([
         Column::number("at", Some(style.unit(Length::DIMENSION)), at),
         Column::text("area", area),
-        Column::number(
-            "demand",
-            None,
-            rows.iter().map(|row| value(style, row.unit, row.demand)),
-        ),
-        Column::number(
-            "limit",
-            None,
-            rows.iter().map(|row| value(style, row.unit, row.limit)),
-        ),
-        Column::text("unit", rows.iter().map(|row| unit(style, row.unit))),
-        Column::number("demand\n/ limit", None, used),
-        Column::text("source", source),
         Column::number("line", None, rows.iter().map(|row| row.line.to_string())),
-        Column::verdicts(rows.iter().map(|row| verdict(row.status))),
+        Column::text("source", source),
     ])
     .write(out, layout)
 }

@@ -39,7 +39,7 @@ fn sentences(member: &MemberResult, style: &Style) -> Vec<String> {
     let show = |length: Length| with_unit(style, length);
     let mut sentences = vec![
         format!(
-            "N is largest with {} at {} and least with {} at {}.",
+            "Axial force N: largest {} at {}, least {} at {}.",
             with_unit(style, member.force_max),
             show(member.force_max_at),
             with_unit(style, member.force_min),

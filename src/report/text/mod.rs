@@ -135,8 +135,8 @@ fn combination_title(combination: &CombinationResult) -> String {
 
 fn residuals(residuals: &Residuals) -> String {
     format!(
-        "Residuals, relative: equilibrium {:.1e}, compatibility {:.1e}, energy {:.1e}; more than \
-         {:.0e} would be an error.",
+        "Relative residuals: equilibrium {:.1e}, compatibility {:.1e}, energy {:.1e} (more than \
+         {:.0e} is an error).",
         residuals.equilibrium,
         residuals.compatibility,
         residuals.energy,

@@ -9,8 +9,9 @@ use super::words::{paint, printable};
 use comfy_table::{
     Cell, CellAlignment, ColumnConstraint, LineStyle, Table as Grid, TableStyle, Width,
 };
+use std::borrow::Cow;
 use std::io::{self, Write};
-use unicode_width::UnicodeWidthStr;
+use unicode_width::{UnicodeWidthChar, UnicodeWidthStr};
 
 /// Blanks between two columns.
 const BETWEEN: usize = 2;
@@ -63,7 +64,7 @@ impl Column {
         }
     }
 
-    /// Verdict words; always the last column of its table.
+    /// Verdict words, which are coloured where the page is.
     pub(super) fn verdicts(cells: impl IntoIterator<Item = &'static str>) -> Self {
         Column {
             heading: "verdict".to_owned(),
@@ -216,8 +217,11 @@ fn write_part(out: &mut dyn Write, columns: &[&Column], layout: &Layout) -> io::
     }));
     let rows = columns.first().map_or(0, |column| column.cells.len());
     for row in 0..rows {
-        let cells = columns.iter().map(|column| column.cells.get(row));
-        grid.add_row(cells.map(|cell| Cell::new(cell.map_or("", String::as_str))));
+        let cells = columns.iter().zip(&widths).map(|(column, width)| {
+            let cell = column.cells.get(row).map_or("", String::as_str);
+            Cell::new(broken(cell, *width))
+        });
+        grid.add_row(cells);
     }
     for ((index, column), width) in columns.iter().enumerate().zip(&widths) {
         let padding = if index + 1 < columns.len() {
@@ -238,19 +242,52 @@ fn write_part(out: &mut dyn Write, columns: &[&Column], layout: &Layout) -> io::
     }
     let whole = total(widths.iter().copied());
     grid.set_width(narrow(whole));
-    let painted = columns
-        .last()
-        .zip(widths.last())
-        .filter(|(column, _)| layout.colour && column.kind == Kind::Verdict)
-        .map(|(_, width)| whole - width);
+    let verdicts = columns
+        .iter()
+        .position(|column| column.kind == Kind::Verdict);
+    let painted = verdicts.filter(|_| layout.colour).map(|index| {
+        let before = widths.iter().take(index);
+        before.map(|width| width + BETWEEN).sum::<usize>()
+    });
     for line in grid.lines() {
         let line = line.trim_end();
         match painted.and_then(|from| split_at_column(line, from)) {
-            Some((head, word)) => writeln!(out, "{head}{}", paint(word, true))?,
+            Some((head, tail)) => {
+                let word = tail.split(' ').next().unwrap_or_default();
+                let rest = tail.get(word.len()..).unwrap_or_default();
+                writeln!(out, "{head}{}{rest}", paint(word, true))?;
+            }
             None => writeln!(out, "{line}")?,
         }
     }
     Ok(())
+}
+
+/// A text broken into lines of at most `width` columns: after a blank or a `/` where there is one,
+/// else within a word.
+fn broken(text: &str, width: usize) -> Cow<'_, str> {
+    if text.width() <= width {
+        return Cow::Borrowed(text);
+    }
+    let mut lines = String::new();
+    let mut used = 0;
+    for word in text.split_inclusive([' ', '/']) {
+        if used > 0 && used + word.trim_end().width() > width {
+            lines.truncate(lines.trim_end().len());
+            lines.push('\n');
+            used = 0;
+        }
+        for character in word.chars() {
+            let wide = character.width().unwrap_or(0);
+            if used + wide > width && character != ' ' {
+                lines.push('\n');
+                used = 0;
+            }
+            lines.push(character);
+            used += wide;
+        }
+    }
+    Cow::Owned(lines)
 }
 
 /// A line's part before a display column and from it on, if it reaches that far.
@@ -260,7 +297,7 @@ fn split_at_column(line: &str, column: usize) -> Option<(&str, &str)> {
         if used == column {
             return line.split_at_checked(index);
         }
-        used += unicode_width::UnicodeWidthChar::width(character).unwrap_or(0);
+        used += character.width().unwrap_or(0);
     }
     None
 }
@@ -268,4 +305,110 @@ fn split_at_column(line: &str, column: usize) -> Option<(&str, &str)> {
 /// Widths beyond what the table library counts in are cut; no page is that wide.
 fn narrow(width: usize) -> u16 {
     u16::try_from(width).unwrap_or(u16::MAX)
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    fn page(width: usize) -> Layout {
+        Layout {
+            width,
+            colour: false,
+            digits: 4,
+        }
+    }
+
+    fn drawn(table: &Table, layout: &Layout) -> String {
+        let mut out = Vec::new();
+        table.write(&mut out, layout).unwrap();
+        String::from_utf8(out).unwrap()
+    }
+
+    fn two_blocks() -> Table {
+        let numbers = |from: usize| (from..from + 2).map(|number| format!("{number}.50"));
+        Table::of([Column::text("member", ["H4", "Ø 20 東"])])
+            .block([
+                Column::number("force", Some("kN"), numbers(1)),
+                Column::number("stress", Some("MPa"), numbers(10)),
+            ])
+            .block([
+                Column::number("gap", Some("mm"), numbers(100)),
+                Column::number("none", None, ["", ""].map(str::to_owned)),
+            ])
+    }
+
+    #[test]
+    fn numbers_stand_on_the_right_under_their_heading_and_unit() {
+        let expected = "
+         force  stress     gap
+member    [kN]   [MPa]    [mm]
+------------------------------
+H4        1.50   10.50  100.50
+Ø 20 東   2.50   11.50  101.50
+";
+        let text = drawn(&two_blocks(), &page(80));
+        assert_eq!(text, expected.trim_start_matches('\n'));
+    }
+
+    #[test]
+    fn what_is_too_wide_goes_on_below_under_the_same_names() {
+        let text = drawn(&two_blocks(), &page(25));
+        let parts: Vec<&str> = text.split("\n\n").collect();
+        assert_eq!(parts.len(), 2, "{text}");
+        assert!(parts.iter().all(|part| part.contains("Ø 20 東")));
+        assert!(parts[1].contains("101.50") && !parts[0].contains("101.50"));
+    }
+
+    #[test]
+    fn no_number_is_ever_broken_however_narrow_the_page() {
+        for width in 1..40 {
+            let text = drawn(&two_blocks(), &page(width));
+            for number in ["1.50", "2.50", "10.50", "11.50", "100.50", "101.50"] {
+                assert!(text.contains(number), "{number} at width {width}:\n{text}");
+            }
+        }
+    }
+
+    #[test]
+    fn long_names_are_broken_and_the_page_is_kept() {
+        let names = [
+            "service/live=0/wind=1/snow=0.5",
+            "a very long name of a combination",
+        ];
+        let table = Table::of([Column::text("combination", names)]).block([Column::number(
+            "force",
+            Some("kN"),
+            ["1.0", "2.0"].map(str::to_owned),
+        )]);
+        let text = drawn(&table, &page(24));
+        assert!(text.lines().all(|line| line.width() <= 24), "{text}");
+        assert!(
+            text.contains("service/live=0/      1.0\nwind=1/snow=0.5\n"),
+            "{text}"
+        );
+        assert!(text.lines().all(|line| line == line.trim_end()));
+    }
+
+    #[test]
+    fn only_the_verdict_column_is_coloured() {
+        let table = Table::of([Column::text("check", ["fail", "gap"])]).block([
+            Column::verdicts(["pass", "fail"]),
+            Column::text("source", ["a pass", "to fail"]),
+        ]);
+        let colour = Layout {
+            colour: true,
+            ..page(80)
+        };
+        let text = drawn(&table, &colour);
+        assert!(
+            text.contains("fail   \u{1b}[32mpass\u{1b}[0m     a pass\n"),
+            "{text}"
+        );
+        assert!(
+            text.contains("gap    \u{1b}[31mfail\u{1b}[0m     to fail\n"),
+            "{text}"
+        );
+        assert!(!drawn(&table, &page(80)).contains('\u{1b}'));
+    }
 }

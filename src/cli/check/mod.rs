@@ -13,6 +13,9 @@ use std::panic::{AssertUnwindSafe, catch_unwind};
 use std::path::PathBuf;
 use unicode_width::UnicodeWidthStr;
 
+#[cfg(test)]
+mod tests;
+
 /// Significant digits of a text report, unless the command line says otherwise.
 const DIGITS: usize = 4;
 
