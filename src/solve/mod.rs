@@ -99,7 +99,7 @@ pub fn member(
         .chain
         .settle()
         .map_err(|reason| explain(member, reason))?;
-    let mut result = recover::member(member, &loading, &prepared, &solved, &states)?;
+    let mut result = recover::member(model, member, &loading, &prepared, &solved, &states)?;
     result.restraint = restraint::share(model, member, combination, &loading, &prepared, &solved);
     let free = solved.free.iter().map(|&(first, last)| {
         (

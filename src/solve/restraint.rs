@@ -52,7 +52,8 @@ pub(super) fn share(
     let cold = Prepared::of(member, &cold).ok()?;
     let (without, _) = cold.chain.settle().ok()?;
     let mean = mean_force(member, prepared, solved) - mean_force(member, &cold, &without);
-    Some((mean / held).value)
+    // Adding 0 turns a negative zero into a plain one.
+    Some((mean / held).value + 0.0)
 }
 
 /// `∫N dx / L`.

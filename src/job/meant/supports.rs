@@ -92,7 +92,11 @@ fn agree(supports: &[Support], meaning: &mut Meaning<'_, '_>) -> bool {
         for &other in others {
             let support = &supports[other];
             if let Some(&fixed) = fixed {
-                let line = meaning.line(supports[if other == fixed { first } else { fixed }].place.start);
+                let line = meaning.line(
+                    supports[if other == fixed { first } else { fixed }]
+                        .place
+                        .start,
+                );
                 let message = format!(
                     "two supports stand at `{}`, and one is fixed: the other (line {line}) never \
                      acts",
