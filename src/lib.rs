@@ -2,5 +2,7 @@
 //! reactions, gaps and verdicts that carry their own proof.
 pub mod catalogue;
 pub mod model;
+pub mod proof;
 pub mod quantity;
 pub mod result;
+pub mod solve;

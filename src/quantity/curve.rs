@@ -2,8 +2,9 @@
 
 use std::ops::{Add, Mul, Sub};
 
-/// The highest degree that is needed: N² of a piece whose N is cubic.
-const HIGHEST: usize = 6;
+/// The highest degree that is needed: the derivative's numerator of a layer's stress on a net area,
+/// whose numerator is quintic and whose denominator is quartic.
+const HIGHEST: usize = 8;
 
 /// A polynomial in s, from 0 at the start of a piece to 1 at its end, by its Bernstein
 /// coefficients.
@@ -19,20 +20,22 @@ pub struct Curve<T> {
 
 /// Binomial coefficients up to the highest degree.
 const BINOMIAL: [[f64; HIGHEST + 1]; HIGHEST + 1] = [
-    [1.0, 0.0, 0.0, 0.0, 0.0, 0.0, 0.0],
-    [1.0, 1.0, 0.0, 0.0, 0.0, 0.0, 0.0],
-    [1.0, 2.0, 1.0, 0.0, 0.0, 0.0, 0.0],
-    [1.0, 3.0, 3.0, 1.0, 0.0, 0.0, 0.0],
-    [1.0, 4.0, 6.0, 4.0, 1.0, 0.0, 0.0],
-    [1.0, 5.0, 10.0, 10.0, 5.0, 1.0, 0.0],
-    [1.0, 6.0, 15.0, 20.0, 15.0, 6.0, 1.0],
+    [1.0, 0.0, 0.0, 0.0, 0.0, 0.0, 0.0, 0.0, 0.0],
+    [1.0, 1.0, 0.0, 0.0, 0.0, 0.0, 0.0, 0.0, 0.0],
+    [1.0, 2.0, 1.0, 0.0, 0.0, 0.0, 0.0, 0.0, 0.0],
+    [1.0, 3.0, 3.0, 1.0, 0.0, 0.0, 0.0, 0.0, 0.0],
+    [1.0, 4.0, 6.0, 4.0, 1.0, 0.0, 0.0, 0.0, 0.0],
+    [1.0, 5.0, 10.0, 10.0, 5.0, 1.0, 0.0, 0.0, 0.0],
+    [1.0, 6.0, 15.0, 20.0, 15.0, 6.0, 1.0, 0.0, 0.0],
+    [1.0, 7.0, 21.0, 35.0, 35.0, 21.0, 7.0, 1.0, 0.0],
+    [1.0, 8.0, 28.0, 56.0, 70.0, 56.0, 28.0, 8.0, 1.0],
 ];
 
 impl<T> Curve<T>
 where
     T: Copy + Default + Add<Output = T> + Sub<Output = T> + Mul<f64, Output = T>,
 {
-    /// The curve with these Bernstein coefficients, seven at the most.
+    /// The curve with these Bernstein coefficients, nine at the most.
     pub fn from_coefficients(values: &[T]) -> Self {
         debug_assert!(!values.is_empty() && values.len() <= HIGHEST + 1);
         let mut coefficients = [T::default(); HIGHEST + 1];
@@ -150,7 +153,40 @@ where
         }
     }
 
-    /// The product of two curves, whose degrees add up to six at the most.
+    /// What remains of the curve after a factor that vanishes at the end, `1 - s`, is taken out.
+    /// Only for a curve whose last coefficient is zero and whose degree is at least 1.
+    pub fn without_zero_at_end(&self) -> Self {
+        let mut rest = *self;
+        for i in 0..self.degree {
+            rest.coefficients[i] =
+                self.coefficients[i] * (self.degree as f64 / (self.degree - i) as f64);
+        }
+        rest.coefficients[self.degree] = T::default();
+        rest.degree -= 1;
+        rest
+    }
+
+    /// The curve run through from its end to its start.
+    pub fn reversed(&self) -> Self {
+        let mut reversed = *self;
+        reversed.coefficients[..=self.degree].reverse();
+        reversed
+    }
+
+    /// The derivative by s; zero of degree 0 for a constant.
+    pub fn derivative(&self) -> Self {
+        let mut derivative = Self::constant(T::default());
+        if self.degree > 0 {
+            derivative.degree = self.degree - 1;
+            for i in 0..self.degree {
+                derivative.coefficients[i] =
+                    (self.coefficients[i + 1] - self.coefficients[i]) * self.degree as f64;
+            }
+        }
+        derivative
+    }
+
+    /// The product of two curves, whose degrees add up to eight at the most.
     pub fn times<U, V>(&self, other: &Curve<U>) -> Curve<V>
     where
         U: Copy,

@@ -12,14 +12,25 @@
 //! ```
 
 mod curve;
+mod dimension;
+mod exact;
+mod literal;
+mod show;
+mod unit;
 
 pub use curve::Curve;
+pub use dimension::{Dimension, Measure};
+pub use literal::{
+    Literal, LiteralError, MovementBound, StressLimit, read, read_change, read_movement_bound,
+    read_reading, read_stress_limit,
+};
+pub use show::Style;
 use std::marker::PhantomData;
 use uom::si::{ISQ, Quantity, SI};
 use uom::typenum::{N1, N2, P1, P2, Z0};
 
 pub use uom::si::f64::{
-    Angle, Area, Energy, Force, Length, Ratio, TemperatureInterval, ThermodynamicTemperature,
+    Angle, Area, Energy, Force, Length, Mass, Ratio, TemperatureInterval, ThermodynamicTemperature,
 };
 
 /// Stress, modulus, strength (Pa).

@@ -1,0 +1,209 @@
+//! What one combination puts on one member: the factored actions of its cases, brought to the
+//! stations, pieces and layers that they act on.
+
+use crate::model::{Combination, Member, Model, SegmentKind};
+use crate::quantity::{
+    Area, Curve, Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress,
+    TemperatureInterval, from_si,
+};
+use std::ops::Range;
+
+/// All actions of a combination on one member, factored and added up.
+pub(super) struct Loading {
+    /// Force at each station, + toward the end.
+    pub(super) forces: Vec<Force>,
+    /// Line load along each piece, self-weight included, + toward the end.
+    pub(super) lines: Vec<Curve<ForcePerLength>>,
+    /// The layers of all pieces, piece by piece; a part known by its stiffness has one.
+    pub(super) layers: Vec<LayerLoading>,
+    /// Where each piece's layers stand in `layers`; empty for a gap.
+    pub(super) of_piece: Vec<Range<usize>>,
+    /// Movement of what each support is fixed to.
+    pub(super) movements: Vec<Length>,
+}
+
+/// One layer along one piece.
+#[derive(Clone, Copy)]
+pub(super) struct LayerLoading {
+    /// Modulus in this combination.
+    pub(super) modulus: Stress,
+    /// Area of all pieces side by side. A part known by its stiffness k counts as a bar of unit
+    /// modulus whose area gives EA = k L.
+    pub(super) area: Curve<Area>,
+    /// Free strain from temperature.
+    pub(super) thermal: Curve<Ratio>,
+    /// Free strain from misfit and imposed strain.
+    pub(super) imposed: Ratio,
+}
+
+impl LayerLoading {
+    /// EA.
+    pub(super) fn rigidity(&self) -> Curve<Force> {
+        self.area.map(|area| self.modulus * area)
+    }
+
+    /// All of its free strain.
+    pub(super) fn free_strain(&self) -> Curve<Ratio> {
+        self.thermal + Curve::constant(self.imposed)
+    }
+}
+
+impl Loading {
+    /// Adds up what `combination` puts on `member`; `with_temperature` off leaves the changes of
+    /// temperature out, for the share of full restraint.
+    pub(super) fn of(
+        model: &Model,
+        member: &Member,
+        combination: &Combination,
+        with_temperature: bool,
+    ) -> Self {
+        let mut loading = Loading {
+            forces: vec![Force::default(); member.stations.len()],
+            lines: vec![Curve::constant(ForcePerLength::default()); member.pieces.len()],
+            layers: Vec::with_capacity(member.pieces.len()),
+            of_piece: Vec::with_capacity(member.pieces.len()),
+            movements: vec![Length::default(); member.supports.len()],
+        };
+        loading.lay_out(model, member, combination);
+        let factor = |case: usize| combination.factors[case];
+        let actions = &member.actions;
+        for action in &actions.forces {
+            loading.forces[action.station] += action.force * factor(action.case);
+        }
+        for action in &actions.lines {
+            let line = Curve::linear(action.start, action.end) * factor(action.case);
+            loading.lines[action.piece] = loading.lines[action.piece] + line;
+        }
+        for action in &actions.weights {
+            let times = action.number * factor(action.case);
+            if times != 0.0 {
+                loading.add_weight(model, member, action.segment, action.layer, times);
+            }
+        }
+        if with_temperature {
+            for action in &actions.temperatures {
+                let change = Curve::linear(action.start, action.end) * factor(action.case);
+                loading.add_temperature(model, member, action.segment, action.layer, &change);
+            }
+        }
+        for action in &actions.strains {
+            let strain = action.strain * factor(action.case);
+            for piece in pieces_of(member, action.segment) {
+                let at = loading.of_piece[piece].start + action.layer;
+                loading.layers[at].imposed += strain;
+            }
+        }
+        for action in &actions.movements {
+            loading.movements[action.support] += action.movement * factor(action.case);
+        }
+        loading
+    }
+
+    /// Gives every piece its layers with their stiffness in this combination.
+    fn lay_out(&mut self, model: &Model, member: &Member, combination: &Combination) {
+        let no_strain = Curve::constant(Ratio::default());
+        for piece in &member.pieces {
+            let first = self.layers.len();
+            let segment = &member.segments[piece.segment];
+            match &segment.kind {
+                SegmentKind::Solid { layers, .. } => {
+                    self.layers.extend(layers.iter().map(|layer| LayerLoading {
+                        modulus: model.materials[layer.material].modulus
+                            * combination.modulus_factor(layer.material),
+                        area: layer.area.part(piece.from, piece.to),
+                        thermal: no_strain,
+                        imposed: Ratio::default(),
+                    }));
+                }
+                SegmentKind::Stiffness(part) => {
+                    let unit: Stress = from_si(1.0);
+                    self.layers.push(LayerLoading {
+                        modulus: unit,
+                        area: Curve::constant(part.stiffness * segment.length() / unit),
+                        thermal: no_strain,
+                        imposed: Ratio::default(),
+                    });
+                }
+                SegmentKind::Gap(_) => {}
+            }
+            self.of_piece.push(first..self.layers.len());
+        }
+    }
+
+    /// ρ g A (or the mass per length times g) along the axis.
+    fn add_weight(
+        &mut self,
+        model: &Model,
+        member: &Member,
+        segment: usize,
+        layer: usize,
+        times: f64,
+    ) {
+        // On a member that rises, weight acts toward the start.
+        let along = -member.rise() * STANDARD_GRAVITY * times;
+        for piece in pieces_of(member, segment) {
+            let at = self.of_piece[piece].start + layer;
+            let per_length = |mass: crate::quantity::MassPerLength| -> ForcePerLength {
+                from_si(mass.value * along)
+            };
+            let weight = match &member.segments[segment].kind {
+                SegmentKind::Solid { layers, .. } => {
+                    let layer = &layers[layer];
+                    match (layer.mass, model.materials[layer.material].density) {
+                        (Some(mass), _) => Curve::constant(per_length(mass)),
+                        (None, Some(density)) => {
+                            self.layers[at].area.map(|area| per_length(density * area))
+                        }
+                        (None, None) => continue,
+                    }
+                }
+                SegmentKind::Stiffness(part) => match part.mass {
+                    Some(mass) => Curve::constant(per_length(mass)),
+                    None => continue,
+                },
+                SegmentKind::Gap(_) => continue,
+            };
+            self.lines[piece] = self.lines[piece] + weight;
+        }
+    }
+
+    fn add_temperature(
+        &mut self,
+        model: &Model,
+        member: &Member,
+        segment: usize,
+        layer: usize,
+        change: &Curve<TemperatureInterval>,
+    ) {
+        let expansion = match &member.segments[segment].kind {
+            SegmentKind::Solid { layers, .. } => model.materials[layers[layer].material].expansion,
+            SegmentKind::Stiffness(part) => part.expansion,
+            SegmentKind::Gap(_) => None,
+        };
+        let Some(expansion) = expansion else { return };
+        for piece in pieces_of(member, segment) {
+            let at = self.of_piece[piece].start + layer;
+            let cut = &member.pieces[piece];
+            let strain = change
+                .part(cut.from, cut.to)
+                .map(|change| expansion * change);
+            self.layers[at].thermal = self.layers[at].thermal + strain;
+        }
+    }
+
+    /// The layers of a piece; none for a gap.
+    pub(super) fn layers_of(&self, piece: usize) -> &[LayerLoading] {
+        &self.layers[self.of_piece[piece].clone()]
+    }
+}
+
+/// The pieces that a segment is cut into.
+pub(super) fn pieces_of(member: &Member, segment: usize) -> Range<usize> {
+    let first = member
+        .pieces
+        .partition_point(|piece| piece.segment < segment);
+    let last = member
+        .pieces
+        .partition_point(|piece| piece.segment <= segment);
+    first..last
+}

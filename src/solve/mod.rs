@@ -1,0 +1,328 @@
+//! From a model and one combination to forces, displacements and stresses.
+//!
+//! A member is loaded ([`loading`]), its pieces are told how they deform ([`deformation`]: PL/AE and
+//! αΔTL), it is condensed to a [`chain`], the states of its stops and joints are found
+//! ([`contact`]), the chain is solved, and its segments are recovered ([`recover`]). No I/O, no
+//! global state, one thread: the same input gives the same bits.
+
+mod chain;
+mod contact;
+mod deformation;
+mod loading;
+mod placing;
+mod quotient;
+mod recover;
+mod restraint;
+mod roots;
+mod threshold;
+
+pub use threshold::Threshold;
+
+use crate::model::{Combination, Member, Model, Name, SegmentKind, Side, SupportKind};
+use crate::quantity::{Force, Length};
+use crate::result::MemberResult;
+use chain::{Chain, Hold, Link, NoSolution, Solved, States};
+use deformation::PieceDeformation;
+use loading::Loading;
+
+/// A solved member, with what counts as zero in it.
+#[derive(Debug, Clone)]
+pub struct Solution {
+    /// Its results.
+    pub member: MemberResult,
+    /// The combination's threshold on it.
+    pub zero: Threshold,
+    /// What nothing holds and nothing pushes, from station to station: set to where it moves least.
+    pub free: Vec<(Name, Name)>,
+}
+
+/// Why a member cannot be solved in a combination.
+#[derive(Debug, Clone, PartialEq, thiserror::Error)]
+pub enum SolveError {
+    /// A free motion that a load pushes.
+    #[error(
+        "nothing holds member `{member}` {part}against {newtons} N toward its {toward}: it would slide away"
+    )]
+    Pushed {
+        /// The member.
+        member: Name,
+        /// `` or `from a to b `.
+        part: String,
+        /// The size of the force that nothing takes.
+        newtons: f64,
+        /// `start` or `end`.
+        toward: &'static str,
+    },
+    /// Rigid supports that are moved against each other with nothing between that gives.
+    #[error(
+        "the supports of member `{member}` from `{first}` to `{last}` contradict each other: nothing between them can give way to their movements"
+    )]
+    Contradiction {
+        /// The member.
+        member: Name,
+        /// The first station.
+        first: Name,
+        /// The last station.
+        last: Name,
+    },
+    /// A taper's point that would have to carry force.
+    #[error(
+        "segment `{segment}` of member `{member}` runs to a point that would have to carry force or stress"
+    )]
+    PointLoaded {
+        /// The member.
+        member: Name,
+        /// The segment.
+        segment: Name,
+    },
+    /// A number ran out of the range of double precision.
+    #[error("member `{member}` leads to numbers beyond the range of double precision")]
+    OutOfRange {
+        /// The member.
+        member: Name,
+    },
+}
+
+/// Solves one member under one combination.
+///
+/// # Errors
+/// Where a load pushes what nothing holds, where rigid supports contradict each other, and where a
+/// taper's point would have to carry force.
+pub fn member(
+    model: &Model,
+    member: &Member,
+    combination: &Combination,
+) -> Result<Solution, SolveError> {
+    let loading = Loading::of(model, member, combination, true);
+    let prepared = Prepared::of(member, &loading)?;
+    let (solved, states) = prepared
+        .chain
+        .settle()
+        .map_err(|reason| explain(member, reason))?;
+    let mut result = recover::member(member, &loading, &prepared, &solved, &states)?;
+    result.restraint = restraint::share(model, member, combination, &loading, &prepared, &solved);
+    let free = solved.free.iter().map(|&(first, last)| {
+        (
+            member.stations[first].name.clone(),
+            member.stations[last].name.clone(),
+        )
+    });
+    let free = free.collect();
+    Ok(Solution {
+        member: result,
+        zero: prepared.chain.zero,
+        free,
+    })
+}
+
+/// A member's pieces and the chain that they condense to.
+struct Prepared {
+    /// One for each piece; `None` for a gap.
+    pieces: Vec<Option<PieceDeformation>>,
+    chain: Chain,
+}
+
+impl Prepared {
+    fn of(member: &Member, loading: &Loading) -> Result<Self, SolveError> {
+        let mut pieces = Vec::with_capacity(member.pieces.len());
+        let mut links = Vec::with_capacity(member.pieces.len());
+        for (index, piece) in member.pieces.iter().enumerate() {
+            let segment = &member.segments[piece.segment];
+            let pointed = |_| SolveError::PointLoaded {
+                member: member.name.clone(),
+                segment: segment.name.clone(),
+            };
+            let (deformation, link) = match &segment.kind {
+                SegmentKind::Gap(gap) => (None, joint(gap)),
+                _ => {
+                    let layers = loading.layers_of(index);
+                    let piece = PieceDeformation::of(piece.length, layers, loading.lines[index])
+                        .map_err(pointed)?;
+                    let link = link(&piece).map_err(pointed)?;
+                    (Some(piece), link)
+                }
+            };
+            pieces.push(deformation);
+            links.push(link);
+        }
+        let holds = holds(member, loading);
+        let zero = threshold(&loading.forces, &links, &holds);
+        Ok(Prepared {
+            pieces,
+            chain: Chain {
+                loads: loading.forces.clone(),
+                links,
+                holds,
+                zero,
+            },
+        })
+    }
+}
+
+/// A gap as a link: once closed it gives by its own stiffness, if it has one.
+fn joint(gap: &crate::model::Gap) -> Link {
+    let flexibility = gap.stiffness.map_or_else(Default::default, |stiffness| {
+        let one: crate::quantity::Ratio = crate::quantity::from_si(1.0);
+        one / stiffness
+    });
+    Link {
+        flexibility,
+        free: -gap.width,
+        load: Force::default(),
+        from_end: false,
+        joint: true,
+    }
+}
+
+/// A piece as a link. A point at its end takes no force, so its flexibility does not matter.
+fn link(piece: &PieceDeformation) -> Result<Link, quotient::Unbounded> {
+    let flexibility = if piece.runs_to_a_point() {
+        Default::default()
+    } else {
+        piece.flexibility()?
+    };
+    let unloaded = piece.force(Force::default());
+    let free = piece.stretch(&unloaded)? + piece.thermal + piece.imposed;
+    Ok(Link {
+        flexibility,
+        free,
+        load: piece.load(),
+        from_end: piece.from_end,
+        joint: false,
+    })
+}
+
+/// The supports in order of station, each with its face where movement and clearance put it.
+fn holds(member: &Member, loading: &Loading) -> Vec<Hold> {
+    let mut order: Vec<usize> = (0..member.supports.len()).collect();
+    order.sort_by_key(|&support| member.supports[support].station);
+    let hold = |&support: &usize| {
+        let movement = loading.movements[support];
+        let station = member.supports[support].station;
+        match member.supports[support].kind {
+            SupportKind::Fixed => Hold {
+                station,
+                support,
+                face: movement,
+                stiffness: None,
+                stop: None,
+            },
+            SupportKind::Spring(stiffness) => Hold {
+                station,
+                support,
+                face: movement,
+                stiffness: Some(stiffness),
+                stop: None,
+            },
+            SupportKind::Stop {
+                clearance,
+                side,
+                stiffness,
+            } => {
+                let face = match side {
+                    Side::End => movement + clearance,
+                    Side::Start => movement - clearance,
+                };
+                Hold {
+                    station,
+                    support,
+                    face,
+                    stiffness,
+                    stop: Some(side),
+                }
+            }
+        }
+    };
+    order.iter().map(hold).collect()
+}
+
+/// What counts as zero, from the sizes of what comes together on the member.
+fn threshold(forces: &[Force], links: &[Link], holds: &[Hold]) -> Threshold {
+    let loads = forces
+        .iter()
+        .fold(Force::default(), |sum, force| sum + force.abs())
+        + links
+            .iter()
+            .fold(Force::default(), |sum, link| sum + link.load.abs());
+    let faces = holds
+        .iter()
+        .fold(Length::default(), |sum, hold| sum + hold.face.abs());
+    let free = links
+        .iter()
+        .fold(Length::default(), |sum, link| sum + link.free.abs());
+    let flexibility = links.iter().fold(
+        Default::default(),
+        |sum: crate::quantity::Flexibility, link| sum + link.flexibility,
+    );
+    let restrained = if flexibility.value > 0.0 {
+        free / flexibility
+    } else {
+        Force::default()
+    };
+    Threshold::relative_to(loads + restrained, faces + free + flexibility * loads)
+}
+
+impl Chain {
+    /// Finds the states, solves, and lets go what bears with no force: an exact touch.
+    fn settle(&self) -> Result<(Solved, States), NoSolution> {
+        let mut states = contact::states(self)?;
+        loop {
+            let solved = self.solve(&states)?;
+            if !self.release_touching(&mut states, &solved) {
+                return Ok((solved, states));
+            }
+        }
+    }
+
+    /// Whether any was let go; each round lets at least one go, so this ends.
+    fn release_touching(&self, states: &mut States, solved: &Solved) -> bool {
+        let mut released = false;
+        for (index, hold) in self.holds.iter().enumerate() {
+            let pushes = match hold.stop {
+                Some(Side::End) => -solved.reactions[index],
+                Some(Side::Start) => solved.reactions[index],
+                None => continue,
+            };
+            if states.holds[index] && pushes <= self.zero.force {
+                states.holds[index] = false;
+                released = true;
+            }
+        }
+        for (index, link) in self.links.iter().enumerate() {
+            if link.joint && states.links[index] && -solved.after[index] <= self.zero.force {
+                states.links[index] = false;
+                released = true;
+            }
+        }
+        released
+    }
+}
+
+/// Puts a reason into the words of the member's stations.
+fn explain(member: &Member, reason: NoSolution) -> SolveError {
+    let name = |station: usize| member.stations[station].name.clone();
+    match reason {
+        NoSolution::Pushed { first, last, force } => {
+            let whole = first == 0 && last + 1 == member.stations.len();
+            SolveError::Pushed {
+                member: member.name.clone(),
+                part: if whole {
+                    String::new()
+                } else {
+                    format!("between `{}` and `{}` ", name(first), name(last))
+                },
+                newtons: force.value.abs(),
+                toward: if force > Force::default() {
+                    "end"
+                } else {
+                    "start"
+                },
+            }
+        }
+        NoSolution::Contradiction { first, last } => SolveError::Contradiction {
+            member: member.name.clone(),
+            first: name(first),
+            last: name(last),
+        },
+    }
+}

@@ -1,0 +1,271 @@
+//! One curve over another: strain N/EA and stress N/A along a taper, integrated and searched.
+
+use super::roots::sign_changes;
+use crate::quantity::{Curve, Ratio};
+use std::ops::{Add, Div, Mul, Sub};
+
+/// A curve over a curve that keeps one sign, along a piece from s = 0 to s = 1.
+///
+/// Zeros that both have at an end (the tip of a cone, where N and A vanish together) are taken
+/// out when it is made, so that values at a tip are the limits there.
+pub(super) struct Quotient<A, B> {
+    numerator: Curve<A>,
+    denominator: Curve<B>,
+}
+
+/// The denominator vanishes where the numerator does not: a point that carries force.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub(super) struct Unbounded;
+
+/// What a curve's values have to be capable of.
+pub(super) trait Value:
+    Copy
+    + Default
+    + PartialEq
+    + PartialOrd
+    + Add<Output = Self>
+    + Sub<Output = Self>
+    + Mul<f64, Output = Self>
+{
+}
+impl<T> Value for T where
+    T: Copy
+        + Default
+        + PartialEq
+        + PartialOrd
+        + Add<Output = T>
+        + Sub<Output = T>
+        + Mul<f64, Output = T>
+{
+}
+
+/// An extreme value, and where along the piece.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub(super) struct Extreme<T> {
+    pub(super) value: T,
+    pub(super) at: f64,
+}
+
+/// Nodes and weights of Gauss–Legendre quadrature with 16 points on 0..1, the half nearer to 0;
+/// the other half mirrors it. Roots of the Legendre polynomial P16, computed to 40 digits.
+const GAUSS: [(f64, f64); 8] = [
+    (0.0052995325041750337019, 0.013576229705877047426),
+    (0.027712488463383711961, 0.031126761969323946431),
+    (0.06718439880608412806, 0.047579255841246392405),
+    (0.12229779582249848305, 0.062314485627766936026),
+    (0.19106187779867812578, 0.074797994408288366041),
+    (0.27099161117138630683, 0.084578259697501269095),
+    (0.35919822461037054338, 0.091301707522461794433),
+    (0.45249374508118127991, 0.094725305227534248143),
+];
+
+/// The spread of the denominator's coefficients up to which 16 points integrate to rounding: its
+/// zeros then lie at least half a length away from the piece, where the error of n Gauss points,
+/// ρ⁻²ⁿ with ρ the half axes' sum of the largest ellipse without a zero, is below 10⁻¹⁶.
+const SPREAD: f64 = 3.0;
+
+impl<A, B> Quotient<A, B>
+where
+    A: Value + Div<B> + Div<A, Output = Ratio>,
+    B: Value + Div<B, Output = Ratio>,
+    <A as Div<B>>::Output: Value,
+{
+    /// Fails where the denominator vanishes at an end and the numerator does not as well.
+    pub(super) fn new(numerator: Curve<A>, denominator: Curve<B>) -> Result<Self, Unbounded> {
+        let (numerator, denominator) = cancelled(numerator, denominator)?;
+        let (numerator, denominator) = cancelled(numerator.reversed(), denominator.reversed())?;
+        Ok(Quotient {
+            numerator: numerator.reversed(),
+            denominator: denominator.reversed(),
+        })
+    }
+
+    /// The value at `s`.
+    pub(super) fn at(&self, s: f64) -> <A as Div<B>>::Output {
+        self.numerator.at(s) / self.denominator.at(s)
+    }
+
+    /// `∫ ds` over the piece, to rounding: exactly over a constant, else by Gauss points on parts
+    /// that halve toward a zero of the denominator.
+    pub(super) fn integral(&self) -> <A as Div<B>>::Output {
+        let first = self.denominator.start();
+        if self.denominator.coefficients().iter().all(|&c| c == first) {
+            return self.numerator.mean() / first;
+        }
+        let mut sum = <A as Div<B>>::Output::default();
+        let mut parts = vec![(self.numerator, self.denominator, 1.0)];
+        while let Some((numerator, denominator, width)) = parts.pop() {
+            if spread(&denominator) <= SPREAD {
+                sum = sum + gauss(&numerator, &denominator) * width;
+            } else {
+                let (near, far) = (numerator.cut(0.5), denominator.cut(0.5));
+                parts.push((near.1, far.1, 0.5 * width));
+                parts.push((near.0, far.0, 0.5 * width));
+            }
+        }
+        sum
+    }
+
+    /// The largest and the least value with their places; of equal ones the first.
+    pub(super) fn extremes(
+        &self,
+    ) -> (
+        Extreme<<A as Div<B>>::Output>,
+        Extreme<<A as Div<B>>::Output>,
+    ) {
+        let start = Extreme {
+            value: self.at(0.0),
+            at: 0.0,
+        };
+        let (mut most, mut least) = (start, start);
+        if self.numerator.degree() == 0 && self.denominator.degree() == 0 {
+            return (most, least);
+        }
+        let mut look = |at: f64| {
+            let value = self.at(at);
+            if value > most.value {
+                most = Extreme { value, at };
+            }
+            if value < least.value {
+                least = Extreme { value, at };
+            }
+        };
+        for at in sign_changes(&self.slope()) {
+            look(at);
+        }
+        look(1.0);
+        (most, least)
+    }
+
+    /// The numerator of the derivative, P′Q − PQ′, in numbers scaled to about 1.
+    fn slope(&self) -> Curve<f64> {
+        let (most, size) = (largest(&self.numerator), largest(&self.denominator));
+        if most == A::default() {
+            return Curve::constant(0.0);
+        }
+        let p: Curve<f64> = self.numerator.map(|c| Div::<A>::div(c, most).value);
+        let q: Curve<f64> = self.denominator.map(|c| Div::<B>::div(c, size).value);
+        p.derivative().times(&q) - p.times(&q.derivative())
+    }
+}
+
+/// Both curves without the zeros that they share at the end.
+fn cancelled<A: Value, B: Value>(
+    mut numerator: Curve<A>,
+    mut denominator: Curve<B>,
+) -> Result<(Curve<A>, Curve<B>), Unbounded> {
+    while denominator.end() == B::default() {
+        if numerator.coefficients().iter().all(|&c| c == A::default()) {
+            // nothing over anything is nothing
+            return Ok((
+                Curve::constant(A::default()),
+                Curve::constant(largest(&denominator)),
+            ));
+        }
+        if numerator.end() != A::default() || denominator.degree() == 0 {
+            return Err(Unbounded);
+        }
+        numerator = numerator.without_zero_at_end();
+        denominator = denominator.without_zero_at_end();
+    }
+    Ok((numerator, denominator))
+}
+
+fn largest<T: Value>(curve: &Curve<T>) -> T {
+    let size = |c: T| {
+        if c < T::default() {
+            T::default() - c
+        } else {
+            c
+        }
+    };
+    curve.coefficients().iter().fold(
+        T::default(),
+        |most, &c| if size(c) > most { size(c) } else { most },
+    )
+}
+
+fn spread<B: Value + Div<B, Output = Ratio>>(denominator: &Curve<B>) -> f64 {
+    let most = largest(denominator);
+    let least = denominator
+        .coefficients()
+        .iter()
+        .fold(most, |least, &c| if c < least { c } else { least });
+    (most / least).value
+}
+
+fn gauss<A, B>(numerator: &Curve<A>, denominator: &Curve<B>) -> <A as Div<B>>::Output
+where
+    A: Value + Div<B>,
+    B: Value,
+    <A as Div<B>>::Output: Value,
+{
+    let at = |s: f64| numerator.at(s) / denominator.at(s);
+    GAUSS.iter().fold(Default::default(), |sum, &(s, weight)| {
+        sum + (at(s) + at(1.0 - s)) * weight
+    })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::Quotient;
+    use crate::quantity::{Area, Curve, Force, from_si};
+    use approx::assert_relative_eq;
+
+    fn force(values: &[f64]) -> Curve<Force> {
+        let values: Vec<Force> = values.iter().map(|&v| from_si(v)).collect();
+        Curve::from_coefficients(&values)
+    }
+
+    fn area(values: &[f64]) -> Curve<Area> {
+        let values: Vec<Area> = values.iter().map(|&v| from_si(v)).collect();
+        Curve::from_coefficients(&values)
+    }
+
+    #[test]
+    fn a_round_taper_integrates_to_its_closed_form() {
+        // ∫ ds / (a + (b - a) s)² = 1 / (a b)
+        for ratio in [1.0 + 1e-7, 1.5, 4.0, 1e3, 1e6] {
+            let taper = Quotient::new(
+                force(&[1.0]),
+                area(&[1.0, 1.0 / ratio, 1.0 / (ratio * ratio)]),
+            )
+            .unwrap();
+            assert_relative_eq!(taper.integral().value, ratio, max_relative = 4e-15);
+        }
+    }
+
+    #[test]
+    fn a_flat_taper_integrates_to_its_closed_form() {
+        // ∫ ds / (a + (b - a) s) = ln(b / a) / (b - a)
+        for ratio in [1.5_f64, 4.0, 1e3, 1e6] {
+            let taper = Quotient::new(force(&[1.0]), area(&[1.0, ratio])).unwrap();
+            assert_relative_eq!(
+                taper.integral().value,
+                ratio.ln() / (ratio - 1.0),
+                max_relative = 4e-15
+            );
+        }
+    }
+
+    #[test]
+    fn zeros_that_both_have_at_a_tip_cancel() {
+        // (1 - s)³ / (1 - s)² = 1 - s
+        let cone = Quotient::new(force(&[1.0, 0.0, 0.0, 0.0]), area(&[1.0, 0.0, 0.0])).unwrap();
+        assert_relative_eq!(cone.integral().value, 0.5, max_relative = 1e-15);
+        assert_eq!(cone.at(1.0).value, 0.0);
+        assert!(Quotient::new(force(&[1.0]), area(&[1.0, 0.0, 0.0])).is_err());
+        assert!(Quotient::new(force(&[1.0, 0.0]), area(&[1.0, 0.0, 0.0])).is_err());
+    }
+
+    #[test]
+    fn extremes_inside_a_piece_are_found_with_their_place() {
+        // s (1 - s) over a constant: largest at the middle
+        let (most, least) = Quotient::new(force(&[0.0, 0.5, 0.0]), area(&[2.0]))
+            .unwrap()
+            .extremes();
+        assert_relative_eq!(most.value.value, 0.125, max_relative = 1e-15);
+        assert_relative_eq!(most.at, 0.5, max_relative = 1e-12);
+        assert_eq!(least.value.value, 0.0);
+    }
+}
