@@ -6,7 +6,7 @@ mod common;
 #[path = "states/dense.rs"]
 mod dense;
 
-use common::chain::{Chain, Hold, Kind, Random};
+use common::chain::{At, Chain, Hold, Kind, Random, Segment, Support};
 use common::{only_member, random_member};
 use dense::{Found, State, enumerate};
 use lengthwise::result::{JobResult, JobStatus};
@@ -55,11 +55,17 @@ fn states_and_values_are_those_of_the_enumeration() {
     assert!(tally.touching <= 20, "{tally:?}");
 }
 
-/// Displacements and gaps, and forces, each to 1e-11 of the largest of its kind.
+/// Displacements, gaps and stretches, and forces, each to 1e-11 of the largest of its kind.
 fn compare(number: usize, chain: &Chain, result: &JobResult, state: &State) {
     let member = only_member(result);
     let largest = |values: &[f64]| values.iter().fold(0.0f64, |m, v| m.max(v.abs()));
-    let length_scale = largest(&state.displacement).max(largest(&state.free_growth));
+    let lengths = [
+        &state.displacement,
+        &state.stretch_parts,
+        &state.support_gap,
+        &state.joint_gap,
+    ];
+    let length_scale = lengths.map(|l| largest(l)).into_iter().fold(0.0, f64::max);
     let force_scale = largest(&state.force_before).max(largest(&state.reaction));
     let near = |what: &str, found: f64, expected: f64, scale: f64| {
         assert!(
@@ -121,5 +127,48 @@ fn compare(number: usize, chain: &Chain, result: &JobResult, state: &State) {
             let closed = state.bears[chain.supports.len() + i];
             assert_eq!(segment.bears, Some(closed), "member {number}: {segment:?}");
         }
+    }
+}
+
+/// The enumeration itself, on published case P13 (Hibbeler, Mechanics of Materials: the rod of 10 mm
+/// whose end stands 0.2 mm short of a wall), and with the wall too far away to be met.
+#[test]
+fn the_enumeration_finds_the_published_wall() {
+    let solid = |length| Segment {
+        length,
+        kind: Kind::Solid {
+            area: [std::f64::consts::FRAC_PI_4 * 1e-4; 2],
+            modulus: 200e9,
+            expansion: 0.0,
+        },
+        line: [0.0; 2],
+        warming: [0.0; 2],
+        misfit: 0.0,
+    };
+    for (clearance, bears, wall) in [(0.2e-3, true, -4_048.672_789), (2e-3, false, 0.0)] {
+        let wall_kind = Hold::Stop {
+            clearance,
+            toward_end: true,
+            stiffness: None,
+        };
+        let support = |at, kind| Support {
+            at,
+            kind,
+            movement: 0.0,
+        };
+        let rod = Chain {
+            segments: vec![solid(0.4), solid(0.8)],
+            supports: vec![
+                support(At::Joint(0), Hold::Fixed),
+                support(At::Joint(2), wall_kind),
+            ],
+            forces: vec![(At::Joint(1), 20e3)],
+        };
+        let Found::One(state) = enumerate(&rod) else {
+            panic!("one state is in balance");
+        };
+        assert_eq!(state.bears[1], bears);
+        approx::assert_relative_eq!(state.reaction[1], wall, max_relative = 1e-9);
+        approx::assert_relative_eq!(state.reaction[0], -20e3 - wall, max_relative = 1e-9);
     }
 }

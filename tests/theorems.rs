@@ -73,6 +73,7 @@ impl Outcome {
         let length = largest(&mut other.stations.iter().map(|s| s[1])).max(free_growth(chain));
         let force = largest(&mut other.stations.iter().flat_map(|s| [s[2], s[3]]))
             .max(largest(&mut other.reactions.iter().copied()));
+        let chain_length = chain.joints()[chain.segments.len()];
         let near = |a: f64, b: f64, scale: f64| {
             assert!(
                 (a - b).abs() <= 1e-11 * scale,
@@ -81,7 +82,7 @@ impl Outcome {
             );
         };
         for (a, b) in self.stations.iter().zip(&other.stations) {
-            near(a[0], b[0], a[0].abs() * 1e-2);
+            near(a[0], b[0], chain_length);
             near(a[1], b[1], length);
             near(a[2], b[2], force);
             near(a[3], b[3], force);

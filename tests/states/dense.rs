@@ -21,8 +21,8 @@ pub(crate) struct State {
     pub(crate) joint_gap: Vec<f64>,
     /// Which bear: the supports, then the segments.
     pub(crate) bears: Vec<bool>,
-    /// Free growth of the elements.
-    pub(crate) free_growth: Vec<f64>,
+    /// What adds up to the stretch of the solid elements: their parts from force, load and growth.
+    pub(crate) stretch_parts: Vec<f64>,
 }
 
 /// What the enumeration finds.
@@ -283,7 +283,7 @@ impl<'c> System<'c> {
             support_gap: support_gap.collect(),
             joint_gap,
             reaction: reactions.iter().map(|r| r * unit).collect(),
-            free_growth: self.elements.iter().map(|e| e.growth).collect(),
+            stretch_parts: self.stretch_parts(&force_after),
             displacement,
             force_before,
             force_after,
@@ -291,10 +291,25 @@ impl<'c> System<'c> {
         }
     }
 
+    fn stretch_parts(&self, force_after: &[f64]) -> Vec<f64> {
+        let parts = |(element, force): (&Element, &f64)| {
+            let (flexibility, free) = self.stretch(element);
+            match self.chain.segments[element.segment].kind {
+                Kind::Gap { .. } => [0.0; 3],
+                _ => [flexibility * force, free - element.growth, element.growth],
+            }
+        };
+        self.elements
+            .iter()
+            .zip(force_after)
+            .flat_map(parts)
+            .collect()
+    }
+
     fn slack(&self, state: &State, contacts: &[usize]) -> f64 {
         let largest = |values: &[f64]| values.iter().fold(1e-30f64, |m, v| m.max(v.abs()));
         let force = largest(&state.force_before).max(largest(&state.reaction));
-        let length = largest(&state.displacement).max(largest(&state.free_growth));
+        let length = largest(&state.displacement).max(largest(&state.stretch_parts));
         let supports = self.chain.supports.len();
         let one = |&contact: &usize| match contact.checked_sub(supports) {
             None if !state.bears[contact] => state.support_gap[contact] / length,
