@@ -1,6 +1,6 @@
 //! A material as a member uses it.
 
-use crate::model::Name;
+use std::sync::Arc;
 use crate::quantity::{Density, Expansion, Length, Stress, ThermodynamicTemperature};
 
 /// A strength that a limit may be a share of.
@@ -17,9 +17,9 @@ pub enum Strength {
 #[derive(Debug, Clone, PartialEq)]
 pub struct Material {
     /// Its id in the job or in the library.
-    pub id: Name,
+    pub id: Arc<str>,
     /// The library entry or the job's own that it starts from.
-    pub like: Option<Name>,
+    pub like: Option<Arc<str>>,
     /// Modulus of elasticity.
     pub modulus: Stress,
     /// Coefficient of linear expansion.
@@ -42,4 +42,16 @@ pub struct Material {
     pub note: Option<String>,
     /// Where the values come from.
     pub source: Option<String>,
+}
+
+impl Material {
+    /// The yield strength at a thickness; where that is not known, the lowest of the table. `None`
+    /// where the material gives none, or none for so great a thickness.
+    pub fn yield_at(&self, thickness: Option<Length>) -> Option<Stress> {
+        let Some(thickness) = thickness else {
+            return self.yield_strength.iter().map(|&(_, strength)| strength).reduce(Stress::min);
+        };
+        let row = self.yield_strength.iter().find(|(up_to, _)| up_to.is_none_or(|up_to| thickness <= up_to));
+        row.map(|&(_, strength)| strength)
+    }
 }

@@ -1,5 +1,6 @@
 //! What a combination puts on a member, gathered anew from the model for the proof.
 
+use crate::catalogue::Shape;
 use crate::model::{Combination, Layer, Member, Model, Segment, SegmentKind};
 use crate::quantity::{Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress, TemperatureInterval, from_si};
 

@@ -1,0 +1,235 @@
+//! What a report warns of, each where its condition holds.
+
+use crate::catalogue::Shape;
+use crate::model::{Layer, Limit, LimitKind, Member, Model, Place, Remark, ShareFactor};
+use crate::quantity::{Dimension, Force, Length, Stress, Style, ThermodynamicTemperature, from_si};
+use crate::result::{CombinationResult, MemberResult};
+use crate::solve::Threshold;
+
+/// Slenderness L/r above which a member in compression is called slender (AISC 360-22, user note
+/// to E2), and one that is only pulled (user note to D1).
+const SLENDER_IN_COMPRESSION: f64 = 200.0;
+const SLENDER_IN_TENSION: f64 = 300.0;
+
+/// A movement of this share of the member's length is no small displacement any more.
+const LARGE_MOVEMENT: f64 = 1.0 / 50.0;
+
+/// A solved combination with what counts as zero in each of its members.
+pub struct Observed<'a> {
+    /// Its index in the model.
+    pub index: usize,
+    /// Its results.
+    pub result: &'a CombinationResult,
+    /// One threshold a member.
+    pub zeros: &'a [Threshold],
+}
+
+/// All cautions that the results of a job call for, member by member.
+pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
+    let style = Style { units: model.units, ..Style::default() };
+    let mut remarks = Vec::new();
+    for (index, member) in model.members.iter().enumerate() {
+        let look = Look { model, member, index, observed, style };
+        remarks.extend(look.compression());
+        remarks.extend(look.slenderness());
+        remarks.extend(look.yielding());
+        remarks.extend(look.movement());
+        remarks.extend(look.temperature());
+        remarks.extend(look.across());
+    }
+    remarks.extend(model.limits.iter().filter_map(|limit| factored_share(model, limit)));
+    remarks
+}
+
+struct Look<'a> {
+    model: &'a Model,
+    member: &'a Member,
+    index: usize,
+    observed: &'a [Observed<'a>],
+    style: Style,
+}
+
+impl Look<'_> {
+    fn caution(&self, text: String, place: Option<Place>) -> Option<Remark> {
+        let place = place.or_else(|| Some(self.member.place.clone()));
+        Some(Remark { about: format!("member.{}", self.member.name), text, place, caution: true })
+    }
+
+    fn results(&self) -> impl Iterator<Item = (&MemberResult, &str, Threshold)> {
+        let index = self.index;
+        self.observed
+            .iter()
+            .map(move |seen| (&seen.result.members[index], seen.result.name.as_ref(), seen.zeros[index]))
+    }
+
+    /// The worst by `of` over all combinations, with the name of the combination.
+    fn worst<T: PartialOrd + Copy>(&self, of: impl Fn(&MemberResult, Threshold) -> Option<T>) -> Option<(T, &str)> {
+        let mut worst: Option<(T, &str)> = None;
+        for (result, name, zero) in self.results() {
+            if let Some(value) = of(result, zero)
+                && worst.is_none_or(|(known, _)| value > known)
+            {
+                worst = Some((value, name));
+            }
+        }
+        worst
+    }
+
+    fn greatest_compression(&self) -> Option<(Force, &str)> {
+        self.worst(|result, zero| (-result.force_min > zero.force).then_some(-result.force_min))
+    }
+
+    fn compression(&self) -> Option<Remark> {
+        let (force, combination) = self.greatest_compression()?;
+        let force = self.style.quantity(Dimension::Force, force.value);
+        self.caution(
+            format!("compression of {force} in `{combination}`, and buckling is not checked here: check it by the governing code"),
+            None,
+        )
+    }
+
+    fn slenderness(&self) -> Option<Remark> {
+        let layers = self.member.segments.iter().filter_map(|segment| match segment.layers() {
+            [only] => Some(only),
+            _ => None,
+        });
+        let ends = |layer: &Layer| [layer.section.gyration_at(0.0), layer.section.gyration_at(1.0)];
+        let least = layers.flat_map(ends).flatten().filter(|radius| radius.value > 0.0).reduce(Length::min)?;
+        let slenderness = (self.member.length() / least).value;
+        let (limit, how, rule) = if self.greatest_compression().is_some() {
+            (SLENDER_IN_COMPRESSION, "in compression", "AISC 360-22, user note to E2")
+        } else {
+            (SLENDER_IN_TENSION, "in tension", "AISC 360-22, user note to D1")
+        };
+        if slenderness <= limit {
+            return None;
+        }
+        let radius = self.style.quantity(Dimension::Length, least.value);
+        self.caution(
+            format!("slender: length over least radius of gyration ({radius}) is {slenderness:.0}, over {limit:.0} {how} ({rule})"),
+            None,
+        )
+    }
+
+    fn yielding(&self) -> Option<Remark> {
+        let mut worst: Option<(f64, Stress, Stress, String, &str, Place)> = None;
+        for (which, segment) in self.member.segments.iter().enumerate() {
+            for (layer_index, layer) in segment.layers().iter().enumerate() {
+                let material = &self.model.materials[layer.material];
+                let Some(limit) = material.yield_at(layer.section.thickness()) else { continue };
+                for (result, name, _) in self.results() {
+                    let result = &result.segments[which];
+                    let (most, least) = match result.layers.get(layer_index) {
+                        Some(layer) => (layer.stress_max, layer.stress_min),
+                        None => (result.stress_max, result.stress_min),
+                    };
+                    let (Some(most), Some(least)) = (most, least) else { continue };
+                    let stress = most.abs().max(least.abs());
+                    let ratio = (stress / limit).value;
+                    if ratio > 1.0 && worst.as_ref().is_none_or(|(known, ..)| ratio > *known) {
+                        let on = match result.layers.get(layer_index) {
+                            Some(layer) => format!("{}.{}", segment.name, layer.name),
+                            None => segment.name.to_string(),
+                        };
+                        worst = Some((ratio, stress, limit, on, name, layer.place.clone()));
+                    }
+                }
+            }
+        }
+        let (_, stress, limit, on, combination, place) = worst?;
+        let stress = self.style.quantity(Dimension::Stress, stress.value);
+        let limit = self.style.quantity(Dimension::Stress, limit.value);
+        self.caution(
+            format!("stress of {stress} in `{on}` is over the yield strength of {limit} in `{combination}`: the computation is elastic, so stretches there are too small and forces may share otherwise"),
+            Some(place),
+        )
+    }
+
+    fn movement(&self) -> Option<Remark> {
+        let large = self.member.length() * LARGE_MOVEMENT;
+        let (moved, combination) = self.worst(|result, _| {
+            let stations = result.stations.iter().map(|station| station.displacement.abs());
+            stations.chain([result.elongation.abs()]).reduce(Length::max).filter(|&moved| moved > large)
+        })?;
+        let moved = self.style.quantity(Dimension::Length, moved.value);
+        self.caution(
+            format!("movement of {moved} in `{combination}` is over 1/50 of the length: the computation is for small displacements"),
+            None,
+        )
+    }
+
+    /// A temperature outside the range for which a material's values hold.
+    fn temperature(&self) -> Option<Remark> {
+        let datum = self.member.datum?;
+        for seen in self.observed {
+            let factors = &self.model.combinations[seen.index].factors;
+            for (which, segment) in self.member.segments.iter().enumerate() {
+                for (layer_index, layer) in segment.layers().iter().enumerate() {
+                    let material = &self.model.materials[layer.material];
+                    let Some((least, most)) = material.range else { continue };
+                    let acting = self.member.actions.temperatures.iter();
+                    let acting = acting.filter(|t| t.segment == which && t.layer == layer_index);
+                    let (mut start, mut end) = (0.0, 0.0);
+                    for change in acting {
+                        start += change.start.value * factors[change.case];
+                        end += change.end.value * factors[change.case];
+                    }
+                    for change in [start, end] {
+                        let reading = datum.value + change;
+                        if change != 0.0 && (reading < least.value || reading > most.value) {
+                            let show = |reading: ThermodynamicTemperature| {
+                                self.style.quantity(Dimension::Temperature, reading.value)
+                            };
+                            let text = format!(
+                                "temperature of {} in `{}`, `{}` is outside the range of {} to {} for which the values of `{}` hold",
+                                show(from_si(reading)), segment.name, seen.result.name, show(least), show(most), material.id,
+                            );
+                            return self.caution(text, Some(layer.place.clone()));
+                        }
+                    }
+                }
+            }
+        }
+        None
+    }
+
+    /// Loads across a sloping or level member, which the axial computation leaves out.
+    fn across(&self) -> Option<Remark> {
+        let level = self.member.runs?.value.cos().abs();
+        let actions = &self.member.actions;
+        let factors_of = |case: usize| self.observed.iter().any(|seen| self.model.combinations[seen.index].factors[case] != 0.0);
+        // The cosine of a right angle is not quite 0 in double precision.
+        let heavy = level > 1e-12 && actions.weights.iter().any(|weight| weight.number != 0.0 && factors_of(weight.case));
+        let loaded = actions.forces.iter().any(|force| force.across.value != 0.0 && factors_of(force.case))
+            || actions.lines.iter().any(|line| line.across.value != 0.0 && factors_of(line.case));
+        if !heavy && !loaded {
+            return None;
+        }
+        self.caution(
+            "weight acts across this member as well as along it: the part across, and the bending that it makes, is not carried by this computation".into(),
+            None,
+        )
+    }
+}
+
+/// A share of a strength that already holds a safety factor, read with factored loads.
+fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
+    let (LimitKind::Tension { share, .. } | LimitKind::Compression { share, .. }) = limit.kind else { return None };
+    let ShareFactor(share) = share?;
+    let factored = model.combinations.iter().enumerate().find(|(index, combination)| {
+        super::reads(limit, *index, combination) && combination.factors.iter().any(|&factor| factor > 1.0)
+    });
+    let (_, combination) = factored?;
+    if share >= 1.0 {
+        return None;
+    }
+    Some(Remark {
+        about: limit.on.to_string(),
+        text: format!(
+            "this limit is {share:.3} of a strength and so may hold a safety factor already, and `{}` has factored loads: safety may be counted twice",
+            combination.name,
+        ),
+        place: Some(limit.place.clone()),
+        caution: true,
+    })
+}

@@ -1,0 +1,64 @@
+//! What must stay open at a stop or a joint, and not more.
+
+use super::{Case, Finding, ROUNDING};
+use crate::model::{SegmentKind, SupportKind, Target};
+use crate::quantity::Length;
+use crate::result::{Unit, Verdict};
+
+pub(super) fn judge(case: &Case, min: Option<Length>, max: Option<Length>) -> Option<Finding> {
+    let (gap, drawn, at) = match case.limit.target {
+        Target::Support { member, support } => {
+            let model = &case.model.members[member];
+            let SupportKind::Stop { clearance, .. } = model.supports[support].kind else { return None };
+            let at = model.stations[model.supports[support].station].x;
+            (case.member.supports[support].gap?, clearance, at)
+        }
+        Target::Segment { member, segment } => {
+            let model = &case.model.members[member].segments[segment];
+            let SegmentKind::Gap(gap) = model.kind else { return None };
+            (case.member.segments[segment].gap?, gap.width, model.from)
+        }
+        _ => return None,
+    };
+    let finding = |limit: Length, utilisation, holds| Finding {
+        at: Some(at.value),
+        demand: gap.value,
+        limit: limit.value,
+        unit: Unit::Metre,
+        utilisation,
+        status: if holds { Verdict::Pass } else { Verdict::Fail },
+        details: details(drawn, min, max),
+    };
+    let zero = case.zero.length;
+    let least = min.map(|min| {
+        // Used over available: what has closed of what may close.
+        let (used, available) = (drawn - gap, drawn - min);
+        let ratio = if available <= Length::default() {
+            None
+        } else {
+            Some((used / available).value.max(0.0))
+        };
+        finding(min, ratio, gap >= min - zero)
+    });
+    let most = max.map(|max| {
+        let ratio = if max > Length::default() { Some((gap / max).value) } else { None };
+        finding(max, ratio, gap <= max * (1.0 + ROUNDING) + zero)
+    });
+    match (least, most) {
+        (Some(least), Some(most)) => Some(least.worse(most)),
+        (least, most) => least.or(most),
+    }
+}
+
+/// What the ratio was made of.
+fn details(drawn: Length, min: Option<Length>, max: Option<Length>) -> serde_json::Map<String, serde_json::Value> {
+    let mut details = serde_json::Map::new();
+    let mut add = |name: &str, value: Length| details.insert(name.to_string(), value.value.into());
+    add("drawn", drawn);
+    for (name, value) in [("min", min), ("max", max)] {
+        if let Some(value) = value {
+            add(name, value);
+        }
+    }
+    details
+}

@@ -1,0 +1,276 @@
+//! One job from its bytes to its finished result: read, solve, prove, check.
+
+use crate::check::{self, Observed};
+use crate::job::{self, Problem, Source};
+use crate::model::{Combination, Model, Name, Place, Remark};
+use crate::proof;
+use crate::quantity::{Dimension, Style};
+use crate::result::{
+    Caution, CombinationResult, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Residuals, Verdict,
+};
+use crate::solve::{self, SolveError, Threshold};
+
+/// How many errors a result holds; the rest are counted.
+const ERRORS_KEPT: usize = 1000;
+
+/// What checking one job came to.
+#[derive(Debug, Clone, PartialEq)]
+pub struct JobRun {
+    /// The finished result; its digest is left to the report that prints one.
+    pub result: JobResult,
+    /// Its errors drawn as text, each at its place in the file; empty where there are none.
+    pub drawn_errors: String,
+}
+
+/// Reads, solves, proves and checks the job in `bytes`; `file` is what messages call it.
+///
+/// Never fails as a whole: what is wrong with the job stands in the result's errors.
+pub fn check_bytes(file: &str, bytes: &[u8]) -> JobRun {
+    match job::decode(bytes) {
+        Ok(text) => check_text(file, &text),
+        Err(undecoded) => {
+            let source = Source::new(file, undecoded.text);
+            unread(file, &source, &[undecoded.problem])
+        }
+    }
+}
+
+/// Reads, solves, proves and checks the job in `text`; see [`check_bytes`].
+pub fn check_text(file: &str, text: &str) -> JobRun {
+    let source = Source::new(file, text);
+    match job::read(&source.text) {
+        Ok(model) => solve_and_check(&source, &model),
+        Err(problems) => unread(file, &source, &problems),
+    }
+}
+
+/// A job that could not be read.
+fn unread(file: &str, source: &Source, problems: &[Problem]) -> JobRun {
+    let mut result = JobResult::unread(file);
+    let drawn_errors = put_errors(&mut result, source, problems);
+    JobRun { result, drawn_errors }
+}
+
+/// Enters problems into a result that then is an error, and draws them.
+fn put_errors(result: &mut JobResult, source: &Source, problems: &[Problem]) -> String {
+    result.status = JobStatus::Error;
+    result.errors_total = problems.len();
+    let entry = |problem: &Problem| {
+        let (line, column) = source.line_and_column(&problem.place);
+        ErrorEntry {
+            message: problem.message.clone(),
+            line: Some(line),
+            column: Some(column),
+            help: problem.help.clone(),
+            combination: problem.combination.clone(),
+        }
+    };
+    result.errors = problems.iter().take(ERRORS_KEPT).map(entry).collect();
+    job::render::draw_all(problems, source)
+}
+
+fn solve_and_check(source: &Source, model: &Model) -> JobRun {
+    let style = Style { units: model.units, ..Style::default() };
+    let mut solved = Solved::default();
+    for index in 0..model.combinations.len() {
+        solved.combination(model, index, style);
+    }
+    let line_of = |place: &crate::model::Place| source.line_and_column(place).0;
+    let lines: Vec<usize> = model.limits.iter().map(|limit| line_of(&limit.place)).collect();
+    let since = |index: usize| solved.indices.binary_search(&index).ok();
+    let checks: Vec<_> = solved
+        .indices
+        .iter()
+        .enumerate()
+        .map(|(at, &index)| {
+            check::combination(model, index, &solved.results[at], &solved.zeros[at], &since, &solved.results, &lines)
+        })
+        .collect();
+    for (result, checks) in solved.results.iter_mut().zip(checks) {
+        result.checks = checks;
+    }
+
+    let observed: Vec<Observed> = (0..solved.results.len())
+        .map(|at| Observed { index: solved.indices[at], result: &solved.results[at], zeros: &solved.zeros[at] })
+        .collect();
+    let mut remarks = check::cautions(model, &observed);
+    remarks.extend(model.remarks.iter().cloned());
+    remarks.extend(tolerances(model));
+    remarks.append(&mut solved.remarks);
+
+    let heading = &model.heading;
+    let mut result = JobResult {
+        title: heading.title.clone(),
+        reference: heading.reference.clone(),
+        prepared_by: heading.prepared_by.clone(),
+        checked_by: heading.checked_by.clone(),
+        date: heading.date.clone(),
+        note: heading.note.clone(),
+        datum: model.datum.map(|datum| datum.value),
+        units: model.units,
+        governing: check::governing(&solved.results),
+        envelope: check::envelope(&solved.results),
+        materials: model.materials.iter().map(material_entry).collect(),
+        ..JobResult::unread(&source.file)
+    };
+    for remark in remarks {
+        if remark.caution {
+            let line = remark.place.as_ref().map(line_of);
+            result.cautions.push(Caution { about: remark.about, text: remark.text, line });
+        } else {
+            result.notes.push(Note { about: remark.about, text: remark.text });
+        }
+    }
+    result.combinations = solved.results;
+    result.status = status(&result);
+    let drawn_errors = if solved.problems.is_empty() {
+        String::new()
+    } else {
+        put_errors(&mut result, source, &solved.problems)
+    };
+    JobRun { result, drawn_errors }
+}
+
+/// What the combinations came to; one that cannot be solved is a problem and has no result.
+#[derive(Default)]
+struct Solved {
+    /// The index of each result in the model's combinations.
+    indices: Vec<usize>,
+    results: Vec<CombinationResult>,
+    zeros: Vec<Vec<Threshold>>,
+    problems: Vec<Problem>,
+    remarks: Vec<Remark>,
+}
+
+impl Solved {
+    fn combination(&mut self, model: &Model, index: usize, style: Style) {
+        let combination = &model.combinations[index];
+        let (mut members, mut zeros) = (Vec::with_capacity(model.members.len()), Vec::with_capacity(model.members.len()));
+        let mut residuals = Residuals::default();
+        let problems = self.problems.len();
+        for member in &model.members {
+            let place = &member.place;
+            match solve::member(model, member, combination) {
+                Ok(solution) => {
+                    let own = proof::member(model, member, combination, &solution.member);
+                    if own.largest() > Residuals::LIMIT {
+                        self.problems.push(unproven(member.name.as_ref(), own, combination, place));
+                    }
+                    residuals = residuals.worse(own);
+                    self.note_free(member.name.as_ref(), &combination.name, &solution.free);
+                    members.push(solution.member);
+                    zeros.push(solution.zero);
+                }
+                Err(error) => self.problems.push(unsolved(&error, combination, place, style)),
+            }
+        }
+        if self.problems.len() > problems {
+            return;
+        }
+        let factor = |&case: &usize| (model.cases[case].name.clone(), combination.factors[case]);
+        self.indices.push(index);
+        self.zeros.push(zeros);
+        self.results.push(CombinationResult {
+            name: combination.name.clone(),
+            purpose: combination.purpose,
+            factors: combination.shown.iter().map(factor).collect(),
+            without: Vec::new(),
+            members,
+            points: Vec::new(),
+            holds: Vec::new(),
+            bodies: Vec::new(),
+            watches: Vec::new(),
+            totals: None,
+            residuals,
+            checks: Vec::new(),
+        });
+    }
+
+    /// Says once a member what nothing holds and nothing pushes.
+    fn note_free(&mut self, member: &str, combination: &str, free: &[(Name, Name)]) {
+        let about = format!("member.{member}");
+        if free.is_empty() || self.remarks.iter().any(|remark| remark.about == about) {
+            return;
+        }
+        let parts: Vec<String> = free.iter().map(|(from, to)| format!("from `{from}` to `{to}`")).collect();
+        self.remarks.push(Remark {
+            about,
+            text: format!(
+                "in `{combination}` nothing holds it along its axis {} and nothing pushes it: its place there is the one that moves its ends least",
+                parts.join(" and "),
+            ),
+            place: None,
+            caution: false,
+        });
+    }
+}
+
+/// A combination that has no solution.
+fn unsolved(error: &SolveError, combination: &Combination, place: &Place, style: Style) -> Problem {
+    let (message, help) = match error {
+        SolveError::Pushed { member, part, newtons, toward } => (
+            format!(
+                "in `{}` nothing holds member `{member}` {part}against {} toward its {toward}: it would slide away",
+                combination.name,
+                style.quantity(Dimension::Force, *newtons),
+            ),
+            Some("hold it with a support that works in that direction, or balance the load".to_owned()),
+        ),
+        other => (format!("in `{}`: {other}", combination.name), None),
+    };
+    let mut problem = Problem::new(place, message, help);
+    problem.combination = Some(combination.name.clone());
+    problem
+}
+
+/// A result that does not close.
+fn unproven(member: &str, residuals: Residuals, combination: &Combination, place: &Place) -> Problem {
+    let message = format!(
+        "in `{}` the result of member `{member}` does not prove itself: residuals of equilibrium {:.1e}, compatibility {:.1e}, energy {:.1e}, where {:.0e} is allowed",
+        combination.name, residuals.equilibrium, residuals.compatibility, residuals.energy, Residuals::LIMIT,
+    );
+    let help = "look for stiffnesses or lengths that differ by very many powers of ten".to_owned();
+    let mut problem = Problem::new(place, message, Some(help));
+    problem.combination = Some(combination.name.clone());
+    problem
+}
+
+/// Where tolerances are written, that the nominal values were used.
+fn tolerances(model: &Model) -> Option<Remark> {
+    let first = model.tolerances.first()?;
+    let count = model.tolerances.len();
+    let values = if count == 1 { "value bears a tolerance".to_owned() } else { format!("{count} values bear tolerances") };
+    Some(Remark {
+        about: "job".into(),
+        text: format!("{values}: the nominal values were used"),
+        place: Some(first.clone()),
+        caution: false,
+    })
+}
+
+fn material_entry(material: &crate::catalogue::Material) -> MaterialEntry {
+    MaterialEntry {
+        id: material.id.clone(),
+        modulus: material.modulus.value,
+        expansion: material.expansion.map(|value| value.value),
+        density: material.density.map(|value| value.value),
+        yield_strength: material.yield_strength.first().map(|&(_, value)| value.value),
+        ultimate: material.ultimate.map(|value| value.value),
+        proof: material.proof.map(|value| value.value),
+        crushing: material.crushing.map(|value| value.value),
+        family: material.family.clone(),
+        source: material.source.clone(),
+        like: material.like.clone(),
+    }
+}
+
+fn status(result: &JobResult) -> JobStatus {
+    let mut checks = result.combinations.iter().flat_map(|combination| &combination.checks).peekable();
+    if checks.peek().is_none() {
+        JobStatus::Unchecked
+    } else if checks.any(|check| check.status == Verdict::Fail) {
+        JobStatus::Fail
+    } else {
+        JobStatus::Pass
+    }
+}
