@@ -7,7 +7,7 @@ mod common;
 mod dense;
 
 use common::chain::{At, Chain, Hold, Kind, Random, Segment, Support};
-use common::{only_member, random_member};
+use common::{checked, only_member, random_member};
 use dense::{Found, State, enumerate};
 use lengthwise::result::{JobResult, JobStatus};
 
@@ -27,7 +27,7 @@ fn states_and_values_are_those_of_the_enumeration() {
     for number in 0..2_000 {
         let chain = random_member::member(&mut random);
         let job = chain.job();
-        let result = lengthwise::check_text("random.toml", &job);
+        let result = checked("random.toml", &job);
         match enumerate(&chain) {
             Found::One(state) => {
                 assert!(

@@ -8,7 +8,7 @@ mod common;
 mod members;
 
 use common::chain::{Chain, Hold, Kind, Random, Segment};
-use common::{only_member, solved};
+use common::{checked, only_member, solved};
 use lengthwise::quantity::Force;
 use lengthwise::result::{JobStatus, MemberResult};
 use members::{
@@ -47,7 +47,7 @@ impl Outcome {
 
     /// The outcome of a member that can be solved; `None` where a force pushes a loose part.
     fn try_of(chain: &Chain) -> Option<Self> {
-        let result = lengthwise::check_text("theorem.toml", &chain.job());
+        let result = checked("theorem.toml", &chain.job());
         (result.status != JobStatus::Error).then(|| Self::of(only_member(&result)))
     }
 
