@@ -4,7 +4,6 @@ use super::cursor::Cursor;
 use super::number::{Number, number};
 use super::{Literal, LiteralError, read, refuse};
 use crate::catalogue::Strength;
-use crate::quantity::exact::Exact;
 use crate::quantity::unit::{self, Pound};
 use crate::quantity::{Length, Stress};
 
