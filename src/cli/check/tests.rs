@@ -107,8 +107,14 @@ fn the_status_is_the_gravest_that_occurred() {
         (&["passes", "fails", "unchecked"], Status::Fails),
         (&["broken", "fails"], Status::Unsolved),
     ] {
-        let jobs: Vec<(String, &str)> = (0..).map(|n| format!("{n}.toml")).zip(words.iter().copied()).collect();
-        let jobs: Vec<(&str, &str)> = jobs.iter().map(|(path, word)| (path.as_str(), *word)).collect();
+        let jobs: Vec<(String, &str)> = (0..)
+            .map(|n| format!("{n}.toml"))
+            .zip(words.iter().copied())
+            .collect();
+        let jobs: Vec<(&str, &str)> = jobs
+            .iter()
+            .map(|(path, word)| (path.as_str(), *word))
+            .collect();
         let folder = folder(&jobs);
         assert_eq!(check(&[text(folder.path())]).status, status, "{words:?}");
     }
@@ -132,7 +138,11 @@ fn jobs_are_found_at_any_depth_in_order_and_hidden_ones_left_alone() {
         ("notes.txt", "fails"),
     ]);
     let ended = check(&[text(folder.path()), "--brief"]);
-    let expected = [("unchecked", "a.toml"), ("fail", "1.toml"), ("pass", "2.toml")];
+    let expected = [
+        ("unchecked", "a.toml"),
+        ("fail", "1.toml"),
+        ("pass", "2.toml"),
+    ];
     let expected = expected.map(|(verdict, file)| (verdict.to_owned(), file.to_owned()));
     assert_eq!(lines(&ended), expected);
     assert!(ended.out.contains("\nLooked at 3 files, "), "{}", ended.out);
@@ -153,8 +163,16 @@ fn a_file_that_is_no_job_is_named_and_not_counted() {
     let ended = check(&[text(folder.path()), "--brief"]);
     assert_eq!(ended.status, Status::Holds);
     assert_eq!(lines(&ended).len(), 1);
-    assert!(ended.errors.starts_with("passed over: "), "{}", ended.errors);
-    assert!(ended.errors.contains("tool.toml: no job"), "{}", ended.errors);
+    assert!(
+        ended.errors.starts_with("passed over: "),
+        "{}",
+        ended.errors
+    );
+    assert!(
+        ended.errors.contains("tool.toml: no job"),
+        "{}",
+        ended.errors
+    );
 }
 
 #[test]
@@ -185,9 +203,19 @@ fn a_folder_without_a_job_is_refused_before_any_work_or_once_that_is_known() {
 fn each_file_is_checked_once_by_whatever_way_it_is_named() {
     let folder = folder(&[("a.toml", "passes"), ("b.toml", "passes")]);
     let a = folder.path().join("a.toml");
-    let roundabout = folder.path().join("../").join(folder.path().file_name().unwrap());
-    let ended = check(&[text(&a), text(folder.path()), text(&roundabout), text(&a), "--brief"]);
+    let roundabout = folder
+        .path()
+        .join("../")
+        .join(folder.path().file_name().unwrap());
+    let ended = check(&[
+        text(&a),
+        text(folder.path()),
+        text(&roundabout),
+        text(&a),
+        "--brief",
+    ]);
     assert_eq!(lines(&ended).len(), 2, "{}", ended.out);
+    assert_eq!((ended.status, ended.errors.as_str()), (Status::Holds, ""));
 }
 
 #[cfg(unix)]
@@ -204,8 +232,16 @@ fn links_are_followed_and_those_that_loop_or_lead_nowhere_are_named() {
     let ended = check(&[text(folder.path()), "--brief"]);
     assert_eq!(ended.status, Status::Holds, "{}", ended.errors);
     assert_eq!(lines(&ended).len(), 3, "{}", ended.out);
-    assert!(ended.errors.contains("loop: leads back to"), "{}", ended.errors);
-    assert!(ended.errors.contains("dead: a link that leads nowhere"), "{}", ended.errors);
+    assert!(
+        ended.errors.contains("loop: leads back to"),
+        "{}",
+        ended.errors
+    );
+    assert!(
+        ended.errors.contains("dead: a link that leads nowhere"),
+        "{}",
+        ended.errors
+    );
 
     // Called like a job, it may hide one.
     symlink(at("nothing"), at("dead.toml")).unwrap();
@@ -214,19 +250,34 @@ fn links_are_followed_and_those_that_loop_or_lead_nowhere_are_named() {
 
 #[test]
 fn a_panic_in_one_job_is_its_error_and_ends_no_other() {
-    let folder = folder(&[("a.toml", "panics"), ("b.toml", "not finite"), ("c.toml", "fails")]);
+    let folder = folder(&[
+        ("a.toml", "panics"),
+        ("b.toml", "not finite"),
+        ("c.toml", "fails"),
+    ]);
     let ended = check(&[text(folder.path()), "--brief"]);
     assert_eq!(ended.status, Status::Unsolved);
-    let verdicts: Vec<String> = lines(&ended).into_iter().map(|(verdict, _)| verdict).collect();
+    let verdicts: Vec<String> = lines(&ended)
+        .into_iter()
+        .map(|(verdict, _)| verdict)
+        .collect();
     assert_eq!(verdicts, ["error", "error", "fail"]);
-    assert!(ended.errors.contains("please report it: `energy` is not a finite number"));
+    assert!(
+        ended
+            .errors
+            .contains("please report it: `energy` is not a finite number")
+    );
 }
 
 #[test]
 fn standard_input_is_a_job() {
     let ended = check_with_input(&["-", "-"], "[job]\n# fails\n");
     assert_eq!(ended.status, Status::Fails);
-    assert!(ended.out.contains("\nfile         standard input\n"), "{}", ended.out);
+    assert!(
+        ended.out.contains("\nfile         standard input\n"),
+        "{}",
+        ended.out
+    );
     assert!(ended.out.contains("\nLooked at 1 file, "), "{}", ended.out);
 }
 
@@ -243,7 +294,10 @@ fn errors_are_drawn_beside_text_and_stand_within_json() {
     assert_eq!(document.jobs[0].errors.len(), 2);
     // sha256sum of the bytes `[job]`, line feed, `# passes`, line feed.
     let digest = document.jobs[1].digest.as_deref().unwrap();
-    assert_eq!(digest, "sha256:883583b2e252e6f86f9bf74c8cea1bf645527fabcc1254a80006a1228c3f40bc");
+    assert_eq!(
+        digest,
+        "sha256:883583b2e252e6f86f9bf74c8cea1bf645527fabcc1254a80006a1228c3f40bc"
+    );
     let elongation = document.jobs[1].combinations[0].members[0].elongation;
     assert_eq!(elongation.value.to_bits(), (0.1_f64 + 0.2).to_bits());
 }
@@ -275,7 +329,11 @@ fn an_output_over_an_input_is_refused_and_the_input_kept() {
     let before = fs::read(&job).unwrap();
     let ended = check(&[text(folder.path()), "--output", text(&job)]);
     assert_eq!((ended.status, ended.out.as_str()), (Status::Refused, ""));
-    assert!(ended.errors.contains("would replace a job"), "{}", ended.errors);
+    assert!(
+        ended.errors.contains("would replace a job"),
+        "{}",
+        ended.errors
+    );
     assert_eq!(fs::read(&job).unwrap(), before);
 }
 
@@ -286,7 +344,11 @@ impl Write for Short {
     fn write(&mut self, bytes: &[u8]) -> io::Result<usize> {
         let taken = bytes.len().min(self.0);
         self.0 -= taken;
-        if taken == 0 { Err(self.1.into()) } else { Ok(taken) }
+        if taken == 0 {
+            Err(self.1.into())
+        } else {
+            Ok(taken)
+        }
     }
 
     fn flush(&mut self) -> io::Result<()> {
@@ -301,7 +363,12 @@ fn a_closed_pipe_ends_quietly_and_a_full_disk_is_told() {
         (io::ErrorKind::BrokenPipe, Status::Fails, false),
         (io::ErrorKind::StorageFull, Status::Refused, true),
     ] {
-        for form in [Form::Whole, Form::Brief, Form::Csv(csv::Table::Stations), Form::Json] {
+        for form in [
+            Form::Whole,
+            Form::Brief,
+            Form::Csv(csv::Table::Stations),
+            Form::Json,
+        ] {
             let plan = Plan {
                 paths: vec![folder.path().to_owned()],
                 form,
