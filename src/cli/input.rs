@@ -18,7 +18,7 @@ pub(super) enum Source {
     Named(PathBuf),
     /// A file found in a folder, with the folder's index.
     Found(PathBuf, usize),
-    /// What cannot be read in a folder, and why.
+    /// What cannot be read, and why.
     Unreadable(PathBuf, String),
 }
 
@@ -183,7 +183,7 @@ impl Sources {
     }
 }
 
-/// The refusal of a folder without a job.
+/// The complaint about a folder without a job.
 pub(super) fn no_job_in(folder: &Path) -> String {
     format!("{}: no job file in this folder", folder.display())
 }

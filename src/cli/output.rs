@@ -118,9 +118,10 @@ fn follow(path: &Path) -> io::Result<PathBuf> {
     Err(io::Error::other("its links lead round in a circle"))
 }
 
-#[cfg(all(test, unix))]
+#[cfg(test)]
 mod tests {
     use super::*;
+    #[cfg(unix)]
     use std::os::unix::fs::{PermissionsExt, symlink};
 
     fn names(folder: &Path) -> Vec<String> {
@@ -138,6 +139,7 @@ mod tests {
         assert_eq!(names(folder.path()), ["report.txt"]);
     }
 
+    #[cfg(unix)]
     #[test]
     fn permissions_of_an_existing_file_are_kept() {
         let folder = tempfile::tempdir().unwrap();
@@ -150,6 +152,7 @@ mod tests {
         assert_eq!(fs::read(&path).unwrap(), b"new");
     }
 
+    #[cfg(unix)]
     #[test]
     fn a_link_is_followed_and_stays_a_link_even_to_a_file_that_is_not_there_yet() {
         let folder = tempfile::tempdir().unwrap();
@@ -163,6 +166,7 @@ mod tests {
         }
     }
 
+    #[cfg(unix)]
     #[test]
     fn links_in_a_circle_are_refused() {
         let folder = tempfile::tempdir().unwrap();
@@ -181,6 +185,7 @@ mod tests {
         assert!(occupied.ends_with("it is a folder"), "{occupied}");
     }
 
+    #[cfg(unix)]
     #[test]
     fn a_device_is_written_straight_and_a_full_one_is_told() {
         Output::at(Path::new("/dev/null"))

@@ -1,5 +1,11 @@
 //! `lengthwise check PATH…`: checks job files, and folders of them.
 
+mod arguments;
+#[cfg(test)]
+mod tests;
+
+pub(super) use arguments::CheckArguments;
+
 use super::input::{self, Source, Sources};
 use super::output::Output;
 use super::{Console, Status};
@@ -8,152 +14,13 @@ use crate::report::text::{self, Layout};
 use crate::report::{all_finite, csv, json};
 use crate::result::{Counts, ErrorEntry, JobResult, JobStatus};
 use crate::run::JobRun;
-use clap::{Args, ValueEnum};
+use arguments::{Form, Plan};
 use std::io::{self, Read, Write};
 use std::panic::{AssertUnwindSafe, catch_unwind};
-use std::path::PathBuf;
 use unicode_width::UnicodeWidthStr;
 
-#[cfg(test)]
-mod tests;
-
-/// Significant digits of a text report, unless the command line says otherwise.
-const DIGITS: usize = 4;
-
-/// Check job files, and folders of them
-///
-/// Solves every combination of every member, proves each result, holds it against the job's limits
-/// and reports it. In a folder the job files are its .toml files at any depth, hidden ones left
-/// alone; one bad file never stops the others.
-#[derive(Debug, Args)]
-#[command(after_help = super::EXIT_STATUS)]
-pub(super) struct CheckArguments {
-    /// Job files and folders of them; - reads one job from standard input
-    #[arg(required = true, value_name = "PATH")]
-    paths: Vec<PathBuf>,
-
-    /// How the results are written
-    #[arg(
-        long,
-        value_enum,
-        default_value = "table",
-        hide_possible_values = false
-    )]
-    format: Format,
-
-    /// Which table --format csv writes: members, segments, layers, stations, supports, checks,
-    /// governing or envelope
-    #[arg(long, value_name = "NAME", value_parser = table_by_name)]
-    table: Option<csv::Table>,
-
-    /// Write the results to this file, whole or not at all, in place of standard output
-    #[arg(long, value_name = "FILE")]
-    output: Option<PathBuf>,
-
-    /// Governing checks alone; for several jobs one line a job, then the counts
-    #[arg(long)]
-    brief: bool,
-
-    /// Significant digits of the tables, from 1 to 17; 4 unless this says otherwise
-    #[arg(long, value_name = "N", value_parser = significant_digits)]
-    digits: Option<usize>,
-
-    /// A job in which nothing was checked counts as one that fails
-    #[arg(long)]
-    require_checks: bool,
-}
-
-#[derive(Debug, Clone, Copy, PartialEq, Eq, ValueEnum)]
-enum Format {
-    /// Text for people
-    Table,
-    /// Everything, in SI, in numbers that read back exactly
-    Json,
-    /// One table, in SI; --table says which
-    Csv,
-}
-
-fn table_by_name(text: &str) -> Result<csv::Table, String> {
-    if matches!(text, "points" | "bodies" | "holds" | "watches") {
-        return Err(
-            "this table comes with assemblies, which this version does not read".to_owned(),
-        );
-    }
-    let found = csv::Table::ALL.iter().find(|(name, _)| *name == text);
-    found.map(|(_, table)| *table).ok_or_else(|| {
-        let names = csv::Table::ALL.map(|(name, _)| name);
-        format!("the tables are {}", names.join(", "))
-    })
-}
-
-fn significant_digits(text: &str) -> Result<usize, String> {
-    let digits = text.parse().ok().filter(|digits| (1..=17).contains(digits));
-    digits.ok_or_else(|| "write a whole number from 1 to 17".to_owned())
-}
-
-/// What the arguments come to, free of contradictions.
-#[derive(Debug)]
-pub(super) struct Plan {
-    paths: Vec<PathBuf>,
-    form: Form,
-    output: Option<PathBuf>,
-    digits: usize,
-    require_checks: bool,
-}
-
-#[derive(Debug, Clone, Copy, PartialEq, Eq)]
-enum Form {
-    Whole,
-    Brief,
-    Json,
-    Csv(csv::Table),
-}
-
-impl CheckArguments {
-    /// The plan of a run.
-    ///
-    /// # Errors
-    /// Options that contradict one another.
-    pub(super) fn plan(&self) -> Result<Plan, String> {
-        let form = match (self.format, self.table) {
-            (Format::Table, None) if self.brief => Form::Brief,
-            (Format::Table, None) => Form::Whole,
-            (Format::Json, None) => Form::Json,
-            (Format::Csv, Some(table)) => Form::Csv(table),
-            (Format::Csv, None) => {
-                let names = csv::Table::ALL.map(|(name, _)| name).join(", ");
-                return Err(format!(
-                    "--format csv writes one table: say which with --table NAME ({names})"
-                ));
-            }
-            (Format::Table | Format::Json, Some(_)) => {
-                return Err(
-                    "--table says which table --format csv writes: it goes with \
-                            --format csv alone"
-                        .to_owned(),
-                );
-            }
-        };
-        let as_text = matches!(form, Form::Whole | Form::Brief);
-        if self.brief && !as_text {
-            return Err(
-                "--brief shortens the text report: JSON and CSV are always whole".to_owned(),
-            );
-        }
-        if self.digits.is_some() && !as_text {
-            return Err(
-                "--digits rounds the text report: numbers of JSON and CSV are exact".to_owned(),
-            );
-        }
-        Ok(Plan {
-            paths: self.paths.clone(),
-            form,
-            output: self.output.clone(),
-            digits: self.digits.unwrap_or(DIGITS),
-            require_checks: self.require_checks,
-        })
-    }
-}
+/// Why a file of a folder is passed over.
+const NO_JOB: &str = "no job: it has no `job`, `member` or `point` table";
 
 /// What checks one job: its name and its bytes in, its result out.
 type Checker = fn(&str, &[u8]) -> JobRun;
@@ -277,7 +144,8 @@ impl<'a> Run<'a> {
         errors: &mut dyn Write,
         check: Checker,
     ) -> io::Result<()> {
-        let mut jobs_in = vec![0_usize; sources.folders.len()];
+        // Whether a folder holds a job, once a file of it has been looked at.
+        let mut holds_job: Vec<Option<bool>> = vec![None; sources.folders.len()];
         for source in &sources.jobs {
             let name = source.name();
             let bytes = source.read(input);
@@ -286,14 +154,14 @@ impl<'a> Run<'a> {
                 Err(reason) => fault(&name, reason),
             };
             if let Source::Found(_, folder) = source {
-                let is_job = job.result.status != JobStatus::Error
-                    || bytes.as_deref().is_ok_and(|bytes| !is_no_job(bytes));
-                if !is_job && bytes.is_ok() {
-                    self.tell(errors, &format!("passed over: {name}: no job, since it has no `job`, `member` or `point`\n"))?;
-                    continue;
+                let failed = job.result.status == JobStatus::Error;
+                let is_job = !failed || !bytes.as_deref().is_ok_and(is_no_job);
+                if let Some(holds_job) = holds_job.get_mut(*folder) {
+                    *holds_job = Some(is_job || *holds_job == Some(true));
                 }
-                if let Some(count) = jobs_in.get_mut(*folder) {
-                    *count += 1;
+                if !is_job {
+                    self.tell(errors, &format!("passed over: {name}: {NO_JOB}\n"))?;
+                    continue;
                 }
             }
             if self.form == Form::Json {
@@ -305,14 +173,11 @@ impl<'a> Run<'a> {
             self.status = self.status.max(self.status_of(&job.result));
             self.job(job.result)?;
         }
-        for (folder, _) in sources
-            .folders
-            .iter()
-            .zip(&jobs_in)
-            .filter(|(_, jobs)| **jobs == 0)
-        {
-            self.tell(errors, &format!("error: {}\n", input::no_job_in(folder)))?;
-            self.status = self.status.max(Status::Refused);
+        for (folder, holds_job) in sources.folders.iter().zip(&holds_job) {
+            if *holds_job == Some(false) {
+                self.tell(errors, &format!("error: {}\n", input::no_job_in(folder)))?;
+                self.status = self.status.max(Status::Refused);
+            }
         }
         self.end()
     }

@@ -215,6 +215,7 @@ fn each_file_is_checked_once_by_whatever_way_it_is_named() {
         "--brief",
     ]);
     assert_eq!(lines(&ended).len(), 2, "{}", ended.out);
+    assert_eq!((ended.status, ended.errors.as_str()), (Status::Holds, ""));
 }
 
 #[cfg(unix)]

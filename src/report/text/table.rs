@@ -5,13 +5,12 @@
 //! below, under the same identity columns.
 
 use super::Layout;
-use super::words::{paint, printable};
+use super::words::{broken, paint, printable, split_at_column};
 use comfy_table::{
     Cell, CellAlignment, ColumnConstraint, LineStyle, Table as Grid, TableStyle, Width,
 };
-use std::borrow::Cow;
 use std::io::{self, Write};
-use unicode_width::{UnicodeWidthChar, UnicodeWidthStr};
+use unicode_width::UnicodeWidthStr;
 
 /// Blanks between two columns.
 const BETWEEN: usize = 2;
@@ -261,45 +260,6 @@ fn write_part(out: &mut dyn Write, columns: &[&Column], layout: &Layout) -> io::
         }
     }
     Ok(())
-}
-
-/// A text broken into lines of at most `width` columns: after a blank or a `/` where there is one,
-/// else within a word.
-fn broken(text: &str, width: usize) -> Cow<'_, str> {
-    if text.width() <= width {
-        return Cow::Borrowed(text);
-    }
-    let mut lines = String::new();
-    let mut used = 0;
-    for word in text.split_inclusive([' ', '/']) {
-        if used > 0 && used + word.trim_end().width() > width {
-            lines.truncate(lines.trim_end().len());
-            lines.push('\n');
-            used = 0;
-        }
-        for character in word.chars() {
-            let wide = character.width().unwrap_or(0);
-            if used + wide > width && character != ' ' {
-                lines.push('\n');
-                used = 0;
-            }
-            lines.push(character);
-            used += wide;
-        }
-    }
-    Cow::Owned(lines)
-}
-
-/// A line's part before a display column and from it on, if it reaches that far.
-fn split_at_column(line: &str, column: usize) -> Option<(&str, &str)> {
-    let mut used = 0;
-    for (index, character) in line.char_indices() {
-        if used == column {
-            return line.split_at_checked(index);
-        }
-        used += character.width().unwrap_or(0);
-    }
-    None
 }
 
 /// Widths beyond what the table library counts in are cut; no page is that wide.

@@ -3,7 +3,7 @@
 use crate::result::{JobStatus, Verdict};
 use std::borrow::Cow;
 use std::io::{self, Write};
-use unicode_width::UnicodeWidthStr;
+use unicode_width::{UnicodeWidthChar, UnicodeWidthStr};
 
 /// A verdict in the report's words.
 pub(super) fn verdict(verdict: Verdict) -> &'static str {
@@ -85,6 +85,45 @@ pub(super) fn wrapped(out: &mut dyn Write, lead: &str, text: &str, width: usize)
         begun = true;
     }
     writeln!(out, "{}", line.trim_end())
+}
+
+/// A text broken into lines of at most `width` columns: after a blank or a `/` where there is one,
+/// else within a word.
+pub(super) fn broken(text: &str, width: usize) -> Cow<'_, str> {
+    if text.width() <= width {
+        return Cow::Borrowed(text);
+    }
+    let mut lines = String::new();
+    let mut used = 0;
+    for word in text.split_inclusive([' ', '/']) {
+        if used > 0 && used + word.trim_end().width() > width {
+            lines.truncate(lines.trim_end().len());
+            lines.push('\n');
+            used = 0;
+        }
+        for character in word.chars() {
+            let wide = character.width().unwrap_or(0);
+            if used + wide > width && character != ' ' {
+                lines.push('\n');
+                used = 0;
+            }
+            lines.push(character);
+            used += wide;
+        }
+    }
+    Cow::Owned(lines)
+}
+
+/// A line's part before a display column and from it on, if it reaches that far.
+pub(super) fn split_at_column(line: &str, column: usize) -> Option<(&str, &str)> {
+    let mut used = 0;
+    for (index, character) in line.char_indices() {
+        if used == column {
+            return line.split_at_checked(index);
+        }
+        used += character.width().unwrap_or(0);
+    }
+    None
 }
 
 #[cfg(test)]
