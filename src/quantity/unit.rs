@@ -103,12 +103,12 @@ const fn unit(name: &'static str, powers: Powers, over: f64, under: f64) -> Unit
 }
 
 /// 0.453 592 37 kg × 9.806 65 m/s², times 1e13.
-const POUND_FORCE: f64 = 44_482_216_152_605.0;
+pub(super) const POUND_FORCE: f64 = 44_482_216_152_605.0;
 /// 0.3048 m, cubed, times 1e12.
-const CUBIC_FOOT: f64 = 28_316_846_592.0;
+pub(super) const CUBIC_FOOT: f64 = 28_316_846_592.0;
 
 /// π to 32 digits, as the sum of two doubles.
-const PI: Twofold = Twofold {
+pub(super) const PI: Twofold = Twofold {
     high: std::f64::consts::PI,
     low: 1.224_646_799_147_353_2e-16,
 };
@@ -147,7 +147,7 @@ pub(super) const UNITS: &[Unit] = &[
     unit("bar", Powers::STRESS, 1e5, 1.0),
     // lbf over (0.0254 m)²; the denominator is 0.000 645 16 times the power of ten.
     unit("psi", Powers::STRESS, POUND_FORCE, 6_451_600_000.0),
-    unit("Msi", Powers::STRESS, POUND_FORCE, 6_451.6),
+    unit("Msi", Powers::STRESS, 10.0 * POUND_FORCE, 64_516.0),
     unit("g", Powers::MASS, 1.0, 1e3),
     unit("t", Powers::MASS, 1e3, 1.0),
     // lb over (0.3048 m)³.
@@ -281,5 +281,62 @@ pub(super) fn one_apart(a: &str, b: &str) -> bool {
         (a, [_, b @ ..]) if a == b => true,
         ([x, y, a @ ..], [v, w, b @ ..]) => x == w && y == v && a == b,
         _ => false,
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::{DEGREE, UNITS, nearest, one_apart};
+
+    #[test]
+    fn factors_are_fractions_of_whole_numbers_that_doubles_hold() {
+        let whole = |number: f64| number.fract() == 0.0 && number.abs() <= 9_007_199_254_740_992.0;
+        for unit in UNITS.iter().filter(|unit| unit.powers != DEGREE.powers) {
+            let factor = unit.factor;
+            assert!(
+                whole(factor.over.high) && factor.over.low == 0.0,
+                "{}",
+                unit.name
+            );
+            assert!(
+                whole(factor.under.high) && factor.under.low == 0.0,
+                "{}",
+                unit.name
+            );
+        }
+    }
+
+    #[test]
+    fn no_name_stands_twice() {
+        for (at, unit) in UNITS.iter().enumerate() {
+            assert!(
+                UNITS[..at].iter().all(|other| other.name != unit.name),
+                "{}",
+                unit.name
+            );
+        }
+    }
+
+    #[test]
+    fn one_apart_is_one_letter() {
+        for (a, b) in [
+            ("yeild", "yield"),
+            ("yiel", "yield"),
+            ("yieldd", "yield"),
+            ("yeeld", "yield"),
+        ] {
+            assert!(one_apart(a, b), "{a} {b}");
+        }
+        for (a, b) in [("yed", "yield"), ("dleiy", "yield"), ("", "ab")] {
+            assert!(!one_apart(a, b), "{a} {b}");
+        }
+    }
+
+    #[test]
+    fn near_misses() {
+        assert_eq!(nearest("Mpa"), Some("MPa"));
+        assert_eq!(nearest("feet"), Some("ft"));
+        assert_eq!(nearest("furlong"), None);
+        assert_eq!(nearest("q"), None);
     }
 }

@@ -1,0 +1,500 @@
+//! What is refused, where, and in which words.
+
+use crate::quantity::{
+    Angle, Area, Density, Force, Length, LiteralError, Mass, MassPerLength, Measure, Ratio, Stress,
+    TemperatureInterval, ThermodynamicTemperature, read, read_movement_bound, read_stress_limit,
+};
+
+/// Holds that a text is refused with this message, that this part of it is underlined, and that
+/// the help has these words.
+#[track_caller]
+fn hold<T: std::fmt::Debug>(
+    text: &str,
+    read: Result<T, LiteralError>,
+    part: &str,
+    message: &str,
+    help: &str,
+) {
+    let error = read.expect_err(text);
+    assert_eq!(error.message, message, "{text:?}");
+    assert_eq!(&text[error.at.clone()], part, "{text:?}");
+    assert!(error.help.contains(help), "{text:?}: {}", error.help);
+}
+
+#[track_caller]
+fn refused<Q: Measure + std::fmt::Debug>(text: &str, part: &str, message: &str, help: &str) {
+    hold(text, read::<Q>(text), part, message, help);
+}
+
+const LENGTHS: &str = "write it as in \"2.85 m\"; units of a length: m mm cm";
+const NUMBERS: &str = "a number is written as `2.85`, `1_250`, `28.5e6`, `5/8` or `1-1/2`";
+
+#[test]
+fn what_is_no_number() {
+    refused::<Length>(
+        "",
+        "",
+        "nothing is written here, where a length is expected",
+        LENGTHS,
+    );
+    refused::<Length>(
+        "  ",
+        "  ",
+        "nothing is written here, where a length is expected",
+        LENGTHS,
+    );
+    refused::<Length>(
+        "nan m",
+        "nan",
+        "`nan` is no number that can be computed with",
+        NUMBERS,
+    );
+    refused::<Length>(
+        "-inf m",
+        "inf",
+        "`inf` is no number that can be computed with",
+        NUMBERS,
+    );
+    refused::<Length>(
+        ".5 m",
+        ".5",
+        "a digit is missing before the decimal point of `.5`",
+        NUMBERS,
+    );
+    refused::<Length>(
+        "5. m",
+        "5.",
+        "a digit is missing after the decimal point of `5.`",
+        NUMBERS,
+    );
+    refused::<Length>(
+        "1,250 mm",
+        "1,250",
+        "a comma is not read in a number",
+        "`1_250`",
+    );
+    let underscore = "an underscore stands only between two digits";
+    refused::<Length>("1__250 mm", "_", underscore, NUMBERS);
+    refused::<Length>("1250_ mm", "_", underscore, NUMBERS);
+    refused::<Length>("_1250 mm", "_1250", underscore, NUMBERS);
+    refused::<Length>("1_.5 mm", "_", underscore, NUMBERS);
+    refused::<Length>("kN", "kN", "a number is expected before `kN`", NUMBERS);
+    refused::<Length>("-", "", "a number is missing here", NUMBERS);
+    refused::<Length>(
+        "\0",
+        "\0",
+        "a number is expected before `\u{fffd}`",
+        NUMBERS,
+    );
+}
+
+#[test]
+fn what_is_out_of_range() {
+    let range = "between 1e-150 and 1e150";
+    refused::<Length>(
+        "1e400 m",
+        "1e400",
+        "`1e400` is too large or too small",
+        range,
+    );
+    refused::<Length>(
+        "1e-400 m",
+        "1e-400",
+        "`1e-400` is too large or too small",
+        range,
+    );
+    refused::<Length>(
+        "5e-324 m",
+        "5e-324",
+        "`5e-324` is too large or too small",
+        range,
+    );
+    refused::<Length>(
+        "1e999999999999 m",
+        "1e999999999999",
+        "`1e999999999999` is too large or too small",
+        range,
+    );
+    let range = "between 1e-100 and 1e100";
+    refused::<Stress>(
+        "1e99 GPa",
+        "1e99 GPa",
+        "`1e99 GPa` is too large or too small",
+        range,
+    );
+    // A unit that overflows presses no value to zero.
+    let text = format!("1 {}m/{}m", "mm9 ".repeat(19), "m9 ".repeat(19));
+    assert!(read::<Ratio>(&text).is_err());
+    let digits = "9".repeat(1_000_000);
+    refused::<Length>(
+        &digits,
+        &digits,
+        "this text of 1000000 bytes is no value with a unit",
+        LENGTHS,
+    );
+}
+
+#[test]
+fn fractions_and_feet() {
+    refused::<Length>("1/0 in", "1/0", "this fraction divides by zero", "`5/8`");
+    refused::<Length>(
+        "1 9/8 in",
+        "9/8",
+        "the fraction `9/8` after a whole number is not less than 1",
+        "`1-1/2`",
+    );
+    refused::<Length>(
+        "1/2.5 in",
+        "2.5",
+        "the lower part of a fraction is a whole number",
+        "`5/8`",
+    );
+    let how = "as in `9 ft 4-1/2 in`";
+    refused::<Length>(
+        "9.5 ft 4 in",
+        "9.5",
+        "feet before inches are a whole number",
+        how,
+    );
+    refused::<Length>(
+        "9 ft 12 in",
+        "12",
+        "the inches after feet are less than 12",
+        how,
+    );
+    let lacks = "after feet and a number the inches lack their unit";
+    refused::<Length>("9'-4 1/2", "", lacks, how);
+    refused::<Length>("9 ft 4 mm", "mm", lacks, how);
+}
+
+#[test]
+fn units_of_the_wrong_kind_name_both() {
+    refused::<Length>(
+        "62 kN",
+        "kN",
+        "`kN` is a force; a length is expected here",
+        LENGTHS,
+    );
+    refused::<Area>(
+        "30 mm",
+        "mm",
+        "`mm` is a length; an area is expected here",
+        "5.61 cm2",
+    );
+    refused::<Stress>(
+        "1 kN m",
+        "kN m",
+        "`kN m` is a moment; a stress is expected here",
+        "345 MPa",
+    );
+    refused::<Force>(
+        "6\"",
+        "\"",
+        "`\"` is a length; a force is expected here",
+        "62 kN",
+    );
+    refused::<Force>(
+        "5 t",
+        "t",
+        "`t` is a mass; a force is expected here",
+        "write `kgf`, `tf` (metric ton-force) or `kN`",
+    );
+    refused::<Stress>(
+        "5 kg/cm2",
+        "kg/cm2",
+        "`kg/cm2` is a quantity of another kind; a stress is expected here",
+        "write `kgf`",
+    );
+    refused::<Mass>(
+        "5 kN",
+        "kN",
+        "`kN` is a force; a mass is expected here",
+        "320 kg",
+    );
+    refused::<MassPerLength>(
+        "5 kN/m",
+        "kN/m",
+        "`kN/m` is a force per length; a mass per length is expected here",
+        "4.9 kg/m",
+    );
+    refused::<Density>(
+        "5 lb",
+        "lb",
+        "`lb` is a mass; a density is expected here",
+        "7850 kg/m3",
+    );
+    refused::<Ratio>(
+        "1 deg",
+        "deg",
+        "`deg` is an angle; a strain is expected here",
+        "ue",
+    );
+    refused::<Angle>(
+        "5 %",
+        "%",
+        "`%` is a ratio; an angle is expected here",
+        "30 deg",
+    );
+    refused::<Length>(
+        "2.85 m ± 3 kN",
+        "kN",
+        "`kN` is a force; a length is expected here",
+        LENGTHS,
+    );
+}
+
+#[test]
+fn names_that_are_no_units() {
+    let near = |meant: &str| format!("did you mean `{meant}`?");
+    for (text, part, meant) in [
+        ("345 Mpa", "Mpa", "MPa"),
+        ("345 mpa", "mpa", "MPa"),
+        ("345 MPA", "MPA", "MPa"),
+        ("345 KSI", "KSI", "ksi"),
+        ("345 mbar", "mbar", "bar"),
+        ("345 N/MM2", "MM", "mm"),
+    ] {
+        let message = format!("`{part}` is no known unit");
+        refused::<Stress>(text, part, &message, &near(meant));
+    }
+    refused::<Force>("62 kn", "kn", "`kn` is no known unit", &near("kN"));
+    refused::<Force>("62 kips", "kips", "`kips` is no known unit", &near("kip"));
+    refused::<Force>("62 lbs", "lbs", "`lbs` is no known unit", &near("lb"));
+    refused::<Length>(
+        "6 inches",
+        "inches",
+        "`inches` is no known unit",
+        &near("in"),
+    );
+    refused::<ThermodynamicTemperature>("20 deg C", "C", "`C` is no known unit", &near("degC"));
+    refused::<ThermodynamicTemperature>("20 F", "F", "`F` is no known unit", &near("degF"));
+    refused::<Length>(
+        "3 furlongs",
+        "furlongs",
+        "`furlongs` is no known unit",
+        LENGTHS,
+    );
+    refused::<Force>(
+        "62 tonf",
+        "tonf",
+        "`tonf` is ambiguous: the ton is metric, short (US) or long",
+        "write `tf` for the metric ton-force (9.80665 kN), `tonf-us`",
+    );
+    refused::<Mass>(
+        "2 tons",
+        "tons",
+        "`tons` is ambiguous: the ton is metric, short (US) or long",
+        "write `t` (1000 kg)",
+    );
+    refused::<Stress>(
+        "0.6 yield",
+        "yield",
+        "a share of a strength (`yield`) is read only in the limit of a stress",
+        "345 MPa",
+    );
+}
+
+#[test]
+fn units_that_are_missing_or_go_on() {
+    refused::<Length>("2.85", "2.85", "a unit is missing after `2.85`", LENGTHS);
+    refused::<Length>(
+        "2.85 ± 3 mm",
+        "±",
+        "a unit is missing after `2.85`",
+        LENGTHS,
+    );
+    refused::<Stress>("5 N/", "5 N/", "a unit is missing after `5 N/`", "345 MPa");
+    refused::<Length>("1e5.5 m", ".5", "`.5` is no unit", LENGTHS);
+    refused::<Length>("2 (m)", "(m)", "`(m)` is no unit", LENGTHS);
+    refused::<Length>(
+        "4 in.",
+        ".",
+        "`.` after the unit is not understood",
+        "without a full stop",
+    );
+    refused::<Length>(
+        "3 m 20 cm",
+        "20",
+        "`20` after the unit is not understood",
+        "nothing else stands there but a tolerance",
+    );
+    refused::<Length>(
+        "3 m\n",
+        "\n",
+        "`\u{fffd}` after the unit is not understood",
+        "tolerance",
+    );
+    refused::<Area>("3 m^", "^", "a power is missing here", "`mm2`");
+    refused::<Area>("3 m22", "22", "a power of a unit has one digit", "`mm2`");
+}
+
+#[test]
+fn signs_of_temperatures() {
+    refused::<TemperatureInterval>(
+        "35 K",
+        "35 K",
+        "a change of temperature has its sign",
+        "write `+35 K` for warmer or `-35 K` for cooler",
+    );
+    refused::<ThermodynamicTemperature>(
+        "+20 degC",
+        "+",
+        "a reading of temperature has no `+`",
+        "a change is given under `temperature-change`",
+    );
+    let below = "this reading is below absolute zero";
+    let help = "-273.15 degC, -459.67 degF or more";
+    refused::<ThermodynamicTemperature>("-273.16 degC", "-273.16 degC", below, help);
+    refused::<ThermodynamicTemperature>("-459.68 degF", "-459.68 degF", below, help);
+    refused::<ThermodynamicTemperature>("-5 K", "-5 K", below, help);
+    refused::<ThermodynamicTemperature>("3 K ± 5 K", "3 K ± 5 K", below, help);
+    refused::<ThermodynamicTemperature>(
+        "3 K m/m",
+        "K m/m",
+        "a reading of temperature has no compound unit",
+        "20 degC",
+    );
+    refused::<TemperatureInterval>(
+        "35 mm",
+        "mm",
+        "`mm` is a length; a change of temperature is expected here",
+        "+35 K",
+    );
+}
+
+#[test]
+fn tolerances() {
+    let how = "`± 3 mm`, `+/- 3 mm`, `± 5 %` or `+0.2/-0.1 mm`";
+    refused::<Length>(
+        "12 mm ± -1 mm",
+        "-",
+        "what stands after `±` has no sign",
+        how,
+    );
+    refused::<Length>(
+        "12 mm ± 1",
+        "12 mm ± 1",
+        "a unit is missing after `12 mm ± 1`",
+        LENGTHS,
+    );
+    refused::<Length>(
+        "12 mm +0.2 mm",
+        "+0.2 mm",
+        "this tolerance lacks its other side",
+        how,
+    );
+    refused::<Length>(
+        "12 mm +0.2/+0.1 mm",
+        "+0.2/+0.1 mm",
+        "both sides of this tolerance lie on one side of the value",
+        "write a value that lies within its range",
+    );
+    refused::<Length>(
+        "12 mm +0.2/-0.1/-0.3 mm",
+        "0.1",
+        "this tolerance has more than two sides",
+        how,
+    );
+    refused::<Length>("12 mm ± 1/-1 mm", "1", "this tolerance lacks its unit", how);
+    refused::<Ratio>(
+        "0.1 % ± 5 %",
+        "5 %",
+        "a tolerance of a strain is no share of it",
+        "`± 20 ue`",
+    );
+    refused::<ThermodynamicTemperature>(
+        "20 degC ± 5 %",
+        "5 %",
+        "a tolerance of a change of temperature is no share of it",
+        "`± 3 K`",
+    );
+}
+
+#[test]
+fn shares() {
+    let stress = |text: &str, part: &str, message: &str, help: &str| {
+        hold(text, read_stress_limit(text), part, message, help);
+    };
+    stress(
+        "0.6 yeild",
+        "yeild",
+        "`yeild` is no strength of a material",
+        "did you mean `yield`?",
+    );
+    stress(
+        "0.6 Yield",
+        "Yield",
+        "`Yield` is no strength of a material",
+        "did you mean `yield`?",
+    );
+    stress(
+        "strength / 2",
+        "strength",
+        "`strength` is no strength of a material",
+        "0.6 yield",
+    );
+    stress(
+        "yield",
+        "",
+        "`/` and a number are missing after this name",
+        "yield / 1.67",
+    );
+    stress(
+        "yield / 0",
+        "/ 0",
+        "the number of a share is more than 0",
+        "0.6 yield",
+    );
+    stress(
+        "0 yield",
+        "0",
+        "the number of a share is more than 0",
+        "0.6 yield",
+    );
+    stress(
+        "0.6 yield x",
+        "x",
+        "`x` after a share is not understood",
+        "0.6 yield",
+    );
+    stress(
+        "yield / x",
+        "x",
+        "a number is expected before `x`",
+        "0.6 yield",
+    );
+    stress("165", "165", "a unit is missing after `165`", "0.6 yield");
+    stress(
+        "6 mm",
+        "mm",
+        "`mm` is a length; a stress is expected here",
+        "0.6 yield",
+    );
+    let bound = |text: &str, part: &str, message: &str, help: &str| {
+        hold(text, read_movement_bound(text), part, message, help);
+    };
+    bound(
+        "L/500",
+        "L/500",
+        "`L/500` is no limit of a movement",
+        "length / 500",
+    );
+    bound(
+        "length / 0",
+        "/ 0",
+        "the number of a share is more than 0",
+        "length / 500",
+    );
+    bound(
+        "length",
+        "",
+        "`/` and a number are missing after this name",
+        "length / 500",
+    );
+    bound(
+        "6 kN",
+        "kN",
+        "`kN` is a force; a length is expected here",
+        "length / 500",
+    );
+}
