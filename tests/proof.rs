@@ -14,7 +14,7 @@ const PART: f64 = 1.0 + 1e-6;
 
 /// Random members that have a solution, with it.
 fn solved_members(count: usize) -> Vec<(Model, MemberResult)> {
-    let mut random = Random::new(20_261);
+    let mut random = Random(20_261);
     let mut solved = Vec::new();
     while solved.len() < count {
         let text = common::random_member::member(&mut random).job();
