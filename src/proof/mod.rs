@@ -12,7 +12,7 @@ mod residual;
 
 use crate::model::{Combination, Member, Model, SegmentKind, Side, SupportKind};
 use crate::quantity::{Energy, Force, Length};
-use crate::result::{MemberResult, Residuals, SupportResult};
+use crate::result::{MemberResult, Residuals, SegmentResult, SupportResult};
 use acting::Acting;
 use piece::Integrated;
 use residual::{Residual, Size};
@@ -157,7 +157,7 @@ impl Proof<'_> {
         for (segment, result) in member.segments.iter().zip(&self.result.segments) {
             let first = at;
             let (mut f, mut t, mut m) = (Sum::default(), Sum::default(), Sum::default());
-            let (mut most, mut least) = (None::<Force>, None::<Force>);
+            let (mut most, mut least, mut size) = (None::<Force>, None::<Force>, Force::default());
             while at < pieces.len()
                 && std::ptr::eq(segment, &member.segments[member.pieces[at].segment])
             {
@@ -174,6 +174,7 @@ impl Proof<'_> {
                 }
                 most = Some(most.map_or(piece.most, |most| most.max(piece.most)));
                 least = Some(least.map_or(piece.least, |least| least.min(piece.least)));
+                size = size.max(piece.most.abs().max(piece.least.abs()) + piece.load_size);
                 at += 1;
             }
             self.compatibility.take(f.against(result.elongation_force));
@@ -190,7 +191,12 @@ impl Proof<'_> {
                 .take((result.force_start - start).over(result.force_start.abs() + start.abs()));
             self.equilibrium
                 .take((result.force_end - end).over(result.force_end.abs() + end.abs()));
-            self.extremes(result, most.unwrap_or_default(), least.unwrap_or_default());
+            self.extremes(
+                result,
+                most.unwrap_or_default(),
+                least.unwrap_or_default(),
+                size,
+            );
             if let SegmentKind::Gap(_) = segment.kind {
                 self.joint(first, result);
             }
@@ -215,22 +221,20 @@ impl Proof<'_> {
     }
 
     /// The extremes of N of a segment against what the proof saw along it. Its places are the ends
-    /// and the nodes, so that an extreme between them may only be larger.
-    fn extremes(&mut self, result: &crate::result::SegmentResult, most: Force, least: Force) {
-        let sizes = |named: Force, seen: Force| named.abs() + seen.abs();
+    /// and the nodes, so that an extreme between them may only be larger. `size` is that of the
+    /// terms which N is the sum of.
+    fn extremes(&mut self, result: &SegmentResult, most: Force, least: Force, size: Force) {
         let under = (most - result.force_max).max(Force::default());
         let over = (result.force_min - least).max(Force::default());
-        self.equilibrium
-            .take(under.over(sizes(result.force_max, most)));
-        self.equilibrium
-            .take(over.over(sizes(result.force_min, least)));
+        self.equilibrium.take(under.over(size));
+        self.equilibrium.take(over.over(size));
         for (named, x) in [
             (result.force_max, result.force_max_at),
             (result.force_min, result.force_min_at),
         ] {
             let there = self.force_at(x, named);
             self.equilibrium
-                .take((named - there).over(named.abs() + there.abs()));
+                .take((named - there).over(named.abs() + size));
         }
     }
 
@@ -274,7 +278,7 @@ impl Proof<'_> {
     }
 
     /// The layers of a segment carry N together.
-    fn layers(&mut self, result: &crate::result::SegmentResult) {
+    fn layers(&mut self, result: &SegmentResult) {
         if result.layers.is_empty() {
             return;
         }
@@ -297,7 +301,7 @@ impl Proof<'_> {
     }
 
     /// A joint: closed, its sides are its width nearer and press; open, nothing goes through.
-    fn joint(&mut self, piece: usize, result: &crate::result::SegmentResult) {
+    fn joint(&mut self, piece: usize, result: &SegmentResult) {
         let segment = &self.acting.member.segments[self.acting.member.pieces[piece].segment];
         let SegmentKind::Gap(gap) = &segment.kind else {
             return;

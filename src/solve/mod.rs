@@ -181,8 +181,7 @@ fn link(piece: &PieceDeformation) -> Result<Link, quotient::Unbounded> {
     } else {
         piece.flexibility()?
     };
-    let unloaded = piece.force(Force::default());
-    let free = piece.stretch(&unloaded)? + piece.thermal + piece.imposed;
+    let free = piece.stretch(&piece.force_of_line())? + piece.thermal + piece.imposed;
     Ok(Link {
         flexibility,
         free,

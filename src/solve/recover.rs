@@ -205,7 +205,7 @@ fn segment(
             bears = Some(states.links[piece]);
             continue;
         };
-        let along = deformation.force_between(start, end);
+        let along = deformation.force(start, end);
         let pointed = |_| SolveError::PointLoaded {
             member: member.name.clone(),
             segment: segment.name.clone(),

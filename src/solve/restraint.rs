@@ -62,9 +62,7 @@ fn mean_force(member: &Member, prepared: &Prepared, solved: &Solved) -> Force {
     let mut mean = Force::default();
     for (index, (piece, deformation)) in member.pieces.iter().zip(&prepared.pieces).enumerate() {
         let force = match deformation {
-            Some(deformation) => {
-                deformation.force_between(solved.after[index], solved.before[index + 1])
-            }
+            Some(deformation) => deformation.force(solved.after[index], solved.before[index + 1]),
             None => Curve::constant(solved.after[index]),
         };
         mean += force.mean() * (piece.length / total).value;
