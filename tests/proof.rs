@@ -53,7 +53,7 @@ fn corrupt_length<'r>(fields: impl Iterator<Item = &'r mut Length>) -> bool {
 
 type Corruption = (&'static str, fn(&mut MemberResult) -> bool);
 
-const CORRUPTIONS: [Corruption; 14] = [
+const CORRUPTIONS: [Corruption; 13] = [
     ("force before a station", |r| {
         corrupt_force(
             r.stations
@@ -85,8 +85,9 @@ const CORRUPTIONS: [Corruption; 14] = [
     ("reaction", |r| {
         corrupt_force(r.supports.iter_mut().filter_map(|s| s.reaction.as_mut()))
     }),
-    ("elongation of a segment", |r| {
-        corrupt_length(r.segments.iter_mut().map(|s| &mut s.elongation))
+    ("elongation", |r| {
+        let segments = r.segments.iter_mut().map(|s| &mut s.elongation);
+        corrupt_length(segments.chain([&mut r.elongation]))
     }),
     ("elongation from force", |r| {
         corrupt_length(r.segments.iter_mut().map(|s| &mut s.elongation_force))
@@ -96,9 +97,6 @@ const CORRUPTIONS: [Corruption; 14] = [
     }),
     ("elongation from misfit", |r| {
         corrupt_length(r.segments.iter_mut().map(|s| &mut s.elongation_misfit))
-    }),
-    ("elongation of the member", |r| {
-        corrupt_length([&mut r.elongation].into_iter())
     }),
 ];
 

@@ -347,8 +347,8 @@ impl Proof<'_> {
             SupportKind::Fixed => self.compatibility.take((displacement - moved).over(sizes)),
             SupportKind::Spring(stiffness) => {
                 let answer = stiffness * (moved - displacement);
-                self.compatibility
-                    .take((reaction - answer).over(reaction.abs() + stiffness * sizes));
+                let size = reaction.abs() + stiffness * sizes + self.force_size(support.station);
+                self.compatibility.take((reaction - answer).over(size));
             }
             SupportKind::Stop {
                 clearance,
@@ -368,8 +368,9 @@ impl Proof<'_> {
                     match stiffness {
                         Some(stiffness) => {
                             let answer = stiffness * -open;
-                            self.compatibility
-                                .take((push - answer).over(push.abs() + stiffness * sizes));
+                            self.compatibility.take(
+                                (push - answer).over(push.abs() + stiffness * sizes + forces),
+                            );
                         }
                         None => self.compatibility.take(open.over(sizes)),
                     }
