@@ -2,6 +2,8 @@
 //! reactions, gaps and verdicts that carry their own proof.
 pub mod catalogue;
 pub mod check;
+pub mod fuzzing;
+pub mod job;
 pub mod model;
 pub mod proof;
 pub mod quantity;

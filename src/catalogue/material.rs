@@ -1,6 +1,6 @@
 //! A material as a member uses it.
 
-use crate::model::Name;
+use std::sync::Arc;
 use crate::quantity::{Density, Expansion, Length, Stress, ThermodynamicTemperature};
 
 /// A strength that a limit may be a share of.
@@ -17,9 +17,9 @@ pub enum Strength {
 #[derive(Debug, Clone, PartialEq)]
 pub struct Material {
     /// Its id in the job or in the library.
-    pub id: Name,
+    pub id: Arc<str>,
     /// The library entry or the job's own that it starts from.
-    pub like: Option<Name>,
+    pub like: Option<Arc<str>>,
     /// Modulus of elasticity.
     pub modulus: Stress,
     /// Coefficient of linear expansion.

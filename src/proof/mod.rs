@@ -24,8 +24,13 @@ use residual::{Residual, Size};
 ///   the state of every stop and joint.
 /// * energy: the work of loads and reactions against `∫N (N/EA + e0) dx` (Clapeyron).
 pub fn member(model: &Model, member: &Member, combination: &Combination, result: &MemberResult) -> Residuals {
-    let acting = Acting::on(model, member, combination);
-    let mut proof = Proof { acting, result, equilibrium: Residual::default(), compatibility: Residual::default() };
+    let mut proof = Proof {
+        acting: Acting::on(model, member, combination),
+        result,
+        reactions: reactions_by_station(member, result),
+        equilibrium: Residual::default(),
+        compatibility: Residual::default(),
+    };
     let pieces: Vec<Integrated> = (0..member.pieces.len()).map(|piece| proof.integrate(piece)).collect();
     proof.stations();
     proof.whole(&pieces);
@@ -42,9 +47,21 @@ pub fn member(model: &Model, member: &Member, combination: &Combination, result:
     }
 }
 
+fn reactions_by_station(member: &Member, result: &MemberResult) -> Vec<(Force, Force)> {
+    let mut reactions = vec![(Force::default(), Force::default()); member.stations.len()];
+    for (support, result) in member.supports.iter().zip(&result.supports) {
+        let reaction = result.reaction.unwrap_or_default();
+        reactions[support.station].0 += reaction;
+        reactions[support.station].1 += reaction.abs();
+    }
+    reactions
+}
+
 struct Proof<'p> {
     acting: Acting<'p>,
     result: &'p MemberResult,
+    /// The reactions at each station, and the sum of their sizes.
+    reactions: Vec<(Force, Force)>,
     equilibrium: Residual,
     compatibility: Residual,
 }
@@ -60,15 +77,6 @@ impl Proof<'_> {
         self.result.stations[station].displacement
     }
 
-    /// The reactions at a station and the sum of their sizes.
-    fn reactions_at(&self, station: usize) -> (Force, Force) {
-        let supports = self.acting.member.supports.iter().zip(&self.result.supports);
-        supports.filter(|(support, _)| support.station == station).fold(Default::default(), |(sum, size), (_, result)| {
-            let reaction = result.reaction.unwrap_or_default();
-            (sum + reaction, size + reaction.abs())
-        })
-    }
-
     fn integrate(&self, piece: usize) -> Integrated {
         let (_, start) = self.forces_at(piece);
         let (end, _) = self.forces_at(piece + 1);
@@ -77,13 +85,8 @@ impl Proof<'_> {
 
     /// N after − N before + load + reactions = 0 at every station.
     fn stations(&mut self) {
-        let mut reactions = vec![(Force::default(), Force::default()); self.result.stations.len()];
-        for (support, result) in self.acting.member.supports.iter().zip(&self.result.supports) {
-            let reaction = result.reaction.unwrap_or_default();
-            reactions[support.station].0 += reaction;
-            reactions[support.station].1 += reaction.abs();
-        }
-        for (station, (reaction, size)) in reactions.into_iter().enumerate() {
+        for station in 0..self.reactions.len() {
+            let (reaction, size) = self.reactions[station];
             let (before, after) = self.forces_at(station);
             let (load, load_size) = self.acting.forces[station];
             let sizes = before.abs() + after.abs() + load_size + size;
@@ -257,7 +260,7 @@ impl Proof<'_> {
     fn force_size(&self, station: usize) -> Force {
         let (before, after) = self.forces_at(station);
         let (_, load) = self.acting.forces[station];
-        let (_, reactions) = self.reactions_at(station);
+        let (_, reactions) = self.reactions[station];
         before.abs() + after.abs() + load + reactions
     }
 

@@ -1,0 +1,472 @@
+//! What acts on a member: loads and cases with their names resolved, laid on segments and layers.
+
+use super::Meaning;
+use super::coverage::{Cells, Cover, On, narrowest};
+use super::forces::{Line, Sloped};
+use super::members::Whole;
+use super::outline::Outline;
+use super::supports::Held;
+use crate::catalogue::section::Along;
+use crate::job::nearest::remedy;
+use crate::job::written::load::{Action, Load};
+use crate::job::written::segment::Kind;
+use crate::job::written::{ByCase, Entry, Written};
+use crate::model::{
+    Actions, FreeStrain, Member, Movement, Name, PointForce, SegmentKind, Temperatures, Weight,
+};
+use crate::quantity::{Length, Ratio, TemperatureInterval, ThermodynamicTemperature, from_si};
+
+/// What a load of a case says of temperature.
+#[derive(Debug, Clone, Copy)]
+enum Heat {
+    Change(Along<TemperatureInterval>),
+    Reading(Along<ThermodynamicTemperature>),
+}
+
+/// Everything that acts on a member; `None` where that cannot be said. Names are checked for a
+/// member with faults too.
+pub(super) fn actions<'w, 't>(
+    whole: &Whole<'w, 't>,
+    outline: &Outline<'w, 't>,
+    held: &Held,
+    member: Option<&Member>,
+    meaning: &mut Meaning<'w, 't>,
+) -> Option<Actions> {
+    let mut laid = Laying {
+        whole,
+        outline,
+        held,
+        member,
+        actions: Actions::default(),
+        weights: Vec::new(),
+        heats: Vec::new(),
+        meaning,
+    };
+    laid.of_cases();
+    for load in whole.loads.given().map_or(&[][..], |all| &all.value) {
+        laid.load(load);
+    }
+    let member = member?;
+    let cells = Cells::of(&member.segments);
+    laid.lay_weights(member, &cells);
+    laid.lay_heat(member, &cells);
+    (!whole.loads.is_wrong()).then_some(laid.actions)
+}
+
+/// Actions on their way onto a member.
+pub(super) struct Laying<'a, 'w, 't> {
+    pub(super) whole: &'a Whole<'w, 't>,
+    pub(super) outline: &'a Outline<'w, 't>,
+    held: &'a Held,
+    /// The member without its actions; `None` where something about it is at fault.
+    pub(super) member: Option<&'a Member>,
+    pub(super) actions: Actions,
+    weights: Vec<Cover<f64>>,
+    heats: Vec<Cover<Heat>>,
+    pub(super) meaning: &'a mut Meaning<'w, 't>,
+}
+
+impl<'w, 't> Laying<'_, 'w, 't> {
+    /// What cases say of every member.
+    fn of_cases(&mut self) {
+        let job = self.meaning.job;
+        for (index, case) in job.cases.iter().enumerate() {
+            let mut heat = |value, place: &crate::model::Place| {
+                self.heats.push(Cover {
+                    case: index,
+                    on: On::Case,
+                    value,
+                    place: place.clone(),
+                });
+            };
+            if let Entry::Given(change) = &case.change {
+                heat(Heat::Change(change.value), &change.place);
+            }
+            if let Entry::Given(reading) = &case.reading {
+                heat(Heat::Reading(reading.value), &reading.place);
+            }
+            if let Entry::Given(weight) = &case.weight {
+                self.weights.push(Cover {
+                    case: index,
+                    on: On::Case,
+                    value: weight.value,
+                    place: weight.place.clone(),
+                });
+            }
+        }
+    }
+
+    fn load(&mut self, load: &'w Load<'t>) {
+        let Some(action) = &load.action else {
+            return;
+        };
+        match action {
+            Action::Force(force) => self.point_force(load, force, false),
+            Action::Down(force) => self.point_force(load, force, true),
+            Action::Line(line) => self.lines(load, line, Line::Along),
+            Action::LineDown(line) => self.lines(load, line, Line::Down),
+            Action::Weight(weight) => {
+                let on = self.on(load);
+                for (case, written) in self.by_case(load, weight) {
+                    if let Some(on) = on {
+                        let (value, place) = (written.value, written.place.clone());
+                        self.weights.push(Cover { case, on, value, place });
+                    }
+                }
+            }
+            Action::Change(change) => {
+                let on = self.on(load);
+                for (case, written) in self.by_case(load, change) {
+                    self.heat(case, on, Heat::Change(written.value), written);
+                }
+            }
+            Action::Reading(reading) => {
+                let on = self.on(load);
+                for (case, written) in self.by_case(load, reading) {
+                    self.heat(case, on, Heat::Reading(written.value), written);
+                }
+            }
+            Action::Misfit(misfit) => self.misfit(load, misfit),
+            Action::Strain(strain) => {
+                let on = self.on(load);
+                for (case, written) in self.by_case(load, strain) {
+                    self.free_strain(case, on, written.value);
+                }
+            }
+            Action::Movement(movement) => self.movement(load, movement),
+        }
+    }
+
+    fn heat<T>(&mut self, case: usize, on: Option<On>, value: Heat, written: &Written<T>) {
+        if let Some(on) = on {
+            let place = written.place.clone();
+            self.heats.push(Cover { case, on, value, place });
+        }
+    }
+
+    /// The value of a load for each case that it acts in. Every load of a job with cases names
+    /// one, and none of a job without.
+    pub(super) fn by_case<T>(
+        &mut self,
+        load: &'w Load<'t>,
+        values: &'w ByCase<'t, T>,
+    ) -> Vec<(usize, &'w Written<T>)> {
+        match (values, &load.case) {
+            (_, Entry::Wrong) => Vec::new(),
+            (ByCase::One(value), Entry::Given(case)) => {
+                let case = self.meaning.case(case);
+                case.map(|case| (case, value)).into_iter().collect()
+            }
+            (ByCase::One(value), Entry::Absent) if self.meaning.job.cases.is_empty() => {
+                vec![(0, value)]
+            }
+            (ByCase::One(_), Entry::Absent) => {
+                let names = self.meaning.job.cases.iter().map(|case| case.name.value);
+                let help = remedy("", names.clone(), "").map_or(String::new(), |_| {
+                    let names: Vec<&str> = names.take(12).collect();
+                    format!("add `case`; the cases are `{}`", names.join("`, `"))
+                });
+                let message = "in a job with cases each load names its case";
+                self.meaning.r.problems.missing(&load.place, message, help);
+                Vec::new()
+            }
+            (ByCase::Each(_), Entry::Given(case)) => {
+                let message = "this load names a case, and its value is a table by case";
+                let problems = &mut self.meaning.r.problems;
+                problems.say(&case.place, message, "keep one of them");
+                Vec::new()
+            }
+            (ByCase::Each(each), Entry::Absent) => {
+                let mut resolved = Vec::with_capacity(each.len());
+                for (case, value) in each {
+                    if let Some(case) = self.meaning.case(case) {
+                        resolved.push((case, value));
+                    }
+                }
+                resolved
+            }
+        }
+    }
+
+    /// What a load covers; `None` where the name of it is unknown, or a gap, which takes nothing.
+    pub(super) fn on(&mut self, load: &'w Load<'t>) -> Option<On> {
+        let written = match &load.on {
+            Entry::Absent => return Some(On::Member),
+            Entry::Wrong => return None,
+            Entry::Given(written) => written,
+        };
+        let (segment, layer) = match written.value.split_once('.') {
+            Some((segment, layer)) => (segment, Some(layer)),
+            None => (written.value, None),
+        };
+        let problems = &mut self.meaning.r.problems;
+        let Some(index) = self.outline.names.find(segment) else {
+            if !self.outline.segments.iter().any(|s| s.name.is_wrong()) {
+                let message = format!("no segment of this member is called `{segment}`");
+                let names = self.outline.names.texts();
+                let help = remedy(segment, names, "its segments are");
+                problems.unknown("member", &written.place, message, help);
+            }
+            return None;
+        };
+        if self.outline.is_gap(index) {
+            let message = format!("`{segment}` is a gap, on which nothing acts");
+            let help = "a gap has no material; take a segment beside it";
+            problems.say(&written.place, message, help);
+            return None;
+        }
+        let Some(layer) = layer else {
+            return Some(On::Segment(index));
+        };
+        let names: Vec<Name> = match &self.outline.segments[index].kind {
+            Kind::Solid {
+                layers,
+                layered: true,
+            } => layers
+                .iter()
+                .enumerate()
+                .map(|(index, layer)| match layer.name.given() {
+                    Some(name) => Name::from(name.value),
+                    None => Name::from((index + 1).to_string()),
+                })
+                .collect(),
+            Kind::Wrong => return None,
+            _ => Vec::new(),
+        };
+        let found = names.iter().position(|name| &**name == layer);
+        if found.is_none() {
+            let message = format!("no layer of the segment `{segment}` is called `{layer}`");
+            let help = if names.is_empty() {
+                Some(format!("it has no layers; write `{segment}`"))
+            } else {
+                remedy(layer, names.iter().map(|name| &**name), "its layers are")
+            };
+            problems.unknown("member", &written.place, message, help);
+        }
+        found.map(|layer| On::Layer(index, layer))
+    }
+
+    /// A strain of everything that is covered.
+    fn free_strain(&mut self, case: usize, on: Option<On>, strain: Ratio) {
+        let (Some(on), Some(member)) = (on, self.member) else {
+            return;
+        };
+        for (segment, layer) in Cells::of(&member.segments).each(on) {
+            self.actions.strains.push(FreeStrain {
+                case,
+                segment,
+                layer,
+                strain,
+            });
+        }
+    }
+
+    /// A misfit is spread over the length of what it acts on; gaps take no part.
+    fn misfit(&mut self, load: &'w Load<'t>, misfit: &'w ByCase<'t, Length>) {
+        let on = self.on(load);
+        let values = self.by_case(load, misfit);
+        let (Some(on), Some(_)) = (on, self.member) else {
+            return;
+        };
+        let length: f64 = match on {
+            On::Segment(segment) | On::Layer(segment, _) => self.outline.length_of(segment),
+            On::Case | On::Member => (0..self.outline.segments.len())
+                .filter(|&segment| !self.outline.is_gap(segment))
+                .map(|segment| self.outline.length_of(segment))
+                .sum(),
+        };
+        for (case, written) in values {
+            if length > 0.0 {
+                let strain = from_si(written.value.value / length);
+                self.free_strain(case, Some(on), strain);
+            } else {
+                let message = "a misfit has nothing to act on in a member of gaps alone";
+                self.meaning.r.problems.say(&written.place, message, "");
+            }
+        }
+    }
+
+    fn point_force(
+        &mut self,
+        load: &'w Load<'t>,
+        force: &'w ByCase<'t, crate::quantity::Force>,
+        down: bool,
+    ) {
+        let values = self.by_case(load, force);
+        let slope = if down { self.slope() } else { Some(Sloped::AXIS) };
+        let station = load.at.given().and_then(|at| self.outline.find(&at.value));
+        let (Some(station), Some(slope), Some(_)) = (station, slope, self.member) else {
+            return;
+        };
+        for (case, written) in values {
+            self.actions.forces.push(PointForce {
+                case,
+                station,
+                force: written.value * slope.along,
+                across: written.value * slope.across,
+            });
+        }
+    }
+
+    fn movement(&mut self, load: &'w Load<'t>, movement: &'w ByCase<'t, Length>) {
+        let values = self.by_case(load, movement);
+        let support = match (&load.support, &load.at) {
+            (Entry::Given(name), _) => self.held.named(name, self.meaning),
+            (Entry::Absent, Entry::Given(at)) => {
+                let station = self.outline.find(&at.value);
+                station.and_then(|station| {
+                    self.held.only_one_at(station, &at.place, self.meaning)
+                })
+            }
+            _ => None,
+        };
+        let Some(support) = support else {
+            return;
+        };
+        for (case, written) in values {
+            self.actions.movements.push(Movement {
+                case,
+                support,
+                movement: written.value,
+            });
+        }
+    }
+
+    /// Weights, the narrowest at each place. What has neither density nor mass is reported.
+    fn lay_weights(&mut self, member: &Member, cells: &Cells) {
+        let mut covers = std::mem::take(&mut self.weights);
+        let mut laid = Vec::new();
+        narrowest(&mut covers, cells, "weights", self.meaning, |cover, segment, layer, meaning| {
+            if cover.value == 0.0 {
+                return;
+            }
+            let weighs = match &member.segments[segment].kind {
+                SegmentKind::Solid { layers, .. } => {
+                    let layer = &layers[layer];
+                    let material = &meaning.materials.used[layer.material];
+                    if layer.mass.is_none() && material.density.is_none() {
+                        let message = format!(
+                            "weight needs the density of `{}`, which is not given",
+                            material.id
+                        );
+                        let help = format!(
+                            "add `density` in `[material.{}]`, or `mass` to the segment",
+                            material.id
+                        );
+                        meaning.r.problems.say(&cover.place, message, help);
+                    }
+                    true
+                }
+                SegmentKind::Stiffness(part) => part.mass.is_some(),
+                SegmentKind::Gap(_) => false,
+            };
+            if weighs {
+                laid.push(Weight {
+                    case: cover.case,
+                    segment,
+                    layer,
+                    number: cover.value,
+                });
+            }
+        });
+        if !laid.is_empty() {
+            self.slope();
+        }
+        self.actions.weights = laid;
+    }
+
+    /// Temperatures, the narrowest at each place, readings as their difference from the datum.
+    fn lay_heat(&mut self, member: &Member, cells: &Cells) {
+        let mut covers = std::mem::take(&mut self.heats);
+        let datum_is_wrong = self.datum_is_wrong();
+        let length = self.outline.length().unwrap_or(1.0);
+        let mut laid = Vec::new();
+        let what = "temperatures";
+        narrowest(&mut covers, cells, what, self.meaning, |cover, segment, layer, meaning| {
+            let Some(change) = change_of(cover, member, datum_is_wrong, meaning) else {
+                return;
+            };
+            let part = match cover.on {
+                On::Case | On::Member => {
+                    let segment = &member.segments[segment];
+                    Along {
+                        start: change.at(segment.from.value / length),
+                        end: change.at(segment.to.value / length),
+                    }
+                }
+                On::Segment(_) | On::Layer(..) => change,
+            };
+            if !expands(cover, member, segment, layer, &part, meaning) {
+                return;
+            }
+            laid.push(Temperatures {
+                case: cover.case,
+                segment,
+                layer,
+                start: part.start,
+                end: part.end,
+            });
+        });
+        self.actions.temperatures = laid;
+    }
+
+    fn datum_is_wrong(&self) -> bool {
+        let heading = self.meaning.job.heading.as_ref();
+        self.whole.datum.is_wrong() || heading.is_some_and(|heading| heading.datum.is_wrong())
+    }
+}
+
+/// The change that a cover means; a reading without a datum is reported.
+fn change_of(
+    cover: &Cover<Heat>,
+    member: &Member,
+    datum_is_wrong: bool,
+    meaning: &mut Meaning<'_, '_>,
+) -> Option<Along<TemperatureInterval>> {
+    let reading = match cover.value {
+        Heat::Change(change) => return Some(change),
+        Heat::Reading(reading) => reading,
+    };
+    let Some(datum) = member.datum else {
+        if !datum_is_wrong {
+            let message = "a reading of temperature needs a datum";
+            let help = "add `datum = \"10 degC\"` to `[job]`, the temperature at which lengths \
+                        are as drawn, or write a `temperature-change`";
+            meaning.r.problems.say(&cover.place, message, help);
+        }
+        return None;
+    };
+    Some(Along {
+        start: from_si(reading.start.value - datum.value),
+        end: from_si(reading.end.value - datum.value),
+    })
+}
+
+/// Whether a layer answers a change of temperature; a material that does not say how much is
+/// reported.
+fn expands(
+    cover: &Cover<Heat>,
+    member: &Member,
+    segment: usize,
+    layer: usize,
+    change: &Along<TemperatureInterval>,
+    meaning: &mut Meaning<'_, '_>,
+) -> bool {
+    match &member.segments[segment].kind {
+        SegmentKind::Solid { layers, .. } => {
+            let material = &meaning.materials.used[layers[layer].material];
+            let none = TemperatureInterval::default();
+            if material.expansion.is_none() && !(change.start == none && change.end == none) {
+                let message = format!(
+                    "a temperature needs the expansion of `{}`, which is not given",
+                    material.id
+                );
+                let help = format!("add `expansion` in `[material.{}]`", material.id);
+                meaning.r.problems.say(&cover.place, message, help);
+            }
+            true
+        }
+        SegmentKind::Stiffness(part) => part.expansion.is_some(),
+        SegmentKind::Gap(_) => false,
+    }
+}

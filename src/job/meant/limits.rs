@@ -1,0 +1,526 @@
+//! What is held: each limit laid on the things that it holds.
+
+use super::Meaning;
+use super::combinations::Combinations;
+use super::members::Meant;
+use super::stress::allowed;
+use crate::job::nearest::remedy;
+use crate::job::written::combination::purpose_named;
+use crate::job::written::limit::{Bound, Limits};
+use crate::job::written::{Entry, Written};
+use crate::model::{
+    AreaUsed, Limit, LimitKind, Member, MovementLimit, Name, Place, Purpose, Reads, Remark,
+    SegmentKind, Target,
+};
+use crate::quantity::{Force, Length, MovementBound, StressLimit};
+use std::ops::Neg;
+
+/// All limits of a job in the order of the file.
+pub(super) fn limits<'w, 't>(
+    meant: &[Meant<'w, 't>],
+    combinations: Option<&Combinations>,
+    meaning: &mut Meaning<'w, 't>,
+) -> Vec<Limit> {
+    let mut laying = Laying {
+        combinations,
+        meaning,
+        limits: Vec::new(),
+        unread: Vec::new(),
+    };
+    for (index, meant) in meant.iter().enumerate() {
+        laying.of_member(index, meant);
+    }
+    let mut limits = laying.limits;
+    limits.sort_by_key(|limit| limit.place.start); // stable: members and segments in order within
+    limits
+}
+
+/// Limits on their way onto members.
+struct Laying<'a, 'w, 't> {
+    combinations: Option<&'a Combinations>,
+    meaning: &'a mut Meaning<'w, 't>,
+    limits: Vec<Limit>,
+    /// The places of limits that no combination reads and that have their caution.
+    unread: Vec<Place>,
+}
+
+/// What all limits of one table have in common.
+struct Common {
+    /// The combinations that `in` names; by purpose where it is left out.
+    only: Option<Vec<usize>>,
+    since: Option<usize>,
+    source: Option<Name>,
+}
+
+impl<'w, 't> Laying<'_, 'w, 't> {
+    fn of_member(&mut self, index: usize, meant: &Meant<'w, 't>) {
+        let of_member = meant.whole.limits.or(&self.meaning.job.default.limits);
+        for table in tables(of_member) {
+            let common = self.common(table);
+            if let (Some(common), Some(member)) = (common, &meant.member) {
+                self.on_member(index, table, &common, meant, member);
+            }
+        }
+        for (at, segment) in meant.outline.segments.iter().enumerate() {
+            for table in tables(&segment.limits) {
+                let common = self.common(table);
+                if let (Some(common), Some(member)) = (common, &meant.member) {
+                    self.on_segment(index, at, table, &common, meant, member);
+                }
+            }
+            let crate::job::written::segment::Kind::Solid { layers, .. } = &segment.kind else {
+                continue;
+            };
+            for (number, layer) in layers.iter().enumerate() {
+                for table in tables(&layer.limits) {
+                    let common = self.common(table);
+                    if let (Some(common), Some(member)) = (common, &meant.member) {
+                        self.stresses(index, at, number, table, &common, member);
+                    }
+                }
+            }
+        }
+        let supports = meant.whole.supports.given();
+        for (number, support) in supports.iter().flat_map(|all| all.value.iter().enumerate()) {
+            for table in tables(&support.limits) {
+                let common = self.common(table);
+                if let (Some(common), Some(member)) = (common, &meant.member) {
+                    let ends = member.supports.len() - supports.map_or(0, |all| all.value.len());
+                    self.on_support(index, ends + number, table, &common, member);
+                }
+            }
+        }
+    }
+
+    fn on_member(
+        &mut self,
+        index: usize,
+        table: &Limits<'t>,
+        common: &Common,
+        meant: &Meant<'w, 't>,
+        member: &Member,
+    ) {
+        let segments = meant.outline.segments;
+        for (at, segment) in segments.iter().enumerate() {
+            // What stands on the segment or the layer takes the place of the member's.
+            let layers = member.segments[at].layers().len();
+            for layer in 0..layers {
+                let own = Own::of(segment, Some(layer));
+                self.stresses_but(index, at, layer, table, common, member, own);
+            }
+        }
+        if let Entry::Given(force) = &table.force {
+            let kind = LimitKind::Force(force_limit(force.value));
+            let has_own = |at: usize| Own::of(&segments[at], None).force;
+            if (0..segments.len()).any(has_own) {
+                for at in (0..segments.len()).filter(|&at| !has_own(at)) {
+                    let target = Target::Segment {
+                        member: index,
+                        segment: at,
+                    };
+                    let on = joined(&member.name, &member.segments[at].name);
+                    self.push(kind, target, on, common, &force.place);
+                }
+            } else {
+                let target = Target::Member { member: index };
+                self.push(kind, target, member.name.clone(), common, &force.place);
+            }
+        }
+        if let Entry::Given(elongation) = &table.elongation {
+            let kind = LimitKind::Elongation(movement_limit(elongation.value, member.length()));
+            let target = Target::Member { member: index };
+            self.push(kind, target, member.name.clone(), common, &elongation.place);
+        }
+        let displacements = table.displacement.given();
+        for displacement in displacements.iter().flat_map(|all| &all.value) {
+            let at = displacement.at.given();
+            let Some(station) = at.and_then(|at| meant.outline.find(&at.value)) else {
+                continue;
+            };
+            let limit = &displacement.limit;
+            let kind = LimitKind::Displacement(movement_limit(limit.value, member.length()));
+            let target = Target::Station {
+                member: index,
+                station,
+            };
+            let on = joined(&member.name, &member.stations[station].name);
+            self.push(kind, target, on, common, &limit.place);
+        }
+    }
+
+    fn on_segment(
+        &mut self,
+        index: usize,
+        at: usize,
+        table: &Limits<'t>,
+        common: &Common,
+        meant: &Meant<'w, 't>,
+        member: &Member,
+    ) {
+        let segment = &member.segments[at];
+        for layer in 0..segment.layers().len() {
+            let own = Own::of_layer(&meant.outline.segments[at], layer);
+            self.stresses_but(index, at, layer, table, common, member, own);
+        }
+        let target = Target::Segment {
+            member: index,
+            segment: at,
+        };
+        let on = || joined(&member.name, &segment.name);
+        if let Entry::Given(force) = &table.force {
+            let kind = LimitKind::Force(force_limit(force.value));
+            self.push(kind, target, on(), common, &force.place);
+        }
+        if let Entry::Given(elongation) = &table.elongation {
+            let kind = LimitKind::Elongation(movement_limit(elongation.value, segment.length()));
+            self.push(kind, target, on(), common, &elongation.place);
+        }
+        self.gap(table, target, &on, common);
+    }
+
+    fn on_support(
+        &mut self,
+        index: usize,
+        at: usize,
+        table: &Limits<'t>,
+        common: &Common,
+        member: &Member,
+    ) {
+        let Some(support) = member.supports.get(at) else {
+            return;
+        };
+        let target = Target::Support {
+            member: index,
+            support: at,
+        };
+        let on = || joined(&member.name, &support.name);
+        if let Entry::Given(reaction) = &table.reaction {
+            let kind = LimitKind::Reaction(force_limit(reaction.value));
+            self.push(kind, target, on(), common, &reaction.place);
+        }
+        self.gap(table, target, &on, common);
+    }
+
+    fn gap(
+        &mut self,
+        table: &Limits<'t>,
+        target: Target,
+        on: &dyn Fn() -> Name,
+        common: &Common,
+    ) {
+        if let Entry::Given(gap) = &table.gap {
+            let (min, max) = gap.value;
+            let kind = LimitKind::Gap { min, max };
+            self.push(kind, target, on(), common, &gap.place);
+        }
+        if let Entry::Given(bears) = &table.bears {
+            self.push(LimitKind::Bears, target, on(), common, &bears.place);
+        }
+    }
+
+    fn stresses(
+        &mut self,
+        index: usize,
+        at: usize,
+        layer: usize,
+        table: &Limits<'t>,
+        common: &Common,
+        member: &Member,
+    ) {
+        self.stresses_but(index, at, layer, table, common, member, Own::default());
+    }
+
+    /// The limits of stress in one layer, but for those that something narrower has of its own.
+    #[allow(clippy::too_many_arguments)] // a place in three indices, and what stands there
+    fn stresses_but(
+        &mut self,
+        index: usize,
+        at: usize,
+        layer: usize,
+        table: &Limits<'t>,
+        common: &Common,
+        member: &Member,
+        own: Own,
+    ) {
+        let segment = &member.segments[at];
+        let SegmentKind::Solid { layers, layered } = &segment.kind else {
+            return;
+        };
+        let Some(made) = layers.get(layer) else {
+            return;
+        };
+        let area = match table.area.given() {
+            Some(area) if area.value == AreaUsed::Gross => AreaUsed::Gross,
+            _ if made.net.is_some() => AreaUsed::Net,
+            _ => AreaUsed::Gross,
+        };
+        let (target, on) = if *layered {
+            let target = Target::Layer {
+                member: index,
+                segment: at,
+                layer,
+            };
+            let on = Name::from(format!("{}.{}.{}", member.name, segment.name, made.name));
+            (target, on)
+        } else {
+            let target = Target::Segment {
+                member: index,
+                segment: at,
+            };
+            (target, joined(&member.name, &segment.name))
+        };
+        let mut lay = |written: &Entry<StressLimit>, is_tension: bool| {
+            let Some(written) = written.given() else {
+                return;
+            };
+            let allowed = allowed(written, made, &member.name, self.meaning);
+            let Some((limit, share)) = allowed else {
+                return;
+            };
+            let kind = if is_tension {
+                LimitKind::Tension { limit, area, share }
+            } else {
+                LimitKind::Compression { limit, area, share }
+            };
+            self.push(kind, target, on.clone(), common, &written.place);
+        };
+        if !own.tension {
+            lay(&table.tension, true);
+        }
+        if !own.compression {
+            lay(&table.compression, false);
+        }
+    }
+
+    /// What `in`, `since` and `source` of a table say; `None` where one is at fault.
+    fn common(&mut self, table: &Limits<'t>) -> Option<Common> {
+        let combinations = self.combinations?;
+        let mut sound = !(table.names.is_wrong() || table.since.is_wrong());
+        let only = table.names.given().map(|names| {
+            let mut only = Vec::new();
+            for name in &names.value {
+                let known = only.len();
+                covered(name.value, combinations, &mut only);
+                if only.len() == known && purpose_named(name.value).is_none() {
+                    sound = false;
+                    self.unknown(name, combinations, " nor a purpose");
+                }
+            }
+            only.sort_unstable();
+            only.dedup();
+            only
+        });
+        let since = table.since.given().and_then(|since| {
+            let index = self.one(since, combinations);
+            sound &= index.is_some();
+            index
+        });
+        sound.then(|| Common {
+            only,
+            since,
+            source: table.source.given().map(|source| Name::from(source.value)),
+        })
+    }
+
+    /// The one combination that `since` names.
+    fn one(&mut self, since: &Written<&str>, combinations: &Combinations) -> Option<usize> {
+        let mut all = combinations.all.iter();
+        if let Some(index) = all.position(|combination| &*combination.name == since.value) {
+            return Some(index);
+        }
+        let family = combinations
+            .families
+            .iter()
+            .find(|(name, ..)| &**name == since.value);
+        match family {
+            Some((_, _, range)) if range.len() == 1 => Some(range.start),
+            Some((_, _, range)) => {
+                let message = format!(
+                    "`{}` stands for {} combinations, and `since` takes one",
+                    since.value,
+                    range.len()
+                );
+                let first = &combinations.all[range.start].name;
+                let help = format!("name one of them, such as \"{first}\"");
+                self.meaning.r.problems.say(&since.place, message, help);
+                None
+            }
+            None => {
+                self.unknown(since, combinations, "");
+                None
+            }
+        }
+    }
+
+    fn unknown(&mut self, name: &Written<&str>, combinations: &Combinations, nor: &str) {
+        let message = format!("`{}` is no combination{nor}", name.value);
+        let families = combinations.families.iter().map(|(name, ..)| &**name);
+        let help = remedy(name.value, families, "the combinations are");
+        let problems = &mut self.meaning.r.problems;
+        problems.unknown("combination", &name.place, message, help);
+    }
+
+    fn push(
+        &mut self,
+        kind: LimitKind,
+        target: Target,
+        on: Name,
+        common: &Common,
+        place: &Place,
+    ) {
+        let reads = match &common.only {
+            Some(only) => Reads::Only(only.clone()),
+            None => Reads::Purpose(purpose_of(&kind)),
+        };
+        self.caution_if_unread(&reads, &on, place);
+        self.limits.push(Limit {
+            kind,
+            target,
+            on,
+            reads,
+            since: common.since,
+            source: common.source.clone(),
+            place: place.clone(),
+        });
+    }
+
+    fn caution_if_unread(&mut self, reads: &Reads, on: &Name, place: &Place) {
+        let Some(combinations) = self.combinations else {
+            return;
+        };
+        let is_read = match reads {
+            Reads::Only(only) => !only.is_empty(),
+            Reads::Purpose(wanted) => combinations
+                .families
+                .iter()
+                .any(|(_, purpose, _)| purpose.is_none_or(|purpose| purpose == *wanted)),
+        };
+        if is_read || self.unread.contains(place) {
+            return;
+        }
+        self.unread.push(place.clone());
+        let purpose = match reads {
+            Reads::Only(_) => "that `in` names",
+            Reads::Purpose(Purpose::Service) => "of the purpose \"service\"",
+            Reads::Purpose(Purpose::Strength) => "of the purpose \"strength\"",
+        };
+        let member = on.split('.').next().unwrap_or(on);
+        self.meaning.remarks.push(Remark {
+            about: format!("member.{member}"),
+            text: format!(
+                "no combination reads this limit on `{on}`: there is none {purpose}, so it is \
+                 not checked"
+            ),
+            place: Some(place.clone()),
+            caution: true,
+        });
+    }
+}
+
+/// The limits that a segment or a layer has of its own.
+#[derive(Debug, Clone, Copy, Default)]
+struct Own {
+    tension: bool,
+    compression: bool,
+    force: bool,
+}
+
+impl Own {
+    /// Of a segment, and of a layer of it.
+    fn of(
+        segment: &crate::job::written::segment::Segment<'_>,
+        layer: Option<usize>,
+    ) -> Self {
+        let own = Own::among(&segment.limits);
+        let layer = layer.map_or(Own::default(), |layer| Own::of_layer(segment, layer));
+        Own {
+            tension: own.tension || layer.tension,
+            compression: own.compression || layer.compression,
+            force: own.force,
+        }
+    }
+
+    fn of_layer(segment: &crate::job::written::segment::Segment<'_>, layer: usize) -> Self {
+        match &segment.kind {
+            crate::job::written::segment::Kind::Solid { layers, .. } => layers
+                .get(layer)
+                .map_or(Own::default(), |layer| Own::among(&layer.limits)),
+            _ => Own::default(),
+        }
+    }
+
+    fn among(limits: &Entry<Vec<Limits<'_>>>) -> Self {
+        let any = |is: fn(&Limits<'_>) -> bool| tables(limits).iter().any(is);
+        Own {
+            tension: any(|limits| limits.tension.is_written()),
+            compression: any(|limits| limits.compression.is_written()),
+            force: any(|limits| limits.force.is_written()),
+        }
+    }
+}
+
+fn tables<'e, 't>(limits: &'e Entry<Vec<Limits<'t>>>) -> &'e [Limits<'t>] {
+    limits.given().map_or(&[], |limits| &limits.value)
+}
+
+/// Adds the combinations that a name of `in` covers: one, all of a family, or all of a purpose.
+fn covered(name: &str, combinations: &Combinations, only: &mut Vec<usize>) {
+    let purpose = purpose_named(name);
+    for (family, of, range) in &combinations.families {
+        if &**family == name || purpose.is_some() && (of.is_none() || *of == purpose) {
+            only.extend(range.clone());
+        } else if name.starts_with(&**family) && name.contains('/') {
+            let of_family = range.clone();
+            only.extend(of_family.filter(|&index| &*combinations.all[index].name == name));
+        }
+    }
+}
+
+/// Which combinations read a limit that does not say: by its kind.
+fn purpose_of(kind: &LimitKind) -> Purpose {
+    match kind {
+        LimitKind::Tension { .. }
+        | LimitKind::Compression { .. }
+        | LimitKind::Force(_)
+        | LimitKind::Reaction(_) => Purpose::Strength,
+        LimitKind::Elongation(_)
+        | LimitKind::Displacement(_)
+        | LimitKind::Gap { .. }
+        | LimitKind::Bears => Purpose::Service,
+    }
+}
+
+fn signed<Q: Copy + Neg<Output = Q>, T: Copy>(
+    bound: Bound<T>,
+    value: impl Fn(T) -> Q,
+) -> MovementLimit<Q> {
+    match bound {
+        Bound::Size(size) => MovementLimit {
+            lower: -value(size),
+            upper: value(size),
+        },
+        Bound::Each(lower, upper) => MovementLimit {
+            lower: value(lower),
+            upper: value(upper),
+        },
+    }
+}
+
+fn force_limit(bound: Bound<Force>) -> MovementLimit<Force> {
+    signed(bound, |force| force)
+}
+
+fn movement_limit(bound: Bound<MovementBound>, length: Length) -> MovementLimit<Length> {
+    signed(bound, |bound| match bound {
+        MovementBound::Length(literal) => literal.nominal,
+        MovementBound::Share { divisor } => length / divisor,
+    })
+}
+
+fn joined(member: &Name, part: &Name) -> Name {
+    let mut name = String::with_capacity(member.len() + 1 + part.len());
+    name.push_str(member);
+    name.push('.');
+    name.push_str(part);
+    Name::from(name)
+}

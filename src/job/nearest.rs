@@ -1,0 +1,95 @@
+//! The nearest of the names that would have been right.
+
+/// The candidate that is meant in all likelihood: few letters changed, left out, put in or swapped,
+/// or the same letters in another case. `None` where nothing comes near.
+pub(crate) fn nearest<'c>(
+    written: &str,
+    candidates: impl IntoIterator<Item = &'c str>,
+) -> Option<&'c str> {
+    let length = written.chars().count();
+    if length == 0 || length > 64 {
+        return None;
+    }
+    let written_low = written.to_lowercase();
+    let allowed = (length / 3).clamp(1, 3);
+    candidates
+        .into_iter()
+        .filter(|candidate| !candidate.is_empty())
+        .filter_map(|candidate| {
+            let low = candidate.to_lowercase();
+            if low.len().abs_diff(written_low.len()) > 2 * allowed + 2 {
+                return None;
+            }
+            let distance = distance(&written_low, &low);
+            let shortest = length.min(candidate.chars().count());
+            (distance <= allowed && distance < shortest.max(2)).then_some((distance, candidate))
+        })
+        .min_by_key(|(distance, _)| *distance)
+        .map(|(_, candidate)| candidate)
+}
+
+/// A remedy that names the nearest candidate, or else lists them where they are few.
+pub(crate) fn remedy<'c>(
+    written: &str,
+    candidates: impl IntoIterator<Item = &'c str> + Clone,
+    of_all: &str,
+) -> Option<String> {
+    if let Some(near) = nearest(written, candidates.clone()) {
+        return Some(format!("`{near}` comes nearest"));
+    }
+    let mut few = candidates.into_iter();
+    let mut list = String::new();
+    for candidate in few.by_ref().take(24) {
+        if !list.is_empty() {
+            list.push_str(", ");
+        }
+        list.push('`');
+        list.push_str(candidate);
+        list.push('`');
+    }
+    if list.is_empty() {
+        return None;
+    }
+    if few.next().is_some() {
+        list.push_str(" …");
+    }
+    Some(format!("{of_all} {list}"))
+}
+
+/// How many letters must be changed, left out, put in or swapped with their neighbour.
+fn distance(a: &str, b: &str) -> usize {
+    let a: Vec<char> = a.chars().collect();
+    let b: Vec<char> = b.chars().collect();
+    let mut before: Vec<usize> = Vec::new();
+    let mut last: Vec<usize> = (0..=b.len()).collect();
+    for (i, &from) in a.iter().enumerate() {
+        let mut row = Vec::with_capacity(b.len() + 1);
+        row.push(i + 1);
+        for (j, &to) in b.iter().enumerate() {
+            let mut least = (last[j] + usize::from(from != to))
+                .min(last[j + 1] + 1)
+                .min(row[j] + 1);
+            if i > 0 && j > 0 && from == b[j - 1] && a[i - 1] == to {
+                least = least.min(before[j - 1] + 1);
+            }
+            row.push(least);
+        }
+        before = std::mem::replace(&mut last, row);
+    }
+    last.last().copied().unwrap_or(0)
+}
+
+#[cfg(test)]
+mod tests {
+    use super::nearest;
+
+    #[test]
+    fn a_slip_of_the_pen_is_understood_and_another_word_is_not() {
+        let keys = ["length", "material", "section", "layer"];
+        assert_eq!(nearest("lenght", keys), Some("length")); // two letters swapped
+        assert_eq!(nearest("Material", keys), Some("material")); // another case
+        assert_eq!(nearest("sction", keys), Some("section")); // one left out
+        assert_eq!(nearest("colour", keys), None); // another word
+        assert_eq!(nearest("", keys), None);
+    }
+}

@@ -1,0 +1,191 @@
+//! What is wrong with a job file, and where.
+
+use crate::model::{Name, Place};
+
+/// One fault of a job file, with its place and what to write instead.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Problem {
+    /// What it is about: a range of bytes of the text.
+    pub place: Place,
+    /// What is wrong, in one sentence without a full stop.
+    pub message: String,
+    /// What to write instead, where that can be said.
+    pub help: Option<String>,
+    /// The combination that it belongs to, for one that cannot be solved.
+    pub combination: Option<Name>,
+}
+
+impl Problem {
+    /// A problem at a place, with its remedy.
+    pub fn new(place: &Place, message: String, help: Option<String>) -> Self {
+        Problem {
+            place: place.clone(),
+            message,
+            help,
+            combination: None,
+        }
+    }
+}
+
+/// What a finding rests on, and so whether a fault of the syntax elsewhere may have caused it.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+enum RestsOn {
+    /// The value itself.
+    Itself,
+    /// Something is missing in the table that stands at the place.
+    TheTable,
+    /// Nothing of this name is in tables of this root (`case`, `material`, `member` …).
+    Tables(&'static str),
+}
+
+/// The findings of a run, in the order in which they were made.
+#[derive(Debug, Default)]
+pub(crate) struct Problems {
+    found: Vec<(Problem, RestsOn)>,
+}
+
+impl Problems {
+    /// Something wrong with what stands at the place.
+    pub(crate) fn say(&mut self, place: &Place, message: impl Into<String>, help: impl Into<Help>) {
+        self.push(place, message.into(), help.into(), RestsOn::Itself);
+    }
+
+    /// Something that the table at the place lacks.
+    pub(crate) fn missing(
+        &mut self,
+        place: &Place,
+        message: impl Into<String>,
+        help: impl Into<Help>,
+    ) {
+        self.push(place, message.into(), help.into(), RestsOn::TheTable);
+    }
+
+    /// A name that no table of this root defines.
+    pub(crate) fn unknown(
+        &mut self,
+        root: &'static str,
+        place: &Place,
+        message: impl Into<String>,
+        help: impl Into<Help>,
+    ) {
+        self.push(place, message.into(), help.into(), RestsOn::Tables(root));
+    }
+
+    fn push(&mut self, place: &Place, message: String, help: Help, rests_on: RestsOn) {
+        self.found
+            .push((Problem::new(place, message, help.0), rests_on));
+    }
+
+    /// Whether nothing was found.
+    pub(crate) fn is_empty(&self) -> bool {
+        self.found.is_empty()
+    }
+
+    /// All findings with those of the syntax, in the order of the text, each once. What the syntax
+    /// may have caused is left out.
+    pub(crate) fn with_syntax(self, syntax: Vec<Problem>, text: &str) -> Vec<Problem> {
+        let broken: Vec<Broken> = syntax.iter().map(|p| Broken::at(&p.place, text)).collect();
+        let own = self.found.into_iter().filter(|(problem, rests_on)| {
+            !broken
+                .iter()
+                .any(|broken| broken.may_cause(&problem.place, *rests_on, text))
+        });
+        let mut all: Vec<Problem> = own.map(|(problem, _)| problem).chain(syntax).collect();
+        all.sort_by(|a, b| {
+            (a.place.start, a.place.end, &a.message).cmp(&(b.place.start, b.place.end, &b.message))
+        });
+        all.dedup_by(|a, b| a.place == b.place && a.message == b.message);
+        all
+    }
+}
+
+/// The optional remedy of a problem.
+pub(crate) struct Help(Option<String>);
+
+impl From<&str> for Help {
+    fn from(text: &str) -> Self {
+        Help((!text.is_empty()).then(|| text.to_owned()))
+    }
+}
+
+impl From<String> for Help {
+    fn from(text: String) -> Self {
+        Help((!text.is_empty()).then_some(text))
+    }
+}
+
+impl From<Option<String>> for Help {
+    fn from(text: Option<String>) -> Self {
+        Help(text)
+    }
+}
+
+/// The surroundings of a fault of the syntax.
+struct Broken<'t> {
+    /// The lines that it touches.
+    lines: Place,
+    /// The block of lines from the header above it to the next one.
+    block: Place,
+    /// The first name of the block's header; `None` where the header itself is at fault or there
+    /// is none.
+    root: Option<&'t str>,
+}
+
+impl<'t> Broken<'t> {
+    fn at(place: &Place, text: &'t str) -> Self {
+        let lines = lines_of(place, text);
+        let is_header = |line: &str| line.trim_start().starts_with('[');
+        let mut block = lines.clone();
+        let mut root = None;
+        if !is_header(&text[lines.clone()]) {
+            block.start = 0;
+            let mut end = lines.start;
+            while end > 0 {
+                let start = text[..end - 1].rfind('\n').map_or(0, |at| at + 1);
+                let line = &text[start..end];
+                if is_header(line) {
+                    block.start = start;
+                    let name = line.trim_start().trim_start_matches('[').trim_start();
+                    root = name.split(['.', ']', ' ']).next();
+                    break;
+                }
+                end = start;
+            }
+        }
+        while block.end < text.len() {
+            let end = lines_of(&(block.end + 1..block.end + 1), text).end;
+            if is_header(&text[(block.end + 1).min(end)..end]) {
+                break;
+            }
+            block.end = end;
+        }
+        Broken { lines, block, root }
+    }
+
+    fn may_cause(&self, place: &Place, rests_on: RestsOn, text: &str) -> bool {
+        let lines = lines_of(place, text);
+        if lines.start <= self.lines.end && self.lines.start <= lines.end {
+            return true;
+        }
+        match rests_on {
+            RestsOn::Itself => false,
+            RestsOn::TheTable => self.block.contains(&place.start) || self.root.is_none(),
+            RestsOn::Tables(root) => self.root.is_none_or(|broken| broken == root),
+        }
+    }
+}
+
+/// From the head of the first line of a place to the end of its last, without the line break.
+fn lines_of(place: &Place, text: &str) -> Place {
+    let mut start = place.start.min(text.len());
+    while !text.is_char_boundary(start) {
+        start -= 1;
+    }
+    let mut end = place.end.clamp(start, text.len());
+    while !text.is_char_boundary(end) {
+        end += 1;
+    }
+    let head = text[..start].rfind('\n').map_or(0, |at| at + 1);
+    let tail = text[end..].find('\n').map_or(text.len(), |at| end + at);
+    head..tail
+}

@@ -1,0 +1,71 @@
+//! The house keeps its order: each step knows the ones before it and none after it.
+
+use std::fs;
+use std::path::{Path, PathBuf};
+
+fn sources(folder: &Path) -> Vec<PathBuf> {
+    let mut found = Vec::new();
+    for entry in fs::read_dir(folder).unwrap() {
+        let path = entry.unwrap().path();
+        if path.is_dir() {
+            found.extend(sources(&path));
+        } else if path.extension().is_some_and(|ending| ending == "rs") {
+            found.push(path);
+        }
+    }
+    found
+}
+
+/// The rooms that a source file names in `crate::ROOM`, comments left out.
+fn rooms_named(text: &str) -> Vec<String> {
+    let mut rooms = Vec::new();
+    for line in text.lines().map(str::trim_start).filter(|line| !line.starts_with("//")) {
+        for (at, _) in line.match_indices("crate::") {
+            let rest = &line[at + "crate::".len()..];
+            let room: String = rest.chars().take_while(|c| c.is_alphanumeric() || *c == '_').collect();
+            rooms.push(room);
+        }
+    }
+    rooms
+}
+
+fn breaches(room: &str, forbidden: &[&str]) -> Vec<String> {
+    let root = Path::new(env!("CARGO_MANIFEST_DIR")).join("src").join(room);
+    let mut found = Vec::new();
+    let files = sources(&root);
+    assert!(!files.is_empty(), "no source in {room}");
+    for file in files {
+        for named in rooms_named(&fs::read_to_string(&file).unwrap()) {
+            if forbidden.contains(&named.as_str()) {
+                found.push(format!("{} names crate::{named}", file.display()));
+            }
+        }
+    }
+    found
+}
+
+#[test]
+fn the_proof_does_not_know_the_solver() {
+    assert_eq!(breaches("proof", &["solve", "check", "job", "report", "cli"]), [""; 0]);
+}
+
+#[test]
+fn no_step_knows_a_later_one() {
+    let later: [(&str, &[&str]); 7] = [
+        ("quantity", &["job", "model", "solve", "proof", "result", "check", "report", "cli"]),
+        ("catalogue", &["job", "model", "solve", "proof", "result", "check", "report", "cli"]),
+        ("model", &["job", "solve", "proof", "result", "check", "report", "cli"]),
+        ("job", &["solve", "proof", "result", "check", "report", "cli"]),
+        ("solve", &["job", "proof", "check", "report", "cli"]),
+        ("check", &["job", "proof", "report", "cli"]),
+        ("report", &["job", "solve", "proof", "check", "cli"]),
+    ];
+    for (room, forbidden) in later {
+        assert_eq!(breaches(room, forbidden), [""; 0], "{room}");
+    }
+}
+
+#[test]
+fn a_breach_would_be_seen() {
+    assert_eq!(rooms_named("use crate::solve::member;\n// crate::check\nlet x = crate::quantity::Curve;"), ["solve", "quantity"]);
+}
