@@ -18,8 +18,12 @@ impl Example {
     /// What a line `# KEY: VALUE` at the head of the file says.
     fn stated(&self, key: &str) -> Option<&str> {
         let head = self.text.lines().take_while(|line| line.starts_with('#'));
-        head.filter_map(|line| line.strip_prefix("# ")?.strip_prefix(key)?.strip_prefix(": "))
-            .next()
+        head.filter_map(|line| {
+            line.strip_prefix("# ")?
+                .strip_prefix(key)?
+                .strip_prefix(": ")
+        })
+        .next()
     }
 
     fn members(&self) -> impl Iterator<Item = &MemberResult> {
@@ -74,7 +78,12 @@ fn examples() -> Vec<Example> {
         let text = fs::read_to_string(&path).unwrap();
         let result = lengthwise::check_text(&path.to_string_lossy(), &text);
         let table = text.parse().unwrap();
-        Example { path, text, table, result }
+        Example {
+            path,
+            text,
+            table,
+            result,
+        }
     };
     job_files(&folder()).into_iter().map(read).collect()
 }
@@ -105,9 +114,17 @@ fn every_combination_proves_itself() {
         assert_eq!(example.result.errors, [], "{name}");
         assert!(!example.result.combinations.is_empty(), "{name}");
         for combination in &example.result.combinations {
-            let Residuals { equilibrium, compatibility, energy } = combination.residuals;
+            let Residuals {
+                equilibrium,
+                compatibility,
+                energy,
+            } = combination.residuals;
             for residual in [equilibrium, compatibility, energy] {
-                assert!(residual <= 1e-9, "{name}, {}: {residual:e}", combination.name);
+                assert!(
+                    residual <= 1e-9,
+                    "{name}, {}: {residual:e}",
+                    combination.name
+                );
             }
         }
     }
@@ -117,11 +134,21 @@ fn every_combination_proves_itself() {
 fn the_stated_cautions_are_given() {
     let mut stated = 0;
     for example in examples() {
-        for wanted in example.stated("expected cautions").into_iter().flat_map(|list| list.split("; ")) {
+        for wanted in example
+            .stated("expected cautions")
+            .into_iter()
+            .flat_map(|list| list.split("; "))
+        {
             stated += 1;
             let cautions = &example.result.cautions;
-            let given = cautions.iter().any(|caution| caution.text.contains(wanted) && caution.line.is_some());
-            assert!(given, "{}: no caution says `{wanted}` at a line: {cautions:#?}", example.path.display());
+            let given = cautions
+                .iter()
+                .any(|caution| caution.text.contains(wanted) && caution.line.is_some());
+            assert!(
+                given,
+                "{}: no caution says `{wanted}` at a line: {cautions:#?}",
+                example.path.display()
+            );
         }
     }
     assert!(stated > 10, "the heads of the examples are read");
@@ -131,14 +158,21 @@ fn the_stated_cautions_are_given() {
 #[test]
 fn what_governs_is_neither_idle_nor_on_the_edge() {
     for example in examples() {
-        let largest = example.checks().filter_map(|check| check.utilisation).fold(0.0, f64::max);
+        let largest = example
+            .checks()
+            .filter_map(|check| check.utilisation)
+            .fold(0.0, f64::max);
         let sensible = match example.result.status {
             JobStatus::Pass => 0.3..0.97,
             JobStatus::Fail => 1.1..2.0,
             JobStatus::Unchecked => 0.0..f64::MIN_POSITIVE,
             JobStatus::Error => panic!("{} is in error", example.path.display()),
         };
-        assert!(sensible.contains(&largest), "{}: {largest}", example.path.display());
+        assert!(
+            sensible.contains(&largest),
+            "{}: {largest}",
+            example.path.display()
+        );
     }
 }
 
@@ -156,11 +190,17 @@ fn each_says_whose_work_it_is_and_that_it_is_invented() {
 #[test]
 fn the_index_has_one_line_for_each() {
     let index = fs::read_to_string(folder().join("README.md")).unwrap();
-    let listed: Vec<&str> = index.lines().filter_map(|line| line.strip_prefix("| `")?.split('`').next()).collect();
+    let listed: Vec<&str> = index
+        .lines()
+        .filter_map(|line| line.strip_prefix("| `")?.split('`').next())
+        .collect();
     let mut sorted = listed.clone();
     sorted.sort_unstable();
     let files = job_files(&folder());
-    let files: Vec<_> = files.iter().map(|path| path.file_name().unwrap().to_str().unwrap()).collect();
+    let files: Vec<_> = files
+        .iter()
+        .map(|path| path.file_name().unwrap().to_str().unwrap())
+        .collect();
     assert_eq!(sorted, files);
 }
 
@@ -177,33 +217,58 @@ fn no_kind_of_work_is_missing() {
         }),
         ("stepped column with layers", |job| {
             job.members().any(|member| {
-                member.segments.len() > 2 && member.segments.iter().all(|segment| segment.layers.len() == 2)
+                member.segments.len() > 2
+                    && member
+                        .segments
+                        .iter()
+                        .all(|segment| segment.layers.len() == 2)
             })
         }),
-        ("deck joint", |job| job.members().any(|member| member.segments.iter().any(|segment| segment.gap.is_some()))),
+        ("deck joint", |job| {
+            job.members()
+                .any(|member| member.segments.iter().any(|segment| segment.gap.is_some()))
+        }),
         ("building joint", |job| {
-            job.checks().any(|check| &*check.check == "gap" && check.details.contains_key("max"))
+            job.checks()
+                .any(|check| &*check.check == "gap" && check.details.contains_key("max"))
                 && job.writes("movement", Value::is_table)
         }),
-        ("restrained pipe", |job| job.has("tube") && job.members().any(|member| member.restraint > Some(0.5))),
+        ("restrained pipe", |job| {
+            job.has("tube") && job.members().any(|member| member.restraint > Some(0.5))
+        }),
         ("pile with shaft friction", |job| {
-            job.writes("line", |line| line.as_table().is_some_and(|cases| cases.values().all(Value::is_array)))
+            job.writes("line", |line| {
+                line.as_table()
+                    .is_some_and(|cases| cases.values().all(Value::is_array))
+            })
         }),
-        ("press tie rod", |job| job.has("misfit") && job.writes("side", |side| text(side, "start"))),
+        ("press tie rod", |job| {
+            job.has("misfit") && job.writes("side", |side| text(side, "start"))
+        }),
         ("jack with stop", |job| {
-            job.has("misfit") && job.has("bears") && job.checks().any(|check| &*check.check == "gap")
+            job.has("misfit")
+                && job.has("bears")
+                && job.checks().any(|check| &*check.check == "gap")
         }),
-        ("tapered mast", |job| job.writes("outer", Value::is_array) && job.has("line-down")),
-        ("elastic supports", |job| job.members().any(|member| member.supports.len() >= 5)),
+        ("tapered mast", |job| {
+            job.writes("outer", Value::is_array) && job.has("line-down")
+        }),
+        ("elastic supports", |job| {
+            job.members().any(|member| member.supports.len() >= 5)
+        }),
         ("cold line", |job| {
-            job.result.datum.is_some() && job.writes("temperature", |reading| text(reading, "-161 degC"))
+            job.result.datum.is_some()
+                && job.writes("temperature", |reading| text(reading, "-161 degC"))
         }),
         ("shores on a slope", |job| {
-            job.writes("runs", |runs| text(runs, "deg")) && job.members().any(|member| member.force_max.value < 0.0)
+            job.writes("runs", |runs| text(runs, "deg"))
+                && job.members().any(|member| member.force_max.value < 0.0)
         }),
         ("failing", |job| job.result.status == JobStatus::Fail),
         ("unchecked", |job| job.result.status == JobStatus::Unchecked),
-        ("US units", |job| job.result.units == lengthwise::quantity::Units::US),
+        ("US units", |job| {
+            job.result.units == lengthwise::quantity::Units::US
+        }),
     ];
     let examples = examples();
     assert!(examples.len() >= 14);
@@ -215,16 +280,36 @@ fn no_kind_of_work_is_missing() {
 #[test]
 fn every_kind_of_limit_and_of_combination_is_shown() {
     let examples = examples();
-    let limits =
-        ["tension", "compression", "force", "elongation", "displacement", "reaction", "gap", "bears"];
+    let limits = [
+        "tension",
+        "compression",
+        "force",
+        "elongation",
+        "displacement",
+        "reaction",
+        "gap",
+        "bears",
+    ];
     for limit in limits {
-        let made = examples.iter().flat_map(Example::checks).filter(|check| &*check.check == limit);
+        let made = examples
+            .iter()
+            .flat_map(Example::checks)
+            .filter(|check| &*check.check == limit);
         assert!(made.count() > 1, "no example holds a {limit}");
     }
-    let keys = ["always", "since", "purpose", "source", "in", "like", "modulus", "net", "holes", "count", "mass"];
+    let keys = [
+        "always", "since", "purpose", "source", "in", "like", "modulus", "net", "holes", "count",
+        "mass",
+    ];
     for key in keys {
-        assert!(examples.iter().any(|example| example.has(key)), "no example writes `{key}`");
+        assert!(
+            examples.iter().any(|example| example.has(key)),
+            "no example writes `{key}`"
+        );
     }
-    let yes_or_no = examples.iter().flat_map(Example::checks).filter(|check| check.unit == Unit::None);
+    let yes_or_no = examples
+        .iter()
+        .flat_map(Example::checks)
+        .filter(|check| check.unit == Unit::None);
     assert!(yes_or_no.count() > 0);
 }
