@@ -1,5 +1,7 @@
 //! The example jobs: each runs as it stands, ends as its head says, and proves itself.
 
+#![allow(clippy::unwrap_used)] // of what the tests themselves read
+
 use lengthwise::result::{CheckResult, JobResult, JobStatus, MemberResult, Residuals, Unit};
 use std::fs;
 use std::path::{Path, PathBuf};

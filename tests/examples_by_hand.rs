@@ -4,6 +4,8 @@
 //! library: N, mm and MPa, or kip, in and ksi where the job is in US units. Material values are
 //! those of the standards that the catalogue names.
 
+#![allow(clippy::unwrap_used)] // of what the tests themselves read
+
 use approx::assert_relative_eq;
 use lengthwise::result::JobResult;
 use std::f64::consts::PI;
