@@ -210,10 +210,13 @@ fn text(value: &Value, sought: &str) -> bool {
     value.as_str().is_some_and(|text| text.contains(sought))
 }
 
+/// What tells that a job is of a kind.
+type Told = fn(&Example) -> bool;
+
 /// The kinds of work that the set holds, each told by what only such a job has.
 #[test]
 fn no_kind_of_work_is_missing() {
-    let kinds: [(&str, fn(&Example) -> bool); 15] = [
+    let kinds: [(&str, Told); 15] = [
         ("hanger with thread", |job| {
             job.has("thread") && job.writes("runs", |runs| text(runs, "down"))
         }),
