@@ -22,7 +22,11 @@ fn rail(segments: usize) -> Model {
             "[[member.rail.segment]]\nlength = \"0.6 m\"\nsection = {{ area = \"{area} cm2\" }}\nmaterial = \"rail\"\n"
         );
         if index % 10 == 5 {
-            let _ = writeln!(text, "[[member.rail.support]]\nat = \"{}.end\"\nspring = \"15 kN/mm\"\n", index + 1);
+            let _ = writeln!(
+                text,
+                "[[member.rail.support]]\nat = \"{}.end\"\nspring = \"15 kN/mm\"\n",
+                index + 1
+            );
         }
     }
     text += "[[member.rail.load]]\ntemperature-change = \"+31 K\"\n";
@@ -53,15 +57,23 @@ fn stopped(stops: usize) -> Model {
 #[divan::bench(args = [1_000, 10_000, 100_000])]
 fn segments_solved(bencher: Bencher, segments: usize) {
     let model = rail(segments);
-    bencher.bench(|| solve::member(&model, &model.members[0], &model.combinations[0]).map(|s| s.member.force_max));
+    bencher.bench(|| {
+        solve::member(&model, &model.members[0], &model.combinations[0]).map(|s| s.member.force_max)
+    });
 }
 
 #[divan::bench(args = [1_000, 10_000, 100_000])]
 fn segments_solved_and_proven(bencher: Bencher, segments: usize) {
     let model = rail(segments);
     bencher.bench(|| {
-        let solution = solve::member(&model, &model.members[0], &model.combinations[0]).expect("solved");
-        let residuals = proof::member(&model, &model.members[0], &model.combinations[0], &solution.member);
+        let solution =
+            solve::member(&model, &model.members[0], &model.combinations[0]).expect("solved");
+        let residuals = proof::member(
+            &model,
+            &model.members[0],
+            &model.combinations[0],
+            &solution.member,
+        );
         assert!(residuals.largest() < 1e-9);
         residuals
     });
@@ -70,5 +82,7 @@ fn segments_solved_and_proven(bencher: Bencher, segments: usize) {
 #[divan::bench(args = [100, 1_000, 10_000])]
 fn stops_solved(bencher: Bencher, stops: usize) {
     let model = stopped(stops);
-    bencher.bench(|| solve::member(&model, &model.members[0], &model.combinations[0]).map(|s| s.member.force_max));
+    bencher.bench(|| {
+        solve::member(&model, &model.members[0], &model.combinations[0]).map(|s| s.member.force_max)
+    });
 }

@@ -83,7 +83,10 @@ fn jobs() -> Vec<String> {
 fn parsed_by_toml_alone(bencher: Bencher) {
     let jobs = jobs();
     bencher.bench(|| {
-        let parsed: usize = jobs.iter().map(|job| job.parse::<toml::Table>().expect("sound").len()).sum();
+        let parsed: usize = jobs
+            .iter()
+            .map(|job| job.parse::<toml::Table>().expect("sound").len())
+            .sum();
         assert_eq!(parsed, 4 * JOBS);
         parsed
     });
@@ -93,7 +96,10 @@ fn parsed_by_toml_alone(bencher: Bencher) {
 fn read_into_models(bencher: Bencher) {
     let jobs = jobs();
     bencher.bench(|| {
-        let members: usize = jobs.iter().map(|job| lengthwise::job::read(job).expect("sound").members.len()).sum();
+        let members: usize = jobs
+            .iter()
+            .map(|job| lengthwise::job::read(job).expect("sound").members.len())
+            .sum();
         assert_eq!(members, JOBS);
         members
     });
@@ -103,8 +109,10 @@ fn read_into_models(bencher: Bencher) {
 fn read_solved_proven_and_checked(bencher: Bencher) {
     let jobs = jobs();
     bencher.bench(|| {
-        let combinations: usize =
-            jobs.iter().map(|job| lengthwise::check_text("job.toml", job).result.combinations.len()).sum();
+        let combinations: usize = jobs
+            .iter()
+            .map(|job| lengthwise::check_text("job.toml", job).combinations.len())
+            .sum();
         assert_eq!(combinations, 6 * JOBS);
         combinations
     });

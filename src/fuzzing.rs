@@ -14,8 +14,14 @@ pub fn literal(text: &str) {
     fn sound<Q: quantity::Measure>(text: &str) {
         if let Ok(read) = quantity::read::<Q>(text) {
             let (lower, nominal, upper) = (read.lower.si(), read.nominal.si(), read.upper.si());
-            assert!(lower.is_finite() && upper.is_finite(), "not finite: {text:?}");
-            assert!(lower <= nominal && nominal <= upper, "outside its tolerance: {text:?}");
+            assert!(
+                lower.is_finite() && upper.is_finite(),
+                "not finite: {text:?}"
+            );
+            assert!(
+                lower <= nominal && nominal <= upper,
+                "outside its tolerance: {text:?}"
+            );
         }
     }
     sound::<Length>(text);
@@ -31,7 +37,10 @@ pub fn literal(text: &str) {
         assert!(change.nominal.value.is_finite(), "not finite: {text:?}");
     }
     if let Ok(reading) = quantity::read_reading(text) {
-        assert!(reading.nominal.value >= 0.0, "below absolute zero: {text:?}");
+        assert!(
+            reading.nominal.value >= 0.0,
+            "below absolute zero: {text:?}"
+        );
     }
     drop(quantity::read_stress_limit(text));
     drop(quantity::read_movement_bound(text));
@@ -45,20 +54,36 @@ pub fn job(bytes: &[u8]) {
     let result = crate::check_bytes("fuzz.toml", bytes).result;
     if result.status == JobStatus::Error {
         assert!(!result.errors.is_empty(), "an error without a word");
-        assert!(result.errors.iter().all(|error| error.line.is_some()), "an error without a place");
+        assert!(
+            result.errors.iter().all(|error| error.line.is_some()),
+            "an error without a place"
+        );
     }
     for combination in &result.combinations {
-        assert!(combination.residuals.largest() <= Residuals::LIMIT, "unproven: {}", combination.name);
+        assert!(
+            combination.residuals.largest() <= Residuals::LIMIT,
+            "unproven: {}",
+            combination.name
+        );
     }
     assert!(is_finite(&result), "a result that is no number");
 }
 
 fn is_finite(result: &JobResult) -> bool {
     // JSON has no word for what is not finite: it would be written as null.
-    result.combinations.iter().flat_map(|combination| &combination.members).all(|member| {
-        let stations = member.stations.iter().map(|station| station.displacement.value);
-        stations.chain([member.elongation.value, member.force_max.value]).all(f64::is_finite)
-    })
+    result
+        .combinations
+        .iter()
+        .flat_map(|combination| &combination.members)
+        .all(|member| {
+            let stations = member
+                .stations
+                .iter()
+                .map(|station| station.displacement.value);
+            stations
+                .chain([member.elongation.value, member.force_max.value])
+                .all(f64::is_finite)
+        })
 }
 
 /// Any text is refused as a results document, or is written again as it was read.
@@ -66,8 +91,12 @@ fn is_finite(result: &JobResult) -> bool {
 /// # Panics
 /// Where a document does not survive writing and reading.
 pub fn results(text: &str) {
-    let Ok(document) = serde_json::from_str::<Document>(text) else { return };
-    let Ok(written) = serde_json::to_string(&document) else { return };
+    let Ok(document) = serde_json::from_str::<Document>(text) else {
+        return;
+    };
+    let Ok(written) = serde_json::to_string(&document) else {
+        return;
+    };
     match serde_json::from_str::<Document>(&written) {
         Ok(again) => assert!(again == document, "changed on the way"),
         Err(error) => panic!("cannot read what was written: {error}"),

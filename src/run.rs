@@ -6,7 +6,8 @@ use crate::model::{Combination, Model, Name, Place, Remark};
 use crate::proof;
 use crate::quantity::{Dimension, Style};
 use crate::result::{
-    Caution, CombinationResult, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Residuals, Verdict,
+    Caution, CombinationResult, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Residuals,
+    Verdict,
 };
 use crate::solve::{self, SolveError, Threshold};
 
@@ -27,7 +28,7 @@ pub struct JobRun {
 /// Never fails as a whole: what is wrong with the job stands in the result's errors.
 pub fn check_bytes(file: &str, bytes: &[u8]) -> JobRun {
     match job::decode(bytes) {
-        Ok(text) => check_text(file, &text),
+        Ok(text) => run(file, &text),
         Err(undecoded) => {
             let source = Source::new(file, undecoded.text);
             unread(file, &source, &[undecoded.problem])
@@ -35,8 +36,12 @@ pub fn check_bytes(file: &str, bytes: &[u8]) -> JobRun {
     }
 }
 
-/// Reads, solves, proves and checks the job in `text`; see [`check_bytes`].
-pub fn check_text(file: &str, text: &str) -> JobRun {
+/// The finished result of the job in `text`; see [`check_bytes`].
+pub fn check_text(file: &str, text: &str) -> JobResult {
+    run(file, text).result
+}
+
+fn run(file: &str, text: &str) -> JobRun {
     let source = Source::new(file, text);
     match job::read(&source.text) {
         Ok(model) => solve_and_check(&source, &model),
@@ -46,9 +51,12 @@ pub fn check_text(file: &str, text: &str) -> JobRun {
 
 /// A job that could not be read.
 fn unread(file: &str, source: &Source, problems: &[Problem]) -> JobRun {
-    let mut result = JobResult::unread(file);
+    let mut result = JobResult::empty(file);
     let drawn_errors = put_errors(&mut result, source, problems);
-    JobRun { result, drawn_errors }
+    JobRun {
+        result,
+        drawn_errors,
+    }
 }
 
 /// Enters problems into a result that then is an error, and draws them.
@@ -70,20 +78,35 @@ fn put_errors(result: &mut JobResult, source: &Source, problems: &[Problem]) -> 
 }
 
 fn solve_and_check(source: &Source, model: &Model) -> JobRun {
-    let style = Style { units: model.units, ..Style::default() };
+    let style = Style {
+        units: model.units,
+        ..Style::default()
+    };
     let mut solved = Solved::default();
     for index in 0..model.combinations.len() {
         solved.combination(model, index, style);
     }
     let line_of = |place: &crate::model::Place| source.line_and_column(place).0;
-    let lines: Vec<usize> = model.limits.iter().map(|limit| line_of(&limit.place)).collect();
+    let lines: Vec<usize> = model
+        .limits
+        .iter()
+        .map(|limit| line_of(&limit.place))
+        .collect();
     let since = |index: usize| solved.indices.binary_search(&index).ok();
     let checks: Vec<_> = solved
         .indices
         .iter()
         .enumerate()
         .map(|(at, &index)| {
-            check::combination(model, index, &solved.results[at], &solved.zeros[at], &since, &solved.results, &lines)
+            check::combination(
+                model,
+                index,
+                &solved.results[at],
+                &solved.zeros[at],
+                &since,
+                &solved.results,
+                &lines,
+            )
         })
         .collect();
     for (result, checks) in solved.results.iter_mut().zip(checks) {
@@ -91,7 +114,11 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
     }
 
     let observed: Vec<Observed> = (0..solved.results.len())
-        .map(|at| Observed { index: solved.indices[at], result: &solved.results[at], zeros: &solved.zeros[at] })
+        .map(|at| Observed {
+            index: solved.indices[at],
+            result: &solved.results[at],
+            zeros: &solved.zeros[at],
+        })
         .collect();
     let mut remarks = check::cautions(model, &observed);
     remarks.extend(model.remarks.iter().cloned());
@@ -111,14 +138,21 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         governing: check::governing(&solved.results),
         envelope: check::envelope(&solved.results),
         materials: model.materials.iter().map(material_entry).collect(),
-        ..JobResult::unread(&source.file)
+        ..JobResult::empty(&source.file)
     };
     for remark in remarks {
         if remark.caution {
             let line = remark.place.as_ref().map(line_of);
-            result.cautions.push(Caution { about: remark.about, text: remark.text, line });
+            result.cautions.push(Caution {
+                about: remark.about,
+                text: remark.text,
+                line,
+            });
         } else {
-            result.notes.push(Note { about: remark.about, text: remark.text });
+            result.notes.push(Note {
+                about: remark.about,
+                text: remark.text,
+            });
         }
     }
     result.combinations = solved.results;
@@ -128,7 +162,10 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
     } else {
         put_errors(&mut result, source, &solved.problems)
     };
-    JobRun { result, drawn_errors }
+    JobRun {
+        result,
+        drawn_errors,
+    }
 }
 
 /// What the combinations came to; one that cannot be solved is a problem and has no result.
@@ -145,7 +182,10 @@ struct Solved {
 impl Solved {
     fn combination(&mut self, model: &Model, index: usize, style: Style) {
         let combination = &model.combinations[index];
-        let (mut members, mut zeros) = (Vec::with_capacity(model.members.len()), Vec::with_capacity(model.members.len()));
+        let (mut members, mut zeros) = (
+            Vec::with_capacity(model.members.len()),
+            Vec::with_capacity(model.members.len()),
+        );
         let mut residuals = Residuals::default();
         let problems = self.problems.len();
         for member in &model.members {
@@ -154,14 +194,17 @@ impl Solved {
                 Ok(solution) => {
                     let own = proof::member(model, member, combination, &solution.member);
                     if own.largest() > Residuals::LIMIT {
-                        self.problems.push(unproven(member.name.as_ref(), own, combination, place));
+                        self.problems
+                            .push(unproven(member.name.as_ref(), own, combination, place));
                     }
                     residuals = residuals.worse(own);
                     self.note_free(member.name.as_ref(), &combination.name, &solution.free);
                     members.push(solution.member);
                     zeros.push(solution.zero);
                 }
-                Err(error) => self.problems.push(unsolved(&error, combination, place, style)),
+                Err(error) => self
+                    .problems
+                    .push(unsolved(&error, combination, place, style)),
             }
         }
         if self.problems.len() > problems {
@@ -192,7 +235,10 @@ impl Solved {
         if free.is_empty() || self.remarks.iter().any(|remark| remark.about == about) {
             return;
         }
-        let parts: Vec<String> = free.iter().map(|(from, to)| format!("from `{from}` to `{to}`")).collect();
+        let parts: Vec<String> = free
+            .iter()
+            .map(|(from, to)| format!("from `{from}` to `{to}`"))
+            .collect();
         self.remarks.push(Remark {
             about,
             text: format!(
@@ -208,13 +254,21 @@ impl Solved {
 /// A combination that has no solution.
 fn unsolved(error: &SolveError, combination: &Combination, place: &Place, style: Style) -> Problem {
     let (message, help) = match error {
-        SolveError::Pushed { member, part, newtons, toward } => (
+        SolveError::Pushed {
+            member,
+            part,
+            newtons,
+            toward,
+        } => (
             format!(
                 "in `{}` nothing holds member `{member}` {part}against {} toward its {toward}: it would slide away",
                 combination.name,
                 style.quantity(Dimension::Force, *newtons),
             ),
-            Some("hold it with a support that works in that direction, or balance the load".to_owned()),
+            Some(
+                "hold it with a support that works in that direction, or balance the load"
+                    .to_owned(),
+            ),
         ),
         other => (format!("in `{}`: {other}", combination.name), None),
     };
@@ -224,10 +278,19 @@ fn unsolved(error: &SolveError, combination: &Combination, place: &Place, style:
 }
 
 /// A result that does not close.
-fn unproven(member: &str, residuals: Residuals, combination: &Combination, place: &Place) -> Problem {
+fn unproven(
+    member: &str,
+    residuals: Residuals,
+    combination: &Combination,
+    place: &Place,
+) -> Problem {
     let message = format!(
         "in `{}` the result of member `{member}` does not prove itself: residuals of equilibrium {:.1e}, compatibility {:.1e}, energy {:.1e}, where {:.0e} is allowed",
-        combination.name, residuals.equilibrium, residuals.compatibility, residuals.energy, Residuals::LIMIT,
+        combination.name,
+        residuals.equilibrium,
+        residuals.compatibility,
+        residuals.energy,
+        Residuals::LIMIT,
     );
     let help = "look for stiffnesses or lengths that differ by very many powers of ten".to_owned();
     let mut problem = Problem::new(place, message, Some(help));
@@ -239,7 +302,11 @@ fn unproven(member: &str, residuals: Residuals, combination: &Combination, place
 fn tolerances(model: &Model) -> Option<Remark> {
     let first = model.tolerances.first()?;
     let count = model.tolerances.len();
-    let values = if count == 1 { "value bears a tolerance".to_owned() } else { format!("{count} values bear tolerances") };
+    let values = if count == 1 {
+        "value bears a tolerance".to_owned()
+    } else {
+        format!("{count} values bear tolerances")
+    };
     Some(Remark {
         about: "job".into(),
         text: format!("{values}: the nominal values were used"),
@@ -254,7 +321,10 @@ fn material_entry(material: &crate::catalogue::Material) -> MaterialEntry {
         modulus: material.modulus.value,
         expansion: material.expansion.map(|value| value.value),
         density: material.density.map(|value| value.value),
-        yield_strength: material.yield_strength.first().map(|&(_, value)| value.value),
+        yield_strength: material
+            .yield_strength
+            .first()
+            .map(|&(_, value)| value.value),
         ultimate: material.ultimate.map(|value| value.value),
         proof: material.proof.map(|value| value.value),
         crushing: material.crushing.map(|value| value.value),
@@ -265,7 +335,11 @@ fn material_entry(material: &crate::catalogue::Material) -> MaterialEntry {
 }
 
 fn status(result: &JobResult) -> JobStatus {
-    let mut checks = result.combinations.iter().flat_map(|combination| &combination.checks).peekable();
+    let mut checks = result
+        .combinations
+        .iter()
+        .flat_map(|combination| &combination.checks)
+        .peekable();
     if checks.peek().is_none() {
         JobStatus::Unchecked
     } else if checks.any(|check| check.status == Verdict::Fail) {

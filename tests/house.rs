@@ -19,10 +19,17 @@ fn sources(folder: &Path) -> Vec<PathBuf> {
 /// The rooms that a source file names in `crate::ROOM`, comments left out.
 fn rooms_named(text: &str) -> Vec<String> {
     let mut rooms = Vec::new();
-    for line in text.lines().map(str::trim_start).filter(|line| !line.starts_with("//")) {
+    for line in text
+        .lines()
+        .map(str::trim_start)
+        .filter(|line| !line.starts_with("//"))
+    {
         for (at, _) in line.match_indices("crate::") {
             let rest = &line[at + "crate::".len()..];
-            let room: String = rest.chars().take_while(|c| c.is_alphanumeric() || *c == '_').collect();
+            let room: String = rest
+                .chars()
+                .take_while(|c| c.is_alphanumeric() || *c == '_')
+                .collect();
             rooms.push(room);
         }
     }
@@ -46,16 +53,35 @@ fn breaches(room: &str, forbidden: &[&str]) -> Vec<String> {
 
 #[test]
 fn the_proof_does_not_know_the_solver() {
-    assert_eq!(breaches("proof", &["solve", "check", "job", "report", "cli"]), [""; 0]);
+    assert_eq!(
+        breaches("proof", &["solve", "check", "job", "report", "cli"]),
+        [""; 0]
+    );
 }
 
 #[test]
 fn no_step_knows_a_later_one() {
     let later: [(&str, &[&str]); 7] = [
-        ("quantity", &["job", "model", "solve", "proof", "result", "check", "report", "cli"]),
-        ("catalogue", &["job", "model", "solve", "proof", "result", "check", "report", "cli"]),
-        ("model", &["job", "solve", "proof", "result", "check", "report", "cli"]),
-        ("job", &["solve", "proof", "result", "check", "report", "cli"]),
+        (
+            "quantity",
+            &[
+                "job", "model", "solve", "proof", "result", "check", "report", "cli",
+            ],
+        ),
+        (
+            "catalogue",
+            &[
+                "job", "model", "solve", "proof", "result", "check", "report", "cli",
+            ],
+        ),
+        (
+            "model",
+            &["job", "solve", "proof", "result", "check", "report", "cli"],
+        ),
+        (
+            "job",
+            &["solve", "proof", "result", "check", "report", "cli"],
+        ),
         ("solve", &["job", "proof", "check", "report", "cli"]),
         ("check", &["job", "proof", "report", "cli"]),
         ("report", &["job", "solve", "proof", "check", "cli"]),
@@ -67,5 +93,8 @@ fn no_step_knows_a_later_one() {
 
 #[test]
 fn a_breach_would_be_seen() {
-    assert_eq!(rooms_named("use crate::solve::member;\n// crate::check\nlet x = crate::quantity::Curve;"), ["solve", "quantity"]);
+    assert_eq!(
+        rooms_named("use crate::solve::member;\n// crate::check\nlet x = crate::quantity::Curve;"),
+        ["solve", "quantity"]
+    );
 }

@@ -1,7 +1,7 @@
 //! A material as a member uses it.
 
-use std::sync::Arc;
 use crate::quantity::{Density, Expansion, Length, Stress, ThermodynamicTemperature};
+use std::sync::Arc;
 
 /// A strength that a limit may be a share of.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -49,9 +49,16 @@ impl Material {
     /// where the material gives none, or none for so great a thickness.
     pub fn yield_at(&self, thickness: Option<Length>) -> Option<Stress> {
         let Some(thickness) = thickness else {
-            return self.yield_strength.iter().map(|&(_, strength)| strength).reduce(Stress::min);
+            return self
+                .yield_strength
+                .iter()
+                .map(|&(_, strength)| strength)
+                .reduce(Stress::min);
         };
-        let row = self.yield_strength.iter().find(|(up_to, _)| up_to.is_none_or(|up_to| thickness <= up_to));
+        let row = self
+            .yield_strength
+            .iter()
+            .find(|(up_to, _)| up_to.is_none_or(|up_to| thickness <= up_to));
         row.map(|&(_, strength)| strength)
     }
 }

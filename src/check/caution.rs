@@ -26,10 +26,19 @@ pub struct Observed<'a> {
 
 /// All cautions that the results of a job call for, member by member.
 pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
-    let style = Style { units: model.units, ..Style::default() };
+    let style = Style {
+        units: model.units,
+        ..Style::default()
+    };
     let mut remarks = Vec::new();
     for (index, member) in model.members.iter().enumerate() {
-        let look = Look { model, member, index, observed, style };
+        let look = Look {
+            model,
+            member,
+            index,
+            observed,
+            style,
+        };
         remarks.extend(look.compression());
         remarks.extend(look.slenderness());
         remarks.extend(look.yielding());
@@ -37,7 +46,12 @@ pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
         remarks.extend(look.temperature());
         remarks.extend(look.across());
     }
-    remarks.extend(model.limits.iter().filter_map(|limit| factored_share(model, limit)));
+    remarks.extend(
+        model
+            .limits
+            .iter()
+            .filter_map(|limit| factored_share(model, limit)),
+    );
     remarks
 }
 
@@ -52,18 +66,30 @@ struct Look<'a> {
 impl Look<'_> {
     fn caution(&self, text: String, place: Option<Place>) -> Option<Remark> {
         let place = place.or_else(|| Some(self.member.place.clone()));
-        Some(Remark { about: format!("member.{}", self.member.name), text, place, caution: true })
+        Some(Remark {
+            about: format!("member.{}", self.member.name),
+            text,
+            place,
+            caution: true,
+        })
     }
 
     fn results(&self) -> impl Iterator<Item = (&MemberResult, &str, Threshold)> {
         let index = self.index;
-        self.observed
-            .iter()
-            .map(move |seen| (&seen.result.members[index], seen.result.name.as_ref(), seen.zeros[index]))
+        self.observed.iter().map(move |seen| {
+            (
+                &seen.result.members[index],
+                seen.result.name.as_ref(),
+                seen.zeros[index],
+            )
+        })
     }
 
     /// The worst by `of` over all combinations, with the name of the combination.
-    fn worst<T: PartialOrd + Copy>(&self, of: impl Fn(&MemberResult, Threshold) -> Option<T>) -> Option<(T, &str)> {
+    fn worst<T: PartialOrd + Copy>(
+        &self,
+        of: impl Fn(&MemberResult, Threshold) -> Option<T>,
+    ) -> Option<(T, &str)> {
         let mut worst: Option<(T, &str)> = None;
         for (result, name, zero) in self.results() {
             if let Some(value) = of(result, zero)
@@ -89,17 +115,38 @@ impl Look<'_> {
     }
 
     fn slenderness(&self) -> Option<Remark> {
-        let layers = self.member.segments.iter().filter_map(|segment| match segment.layers() {
-            [only] => Some(only),
-            _ => None,
-        });
-        let ends = |layer: &Layer| [layer.section.gyration_at(0.0), layer.section.gyration_at(1.0)];
-        let least = layers.flat_map(ends).flatten().filter(|radius| radius.value > 0.0).reduce(Length::min)?;
+        let layers = self
+            .member
+            .segments
+            .iter()
+            .filter_map(|segment| match segment.layers() {
+                [only] => Some(only),
+                _ => None,
+            });
+        let ends = |layer: &Layer| {
+            [
+                layer.section.gyration_at(0.0),
+                layer.section.gyration_at(1.0),
+            ]
+        };
+        let least = layers
+            .flat_map(ends)
+            .flatten()
+            .filter(|radius| radius.value > 0.0)
+            .reduce(Length::min)?;
         let slenderness = (self.member.length() / least).value;
         let (limit, how, rule) = if self.greatest_compression().is_some() {
-            (SLENDER_IN_COMPRESSION, "in compression", "AISC 360-22, user note to E2")
+            (
+                SLENDER_IN_COMPRESSION,
+                "in compression",
+                "AISC 360-22, user note to E2",
+            )
         } else {
-            (SLENDER_IN_TENSION, "in tension", "AISC 360-22, user note to D1")
+            (
+                SLENDER_IN_TENSION,
+                "in tension",
+                "AISC 360-22, user note to D1",
+            )
         };
         if slenderness <= limit {
             return None;
@@ -116,14 +163,18 @@ impl Look<'_> {
         for (which, segment) in self.member.segments.iter().enumerate() {
             for (layer_index, layer) in segment.layers().iter().enumerate() {
                 let material = &self.model.materials[layer.material];
-                let Some(limit) = material.yield_at(layer.section.thickness()) else { continue };
+                let Some(limit) = material.yield_at(layer.section.thickness()) else {
+                    continue;
+                };
                 for (result, name, _) in self.results() {
                     let result = &result.segments[which];
                     let (most, least) = match result.layers.get(layer_index) {
                         Some(layer) => (layer.stress_max, layer.stress_min),
                         None => (result.stress_max, result.stress_min),
                     };
-                    let (Some(most), Some(least)) = (most, least) else { continue };
+                    let (Some(most), Some(least)) = (most, least) else {
+                        continue;
+                    };
                     let stress = most.abs().max(least.abs());
                     let ratio = (stress / limit).value;
                     if ratio > 1.0 && worst.as_ref().is_none_or(|(known, ..)| ratio > *known) {
@@ -148,8 +199,14 @@ impl Look<'_> {
     fn movement(&self) -> Option<Remark> {
         let large = self.member.length() * LARGE_MOVEMENT;
         let (moved, combination) = self.worst(|result, _| {
-            let stations = result.stations.iter().map(|station| station.displacement.abs());
-            stations.chain([result.elongation.abs()]).reduce(Length::max).filter(|&moved| moved > large)
+            let stations = result
+                .stations
+                .iter()
+                .map(|station| station.displacement.abs());
+            stations
+                .chain([result.elongation.abs()])
+                .reduce(Length::max)
+                .filter(|&moved| moved > large)
         })?;
         let moved = self.style.quantity(Dimension::Length, moved.value);
         self.caution(
@@ -166,7 +223,9 @@ impl Look<'_> {
             for (which, segment) in self.member.segments.iter().enumerate() {
                 for (layer_index, layer) in segment.layers().iter().enumerate() {
                     let material = &self.model.materials[layer.material];
-                    let Some((least, most)) = material.range else { continue };
+                    let Some((least, most)) = material.range else {
+                        continue;
+                    };
                     let acting = self.member.actions.temperatures.iter();
                     let acting = acting.filter(|t| t.segment == which && t.layer == layer_index);
                     let (mut start, mut end) = (0.0, 0.0);
@@ -182,7 +241,12 @@ impl Look<'_> {
                             };
                             let text = format!(
                                 "temperature of {} in `{}`, `{}` is outside the range of {} to {} for which the values of `{}` hold",
-                                show(from_si(reading)), segment.name, seen.result.name, show(least), show(most), material.id,
+                                show(from_si(reading)),
+                                segment.name,
+                                seen.result.name,
+                                show(least),
+                                show(most),
+                                material.id,
                             );
                             return self.caution(text, Some(layer.place.clone()));
                         }
@@ -197,11 +261,25 @@ impl Look<'_> {
     fn across(&self) -> Option<Remark> {
         let level = self.member.runs?.value.cos().abs();
         let actions = &self.member.actions;
-        let factors_of = |case: usize| self.observed.iter().any(|seen| self.model.combinations[seen.index].factors[case] != 0.0);
+        let factors_of = |case: usize| {
+            self.observed
+                .iter()
+                .any(|seen| self.model.combinations[seen.index].factors[case] != 0.0)
+        };
         // The cosine of a right angle is not quite 0 in double precision.
-        let heavy = level > 1e-12 && actions.weights.iter().any(|weight| weight.number != 0.0 && factors_of(weight.case));
-        let loaded = actions.forces.iter().any(|force| force.across.value != 0.0 && factors_of(force.case))
-            || actions.lines.iter().any(|line| line.across.value != 0.0 && factors_of(line.case));
+        let heavy = level > 1e-12
+            && actions
+                .weights
+                .iter()
+                .any(|weight| weight.number != 0.0 && factors_of(weight.case));
+        let loaded = actions
+            .forces
+            .iter()
+            .any(|force| force.across.value != 0.0 && factors_of(force.case))
+            || actions
+                .lines
+                .iter()
+                .any(|line| line.across.value != 0.0 && factors_of(line.case));
         if !heavy && !loaded {
             return None;
         }
@@ -214,11 +292,19 @@ impl Look<'_> {
 
 /// A share of a strength that already holds a safety factor, read with factored loads.
 fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
-    let (LimitKind::Tension { share, .. } | LimitKind::Compression { share, .. }) = limit.kind else { return None };
+    let (LimitKind::Tension { share, .. } | LimitKind::Compression { share, .. }) = limit.kind
+    else {
+        return None;
+    };
     let ShareFactor(share) = share?;
-    let factored = model.combinations.iter().enumerate().find(|(index, combination)| {
-        super::reads(limit, *index, combination) && combination.factors.iter().any(|&factor| factor > 1.0)
-    });
+    let factored = model
+        .combinations
+        .iter()
+        .enumerate()
+        .find(|(index, combination)| {
+            super::reads(limit, *index, combination)
+                && combination.factors.iter().any(|&factor| factor > 1.0)
+        });
     let (_, combination) = factored?;
     if share >= 1.0 {
         return None;

@@ -12,5 +12,11 @@ pub(super) fn judge(case: &Case, limit: &MovementLimit<Length>) -> Option<Findin
         _ => None,
     };
     let demand = moved(of(case.member)?, case.since.and_then(of));
-    Some(Finding::signed(demand, None, limit, case.zero.length, Unit::Metre))
+    Some(Finding::signed(
+        demand,
+        None,
+        limit,
+        case.zero.length,
+        Unit::Metre,
+    ))
 }

@@ -5,18 +5,34 @@ use crate::result::{CombinationResult, Envelope, MemberResult, Unit};
 /// Every reaction, gap, member elongation and member force: one row each, in the order of the
 /// members, with the combinations that the largest and the least come from.
 pub fn envelope(combinations: &[CombinationResult]) -> Vec<Envelope> {
-    let Some(first) = combinations.first() else { return Vec::new() };
+    let Some(first) = combinations.first() else {
+        return Vec::new();
+    };
     let mut rows = Vec::new();
     for (index, member) in first.members.iter().enumerate() {
         let mut add = |quantity: String, unit: Unit, of: &dyn Fn(&MemberResult) -> Option<f64>| {
-            rows.push(range(format!("{}.{quantity}", member.name), unit, index, combinations, of));
+            rows.push(range(
+                format!("{}.{quantity}", member.name),
+                unit,
+                index,
+                combinations,
+                of,
+            ));
         };
-        add("elongation".into(), Unit::Metre, &|m| Some(m.elongation.value));
-        add("force_max".into(), Unit::Newton, &|m| Some(m.force_max.value));
-        add("force_min".into(), Unit::Newton, &|m| Some(m.force_min.value));
+        add("elongation".into(), Unit::Metre, &|m| {
+            Some(m.elongation.value)
+        });
+        add("force_max".into(), Unit::Newton, &|m| {
+            Some(m.force_max.value)
+        });
+        add("force_min".into(), Unit::Newton, &|m| {
+            Some(m.force_min.value)
+        });
         for (at, segment) in member.segments.iter().enumerate() {
             if segment.gap.is_some() {
-                add(format!("{}.gap", segment.name), Unit::Metre, &|m| m.segments[at].gap.map(|gap| gap.value));
+                add(format!("{}.gap", segment.name), Unit::Metre, &|m| {
+                    m.segments[at].gap.map(|gap| gap.value)
+                });
             }
         }
         for (at, support) in member.supports.iter().enumerate() {
@@ -24,7 +40,9 @@ pub fn envelope(combinations: &[CombinationResult]) -> Vec<Envelope> {
                 m.supports[at].reaction.map(|reaction| reaction.value)
             });
             if support.gap.is_some() {
-                add(format!("{}.gap", support.name), Unit::Metre, &|m| m.supports[at].gap.map(|gap| gap.value));
+                add(format!("{}.gap", support.name), Unit::Metre, &|m| {
+                    m.supports[at].gap.map(|gap| gap.value)
+                });
             }
         }
     }
@@ -40,7 +58,9 @@ fn range(
 ) -> Envelope {
     let (mut most, mut least): (Option<(f64, usize)>, Option<(f64, usize)>) = (None, None);
     for (index, combination) in combinations.iter().enumerate() {
-        let Some(value) = of(&combination.members[member]) else { continue };
+        let Some(value) = of(&combination.members[member]) else {
+            continue;
+        };
         if most.is_none_or(|(known, _)| value > known) {
             most = Some((value, index));
         }
@@ -48,7 +68,8 @@ fn range(
             least = Some((value, index));
         }
     }
-    let name = |found: Option<(f64, usize)>| found.map(|(_, index)| combinations[index].name.clone());
+    let name =
+        |found: Option<(f64, usize)>| found.map(|(_, index)| combinations[index].name.clone());
     Envelope {
         result,
         unit,

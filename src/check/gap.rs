@@ -9,13 +9,17 @@ pub(super) fn judge(case: &Case, min: Option<Length>, max: Option<Length>) -> Op
     let (gap, drawn, at) = match case.limit.target {
         Target::Support { member, support } => {
             let model = &case.model.members[member];
-            let SupportKind::Stop { clearance, .. } = model.supports[support].kind else { return None };
+            let SupportKind::Stop { clearance, .. } = model.supports[support].kind else {
+                return None;
+            };
             let at = model.stations[model.supports[support].station].x;
             (case.member.supports[support].gap?, clearance, at)
         }
         Target::Segment { member, segment } => {
             let model = &case.model.members[member].segments[segment];
-            let SegmentKind::Gap(gap) = model.kind else { return None };
+            let SegmentKind::Gap(gap) = model.kind else {
+                return None;
+            };
             (case.member.segments[segment].gap?, gap.width, model.from)
         }
         _ => return None,
@@ -41,7 +45,11 @@ pub(super) fn judge(case: &Case, min: Option<Length>, max: Option<Length>) -> Op
         finding(min, ratio, gap >= min - zero)
     });
     let most = max.map(|max| {
-        let ratio = if max > Length::default() { Some((gap / max).value) } else { None };
+        let ratio = if max > Length::default() {
+            Some((gap / max).value)
+        } else {
+            None
+        };
         finding(max, ratio, gap <= max * (1.0 + ROUNDING) + zero)
     });
     match (least, most) {
@@ -51,7 +59,11 @@ pub(super) fn judge(case: &Case, min: Option<Length>, max: Option<Length>) -> Op
 }
 
 /// What the ratio was made of.
-fn details(drawn: Length, min: Option<Length>, max: Option<Length>) -> serde_json::Map<String, serde_json::Value> {
+fn details(
+    drawn: Length,
+    min: Option<Length>,
+    max: Option<Length>,
+) -> serde_json::Map<String, serde_json::Value> {
     let mut details = serde_json::Map::new();
     let mut add = |name: &str, value: Length| details.insert(name.to_string(), value.value.into());
     add("drawn", drawn);

@@ -83,7 +83,13 @@ pub fn combination(
                 None => continue,
             },
         };
-        let case = Case { model, limit, member: &result.members[member], zero: zeros[member], since: reference };
+        let case = Case {
+            model,
+            limit,
+            member: &result.members[member],
+            zero: zeros[member],
+            since: reference,
+        };
         if let Some(finding) = judge(&case) {
             checks.push(finding.row(limit, line));
         }
@@ -106,7 +112,17 @@ fn judge(case: &Case) -> Option<Finding> {
 /// The key of a limit in the job file.
 pub fn word(kind: &LimitKind) -> Name {
     static WORDS: LazyLock<[Name; 8]> = LazyLock::new(|| {
-        ["tension", "compression", "force", "elongation", "displacement", "reaction", "gap", "bears"].map(Name::from)
+        [
+            "tension",
+            "compression",
+            "force",
+            "elongation",
+            "displacement",
+            "reaction",
+            "gap",
+            "bears",
+        ]
+        .map(Name::from)
     });
     let index = match kind {
         LimitKind::Tension { .. } => 0,
@@ -151,7 +167,11 @@ impl Finding {
         zero: Quantity<D, SI<f64>, f64>,
         unit: Unit,
     ) -> Self {
-        let bound = if demand.value < 0.0 { limit.lower } else { limit.upper };
+        let bound = if demand.value < 0.0 {
+            limit.lower
+        } else {
+            limit.upper
+        };
         let counts = demand.abs() > zero;
         let (utilisation, status) = utilisation(demand.value.abs(), bound.value.abs(), counts);
         Finding {
@@ -167,7 +187,11 @@ impl Finding {
 
     /// The one of two that is worse: a failure before a pass, then the larger utilisation.
     fn worse(self, other: Self) -> Self {
-        if rank(other.status, other.utilisation) > rank(self.status, self.utilisation) { other } else { self }
+        if rank(other.status, other.utilisation) > rank(self.status, self.utilisation) {
+            other
+        } else {
+            self
+        }
     }
 }
 
@@ -175,17 +199,31 @@ impl Finding {
 pub(crate) fn rank(status: Verdict, utilisation: Option<f64>) -> (bool, f64) {
     let failed = status == Verdict::Fail;
     // A failure without a ratio (a limit of nothing, a stop that should bear) is beyond any ratio.
-    (failed, utilisation.unwrap_or(if failed { f64::INFINITY } else { -1.0 }))
+    (
+        failed,
+        utilisation.unwrap_or(if failed { f64::INFINITY } else { -1.0 }),
+    )
 }
 
 /// Demand over limit by size, and whether it holds. `counts` is whether the demand is above what
 /// counts as zero: against a limit of 0 any that does fails, without a ratio.
 fn utilisation(demand: f64, limit: f64, counts: bool) -> (Option<f64>, Verdict) {
     if limit == 0.0 {
-        return if counts { (None, Verdict::Fail) } else { (Some(0.0), Verdict::Pass) };
+        return if counts {
+            (None, Verdict::Fail)
+        } else {
+            (Some(0.0), Verdict::Pass)
+        };
     }
     let ratio = demand / limit;
-    (Some(ratio), if ratio <= 1.0 + ROUNDING { Verdict::Pass } else { Verdict::Fail })
+    (
+        Some(ratio),
+        if ratio <= 1.0 + ROUNDING {
+            Verdict::Pass
+        } else {
+            Verdict::Fail
+        },
+    )
 }
 
 /// The movement in this combination, less that in the one that the limit counts from.

@@ -6,9 +6,17 @@ use crate::quantity::Force;
 use crate::result::Unit;
 
 pub(super) fn judge(case: &Case, limit: &MovementLimit<Force>) -> Option<Finding> {
-    let Target::Support { member, support } = case.limit.target else { return None };
+    let Target::Support { member, support } = case.limit.target else {
+        return None;
+    };
     let reaction = case.member.supports[support].reaction?;
     let member = &case.model.members[member];
     let at = member.stations[member.supports[support].station].x.value;
-    Some(Finding::signed(reaction, Some(at), limit, case.zero.force, Unit::Newton))
+    Some(Finding::signed(
+        reaction,
+        Some(at),
+        limit,
+        case.zero.force,
+        Unit::Newton,
+    ))
 }

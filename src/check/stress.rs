@@ -38,19 +38,27 @@ fn extreme(case: &Case, area: AreaUsed, pulls: bool) -> Option<(Stress, Length)>
         Target::Segment { segment, .. } => {
             let s = &case.member.segments[segment];
             match area {
-                AreaUsed::Net => ((s.stress_max, s.stress_max_at), (s.stress_min, s.stress_min_at)),
-                AreaUsed::Gross => {
-                    ((s.gross_stress_max, s.gross_stress_max_at), (s.gross_stress_min, s.gross_stress_min_at))
-                }
+                AreaUsed::Net => (
+                    (s.stress_max, s.stress_max_at),
+                    (s.stress_min, s.stress_min_at),
+                ),
+                AreaUsed::Gross => (
+                    (s.gross_stress_max, s.gross_stress_max_at),
+                    (s.gross_stress_min, s.gross_stress_min_at),
+                ),
             }
         }
         Target::Layer { segment, layer, .. } => {
             let l = &case.member.segments[segment].layers[layer];
             match area {
-                AreaUsed::Net => ((l.stress_max, l.stress_max_at), (l.stress_min, l.stress_min_at)),
-                AreaUsed::Gross => {
-                    ((l.gross_stress_max, l.gross_stress_max_at), (l.gross_stress_min, l.gross_stress_min_at))
-                }
+                AreaUsed::Net => (
+                    (l.stress_max, l.stress_max_at),
+                    (l.stress_min, l.stress_min_at),
+                ),
+                AreaUsed::Gross => (
+                    (l.gross_stress_max, l.gross_stress_max_at),
+                    (l.gross_stress_min, l.gross_stress_min_at),
+                ),
             }
         }
         _ => return None,
@@ -65,10 +73,16 @@ fn extreme(case: &Case, area: AreaUsed, pulls: bool) -> Option<(Stress, Length)>
 fn reference_area(case: &Case) -> Option<crate::quantity::Area> {
     let (member, segment, layer) = match case.limit.target {
         Target::Segment { member, segment } => (member, segment, 0),
-        Target::Layer { member, segment, layer } => (member, segment, layer),
+        Target::Layer {
+            member,
+            segment,
+            layer,
+        } => (member, segment, layer),
         _ => return None,
     };
-    let layer = case.model.members[member].segments[segment].layers().get(layer)?;
+    let layer = case.model.members[member].segments[segment]
+        .layers()
+        .get(layer)?;
     let area = layer.strength_area();
     Some(area.start().max(area.end()))
 }

@@ -30,7 +30,10 @@ pub fn read(text: &str) -> Result<Model, Vec<Problem>> {
     let mut reader = written::Reader::new(text);
     let job = written::Job::read(table.get_ref(), &mut reader);
     let model = meant::model(&job, &mut reader);
-    if errors.is_empty() && reader.problems.is_empty() && let Some(model) = model {
+    if errors.is_empty()
+        && reader.problems.is_empty()
+        && let Some(model) = model
+    {
         return Ok(model);
     }
     let syntax = errors

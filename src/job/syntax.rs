@@ -32,8 +32,11 @@ pub(super) fn problem(error: &toml::de::Error, text: &str) -> Problem {
 /// Whether the line up to the place ends in a value without quotes.
 fn unquoted(text: &str, at: usize) -> bool {
     let line = text[..floor(text, at)].rsplit('\n').next().unwrap_or("");
-    line.split_once('=')
-        .is_some_and(|(_, value)| value.trim_start().starts_with(|c: char| c.is_alphanumeric()))
+    line.split_once('=').is_some_and(|(_, value)| {
+        value
+            .trim_start()
+            .starts_with(|c: char| c.is_alphanumeric())
+    })
 }
 
 fn floor(text: &str, at: usize) -> usize {

@@ -2,7 +2,9 @@
 
 use crate::catalogue::Shape;
 use crate::model::{Combination, Layer, Member, Model, Segment, SegmentKind};
-use crate::quantity::{Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress, TemperatureInterval, from_si};
+use crate::quantity::{
+    Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress, TemperatureInterval, from_si,
+};
 
 /// The factored actions, by station, piece, layer and support.
 pub(super) struct Acting<'m> {
@@ -70,7 +72,8 @@ impl<'m> Acting<'m> {
             acting.lines[line.piece].1 += line.end * factor(line.case);
         }
         for weight in &member.actions.weights {
-            acting.layer_mut(weight.segment, weight.layer).weight += weight.number * factor(weight.case);
+            acting.layer_mut(weight.segment, weight.layer).weight +=
+                weight.number * factor(weight.case);
         }
         for change in &member.actions.temperatures {
             let on = acting.layer_mut(change.segment, change.layer);
@@ -78,7 +81,8 @@ impl<'m> Acting<'m> {
             on.warm_end += change.end * factor(change.case);
         }
         for strain in &member.actions.strains {
-            acting.layer_mut(strain.segment, strain.layer).imposed += strain.strain * factor(strain.case);
+            acting.layer_mut(strain.segment, strain.layer).imposed +=
+                strain.strain * factor(strain.case);
         }
         for movement in &member.actions.movements {
             acting.movements[movement.support] += movement.movement * factor(movement.case);
@@ -96,7 +100,8 @@ impl<'m> Acting<'m> {
 
     /// E of a layer in this combination.
     fn modulus(&self, layer: &Layer) -> Stress {
-        self.model.materials[layer.material].modulus * self.combination.modulus_factor(layer.material)
+        self.model.materials[layer.material].modulus
+            * self.combination.modulus_factor(layer.material)
     }
 
     /// The line load at a fraction of a piece, self-weight included, + toward the end.
@@ -106,7 +111,8 @@ impl<'m> Acting<'m> {
         let index = self.member.pieces[piece].segment;
         let segment = &self.member.segments[index];
         let along = -self.member.rise() * STANDARD_GRAVITY;
-        let mut add = |per_length: f64, times: f64| line += from_si::<_, _>(per_length * along * times);
+        let mut add =
+            |per_length: f64, times: f64| line += from_si::<_, _>(per_length * along * times);
         match &segment.kind {
             SegmentKind::Solid { layers, .. } => {
                 for (which, layer) in layers.iter().enumerate() {
@@ -138,7 +144,8 @@ impl<'m> Acting<'m> {
         let none = ForcePerLength::default();
         let index = self.member.pieces[piece].segment;
         let count = self.member.segments[index].layers().len().max(1);
-        self.lines[piece] != (none, none) || (0..count).any(|layer| self.layer(index, layer).weight != 0.0)
+        self.lines[piece] != (none, none)
+            || (0..count).any(|layer| self.layer(index, layer).weight != 0.0)
     }
 
     /// The fraction of the segment's length at a fraction of the piece.
@@ -162,7 +169,9 @@ impl<'m> Acting<'m> {
                 let (mut thermal, mut imposed) = (Force::default(), Force::default());
                 for (which, layer) in layers.iter().enumerate() {
                     let share = self.modulus(layer) * layer.section.area_at(t) * layer.count;
-                    let expansion = self.model.materials[layer.material].expansion.unwrap_or_default();
+                    let expansion = self.model.materials[layer.material]
+                        .expansion
+                        .unwrap_or_default();
                     let (hot, cut) = (expansion * warm(which), self.layer(index, which).imposed);
                     local.rigidity += share;
                     thermal += share * hot;
@@ -174,7 +183,10 @@ impl<'m> Acting<'m> {
                 local
             }
             SegmentKind::Stiffness(part) => {
-                let (hot, cut) = (part.expansion.unwrap_or_default() * warm(0), self.layer(index, 0).imposed);
+                let (hot, cut) = (
+                    part.expansion.unwrap_or_default() * warm(0),
+                    self.layer(index, 0).imposed,
+                );
                 Local {
                     rigidity: part.stiffness * segment.length(),
                     thermal: hot,
@@ -189,9 +201,11 @@ impl<'m> Acting<'m> {
     /// Whether stiffness is the same all along a piece.
     pub(super) fn is_uniform(&self, piece: usize) -> bool {
         let segment: &Segment = &self.member.segments[self.member.pieces[piece].segment];
-        segment.layers().iter().all(|layer| layer.area.degree() == 0 || {
-            let first = layer.area.start();
-            layer.area.coefficients().iter().all(|&area| area == first)
+        segment.layers().iter().all(|layer| {
+            layer.area.degree() == 0 || {
+                let first = layer.area.start();
+                layer.area.coefficients().iter().all(|&area| area == first)
+            }
         })
     }
 }

@@ -12,7 +12,7 @@ mod residual;
 
 use crate::model::{Combination, Member, Model, SegmentKind, Side, SupportKind};
 use crate::quantity::{Energy, Force, Length};
-use crate::result::{MemberResult, Residuals, SupportResult};
+use crate::result::{MemberResult, Residuals, SegmentResult, SupportResult};
 use acting::Acting;
 use piece::Integrated;
 use residual::{Residual, Size};
@@ -23,7 +23,12 @@ use residual::{Residual, Size};
 /// * compatibility: integrated strains against displacements, elongations, supports and gaps, and
 ///   the state of every stop and joint.
 /// * energy: the work of loads and reactions against `∫N (N/EA + e0) dx` (Clapeyron).
-pub fn member(model: &Model, member: &Member, combination: &Combination, result: &MemberResult) -> Residuals {
+pub fn member(
+    model: &Model,
+    member: &Member,
+    combination: &Combination,
+    result: &MemberResult,
+) -> Residuals {
     let mut proof = Proof {
         acting: Acting::on(model, member, combination),
         result,
@@ -31,7 +36,9 @@ pub fn member(model: &Model, member: &Member, combination: &Combination, result:
         equilibrium: Residual::default(),
         compatibility: Residual::default(),
     };
-    let pieces: Vec<Integrated> = (0..member.pieces.len()).map(|piece| proof.integrate(piece)).collect();
+    let pieces: Vec<Integrated> = (0..member.pieces.len())
+        .map(|piece| proof.integrate(piece))
+        .collect();
     proof.stations();
     proof.whole(&pieces);
     proof.pieces(&pieces);
@@ -70,7 +77,10 @@ impl Proof<'_> {
     /// N just before and just after a station, 0 outside the member.
     fn forces_at(&self, station: usize) -> (Force, Force) {
         let station = &self.result.stations[station];
-        (station.force_before.unwrap_or_default(), station.force_after.unwrap_or_default())
+        (
+            station.force_before.unwrap_or_default(),
+            station.force_after.unwrap_or_default(),
+        )
     }
 
     fn displacement(&self, station: usize) -> Length {
@@ -90,7 +100,8 @@ impl Proof<'_> {
             let (before, after) = self.forces_at(station);
             let (load, load_size) = self.acting.forces[station];
             let sizes = before.abs() + after.abs() + load_size + size;
-            self.equilibrium.take((after - before + load + reaction).over(sizes));
+            self.equilibrium
+                .take((after - before + load + reaction).over(sizes));
         }
     }
 
@@ -112,9 +123,12 @@ impl Proof<'_> {
             reaction_size += reaction.abs();
         }
         let totals = &self.result.totals;
-        self.equilibrium.take((applied + reactions).over(size + reaction_size));
-        self.equilibrium.take((totals.applied - applied).over(totals.applied.abs() + size));
-        self.equilibrium.take((totals.reactions - reactions).over(totals.reactions.abs() + reaction_size));
+        self.equilibrium
+            .take((applied + reactions).over(size + reaction_size));
+        self.equilibrium
+            .take((totals.applied - applied).over(totals.applied.abs() + size));
+        self.equilibrium
+            .take((totals.reactions - reactions).over(totals.reactions.abs() + reaction_size));
     }
 
     /// Along every piece: N falls by its line load, and its ends move apart by its strain.
@@ -122,7 +136,8 @@ impl Proof<'_> {
         for (index, piece) in pieces.iter().enumerate() {
             let ((_, start), (end, _)) = (self.forces_at(index), self.forces_at(index + 1));
             let sizes = start.abs() + end.abs() + piece.load_size;
-            self.equilibrium.take((end - start + piece.load).over(sizes));
+            self.equilibrium
+                .take((end - start + piece.load).over(sizes));
             let (from, to) = (self.displacement(index), self.displacement(index + 1));
             let segment = &self.acting.member.segments[self.acting.member.pieces[index].segment];
             if !matches!(segment.kind, SegmentKind::Gap(_)) {
@@ -137,15 +152,21 @@ impl Proof<'_> {
     fn segments(&mut self, pieces: &[Integrated]) {
         let member = self.acting.member;
         let mut at = 0;
-        let (mut force, mut thermal, mut imposed) = (Sum::default(), Sum::default(), Sum::default());
+        let (mut force, mut thermal, mut imposed) =
+            (Sum::default(), Sum::default(), Sum::default());
         for (segment, result) in member.segments.iter().zip(&self.result.segments) {
             let first = at;
             let (mut f, mut t, mut m) = (Sum::default(), Sum::default(), Sum::default());
-            let (mut most, mut least) = (None::<Force>, None::<Force>);
-            while at < pieces.len() && std::ptr::eq(segment, &member.segments[member.pieces[at].segment]) {
+            let (mut most, mut least, mut size) = (None::<Force>, None::<Force>, Force::default());
+            while at < pieces.len()
+                && std::ptr::eq(segment, &member.segments[member.pieces[at].segment])
+            {
                 let piece = &pieces[at];
                 if let SegmentKind::Gap(_) = segment.kind {
-                    f.add(self.displacement(at + 1) - self.displacement(at), Length::default());
+                    f.add(
+                        self.displacement(at + 1) - self.displacement(at),
+                        Length::default(),
+                    );
                 } else {
                     f.add(piece.force, piece.force_size);
                     t.add(piece.thermal, piece.free_size);
@@ -153,18 +174,29 @@ impl Proof<'_> {
                 }
                 most = Some(most.map_or(piece.most, |most| most.max(piece.most)));
                 least = Some(least.map_or(piece.least, |least| least.min(piece.least)));
+                size = size.max(piece.most.abs().max(piece.least.abs()) + piece.load_size);
                 at += 1;
             }
             self.compatibility.take(f.against(result.elongation_force));
-            self.compatibility.take(t.against(result.elongation_temperature));
+            self.compatibility
+                .take(t.against(result.elongation_temperature));
             self.compatibility.take(m.against(result.elongation_misfit));
-            let parts = result.elongation_force + result.elongation_temperature + result.elongation_misfit;
+            let parts =
+                result.elongation_force + result.elongation_temperature + result.elongation_misfit;
             let sizes = f.size + t.size + m.size + result.elongation.abs();
-            self.compatibility.take((result.elongation - parts).over(sizes));
+            self.compatibility
+                .take((result.elongation - parts).over(sizes));
             let ((_, start), (end, _)) = (self.forces_at(first), self.forces_at(at));
-            self.equilibrium.take((result.force_start - start).over(result.force_start.abs() + start.abs()));
-            self.equilibrium.take((result.force_end - end).over(result.force_end.abs() + end.abs()));
-            self.extremes(result, most.unwrap_or_default(), least.unwrap_or_default());
+            self.equilibrium
+                .take((result.force_start - start).over(result.force_start.abs() + start.abs()));
+            self.equilibrium
+                .take((result.force_end - end).over(result.force_end.abs() + end.abs()));
+            self.extremes(
+                result,
+                most.unwrap_or_default(),
+                least.unwrap_or_default(),
+                size,
+            );
             if let SegmentKind::Gap(_) = segment.kind {
                 self.joint(first, result);
             }
@@ -175,26 +207,34 @@ impl Proof<'_> {
             }
         }
         let result = self.result;
-        self.compatibility.take(force.against(result.elongation_force));
-        self.compatibility.take(thermal.against(result.elongation_temperature));
-        self.compatibility.take(imposed.against(result.elongation_misfit));
+        self.compatibility
+            .take(force.against(result.elongation_force));
+        self.compatibility
+            .take(thermal.against(result.elongation_temperature));
+        self.compatibility
+            .take(imposed.against(result.elongation_misfit));
         let ends = self.displacement(result.stations.len() - 1) - self.displacement(0);
         let sizes = force.size + thermal.size + imposed.size + result.elongation.abs();
-        self.compatibility.take((result.elongation - ends).over(sizes));
+        self.compatibility
+            .take((result.elongation - ends).over(sizes));
         self.member_extremes();
     }
 
     /// The extremes of N of a segment against what the proof saw along it. Its places are the ends
-    /// and the nodes, so that an extreme between them may only be larger.
-    fn extremes(&mut self, result: &crate::result::SegmentResult, most: Force, least: Force) {
-        let sizes = |named: Force, seen: Force| named.abs() + seen.abs();
+    /// and the nodes, so that an extreme between them may only be larger. `size` is that of the
+    /// terms which N is the sum of.
+    fn extremes(&mut self, result: &SegmentResult, most: Force, least: Force, size: Force) {
         let under = (most - result.force_max).max(Force::default());
         let over = (result.force_min - least).max(Force::default());
-        self.equilibrium.take(under.over(sizes(result.force_max, most)));
-        self.equilibrium.take(over.over(sizes(result.force_min, least)));
-        for (named, x) in [(result.force_max, result.force_max_at), (result.force_min, result.force_min_at)] {
+        self.equilibrium.take(under.over(size));
+        self.equilibrium.take(over.over(size));
+        for (named, x) in [
+            (result.force_max, result.force_max_at),
+            (result.force_min, result.force_min_at),
+        ] {
             let there = self.force_at(x, named);
-            self.equilibrium.take((named - there).over(named.abs() + there.abs()));
+            self.equilibrium
+                .take((named - there).over(named.abs() + size));
         }
     }
 
@@ -210,48 +250,78 @@ impl Proof<'_> {
             piece::force_at(&self.acting, piece, s, start, end)
         };
         let (here, before) = (at(after), at(after.saturating_sub(1)));
-        if (before - named).abs() < (here - named).abs() { before } else { here }
+        if (before - named).abs() < (here - named).abs() {
+            before
+        } else {
+            here
+        }
     }
 
     fn member_extremes(&mut self) {
         let segments = &self.result.segments;
-        let most = segments.iter().map(|s| s.force_max).fold(None, |m: Option<Force>, f| Some(m.map_or(f, |m| m.max(f))));
-        let least = segments.iter().map(|s| s.force_min).fold(None, |m: Option<Force>, f| Some(m.map_or(f, |m| m.min(f))));
-        for (named, seen) in [(self.result.force_max, most), (self.result.force_min, least)] {
+        let most = segments
+            .iter()
+            .map(|s| s.force_max)
+            .fold(None, |m: Option<Force>, f| Some(m.map_or(f, |m| m.max(f))));
+        let least = segments
+            .iter()
+            .map(|s| s.force_min)
+            .fold(None, |m: Option<Force>, f| Some(m.map_or(f, |m| m.min(f))));
+        for (named, seen) in [
+            (self.result.force_max, most),
+            (self.result.force_min, least),
+        ] {
             let seen = seen.unwrap_or_default();
-            self.equilibrium.take((named - seen).over(named.abs() + seen.abs()));
+            self.equilibrium
+                .take((named - seen).over(named.abs() + seen.abs()));
         }
     }
 
     /// The layers of a segment carry N together.
-    fn layers(&mut self, result: &crate::result::SegmentResult) {
+    fn layers(&mut self, result: &SegmentResult) {
         if result.layers.is_empty() {
             return;
         }
-        let ends: [(Force, fn(&crate::result::LayerResult) -> Force); 2] =
-            [(result.force_start, |layer| layer.force_start), (result.force_end, |layer| layer.force_end)];
+        let ends: [(Force, fn(&crate::result::LayerResult) -> Force); 2] = [
+            (result.force_start, |layer| layer.force_start),
+            (result.force_end, |layer| layer.force_end),
+        ];
         for (whole, of) in ends {
-            let sum = result.layers.iter().fold(Force::default(), |sum, layer| sum + of(layer));
-            let size = result.layers.iter().fold(Force::default(), |sum, layer| sum + of(layer).abs());
-            self.equilibrium.take((whole - sum).over(whole.abs() + size));
+            let sum = result
+                .layers
+                .iter()
+                .fold(Force::default(), |sum, layer| sum + of(layer));
+            let size = result
+                .layers
+                .iter()
+                .fold(Force::default(), |sum, layer| sum + of(layer).abs());
+            self.equilibrium
+                .take((whole - sum).over(whole.abs() + size));
         }
     }
 
     /// A joint: closed, its sides are its width nearer and press; open, nothing goes through.
-    fn joint(&mut self, piece: usize, result: &crate::result::SegmentResult) {
+    fn joint(&mut self, piece: usize, result: &SegmentResult) {
         let segment = &self.acting.member.segments[self.acting.member.pieces[piece].segment];
-        let SegmentKind::Gap(gap) = &segment.kind else { return };
+        let SegmentKind::Gap(gap) = &segment.kind else {
+            return;
+        };
         let (_, force) = self.forces_at(piece);
         let (from, to) = (self.displacement(piece), self.displacement(piece + 1));
         let (stretch, sizes) = (to - from, from.abs() + to.abs() + gap.width);
         let left = result.gap.unwrap_or_default();
         if result.bears == Some(true) {
-            let give = gap.stiffness.map_or(Length::default(), |stiffness| force / stiffness);
-            self.compatibility.take((stretch + gap.width - give).over(sizes + give.abs()));
+            let give = gap
+                .stiffness
+                .map_or(Length::default(), |stiffness| force / stiffness);
+            self.compatibility
+                .take((stretch + gap.width - give).over(sizes + give.abs()));
             self.compatibility.take(left.over(left.abs() + sizes));
-            self.equilibrium.take(force.max(Force::default()).over(self.force_size(piece)));
+            self.equilibrium
+                .take(force.max(Force::default()).over(self.force_size(piece)));
         } else {
-            self.compatibility.take((left - gap.width - stretch).over(left.abs() + sizes));
+            self.compatibility
+                .take((left - gap.width - stretch).over(left.abs() + sizes));
             self.equilibrium.take(force.over(self.force_size(piece)));
         }
     }
@@ -269,15 +339,22 @@ impl Proof<'_> {
         let support = &self.acting.member.supports[index];
         let moved = self.acting.movements[index];
         let displacement = self.displacement(support.station);
-        let Some(reaction) = result.reaction else { return };
+        let Some(reaction) = result.reaction else {
+            return;
+        };
         let sizes = displacement.abs() + moved.abs();
         match support.kind {
             SupportKind::Fixed => self.compatibility.take((displacement - moved).over(sizes)),
             SupportKind::Spring(stiffness) => {
                 let answer = stiffness * (moved - displacement);
-                self.compatibility.take((reaction - answer).over(reaction.abs() + stiffness * sizes));
+                let size = reaction.abs() + stiffness * sizes + self.force_size(support.station);
+                self.compatibility.take((reaction - answer).over(size));
             }
-            SupportKind::Stop { clearance, side, stiffness } => {
+            SupportKind::Stop {
+                clearance,
+                side,
+                stiffness,
+            } => {
                 let (open, push) = match side {
                     Side::End => (moved + clearance - displacement, -reaction),
                     Side::Start => (displacement - moved + clearance, reaction),
@@ -285,18 +362,22 @@ impl Proof<'_> {
                 let (sizes, forces) = (sizes + clearance, self.force_size(support.station));
                 let gap = result.gap.unwrap_or_default();
                 if result.bears == Some(true) {
-                    self.equilibrium.take((-push).max(Force::default()).over(forces));
+                    self.equilibrium
+                        .take((-push).max(Force::default()).over(forces));
                     self.compatibility.take(gap.over(gap.abs() + sizes));
                     match stiffness {
                         Some(stiffness) => {
                             let answer = stiffness * -open;
-                            self.compatibility.take((push - answer).over(push.abs() + stiffness * sizes));
+                            self.compatibility.take(
+                                (push - answer).over(push.abs() + stiffness * sizes + forces),
+                            );
                         }
                         None => self.compatibility.take(open.over(sizes)),
                     }
                 } else {
                     self.equilibrium.take(reaction.over(forces));
-                    self.compatibility.take((gap - open).over(gap.abs() + sizes));
+                    self.compatibility
+                        .take((gap - open).over(gap.abs() + sizes));
                 }
             }
         }
@@ -312,7 +393,13 @@ impl Proof<'_> {
         for (station, &(load, _)) in self.acting.forces.iter().enumerate() {
             take(load * self.displacement(station));
         }
-        for (support, result) in self.acting.member.supports.iter().zip(&self.result.supports) {
+        for (support, result) in self
+            .acting
+            .member
+            .supports
+            .iter()
+            .zip(&self.result.supports)
+        {
             take(result.reaction.unwrap_or_default() * self.displacement(support.station));
         }
         for (index, piece) in pieces.iter().enumerate() {

@@ -36,8 +36,14 @@ pub(super) struct Integrated {
 impl Integrated {
     pub(super) fn over(acting: &Acting, piece: usize, start: Force, end: Force) -> Self {
         let length = acting.member.pieces[piece].length;
-        let mut sum = Integrated { most: start.max(end), least: start.min(end), ..Integrated::default() };
-        if acting.member.segments[acting.member.pieces[piece].segment].layers().is_empty()
+        let mut sum = Integrated {
+            most: start.max(end),
+            least: start.min(end),
+            ..Integrated::default()
+        };
+        if acting.member.segments[acting.member.pieces[piece].segment]
+            .layers()
+            .is_empty()
             && acting.local(piece, 0.5).rigidity == Force::default()
         {
             return sum; // a gap has no strain to integrate
@@ -47,14 +53,23 @@ impl Integrated {
             sum.load = rest_of_line(acting, piece, 0.0);
             sum.load_size = size_of_line(acting, piece);
         }
-        let nodes = if acting.is_uniform(piece) { uniform() } else { tapered() };
+        let nodes = if acting.is_uniform(piece) {
+            uniform()
+        } else {
+            tapered()
+        };
         for node in nodes {
             let local = acting.local(piece, node.s);
             if local.rigidity == Force::default() {
                 continue; // so near to a tip that its area is lost in rounding
             }
-            let force = if has_line { force_at(acting, piece, node.s, start, end) } else { start };
-            let (elastic, free): (Ratio, Ratio) = (force / local.rigidity, local.thermal + local.imposed);
+            let force = if has_line {
+                force_at(acting, piece, node.s, start, end)
+            } else {
+                start
+            };
+            let (elastic, free): (Ratio, Ratio) =
+                (force / local.rigidity, local.thermal + local.imposed);
             let dx = length * node.weight;
             sum.force += elastic * dx;
             sum.force_size += elastic.abs() * dx;
@@ -82,7 +97,11 @@ pub(super) fn force_at(acting: &Acting, piece: usize, s: f64, start: Force, end:
         end + rest_of_line(acting, piece, s)
     } else {
         let length = acting.member.pieces[piece].length;
-        let (q0, q1, q2) = (acting.line(piece, 0.0), acting.line(piece, 0.5 * s), acting.line(piece, s));
+        let (q0, q1, q2) = (
+            acting.line(piece, 0.0),
+            acting.line(piece, 0.5 * s),
+            acting.line(piece, s),
+        );
         start - (q0 + q1 * 4.0 + q2) * (length * (s / 6.0))
     }
 }
@@ -91,7 +110,11 @@ pub(super) fn force_at(acting: &Acting, piece: usize, s: f64, start: Force, end:
 /// is linear and an area quadratic.
 fn rest_of_line(acting: &Acting, piece: usize, s: f64) -> Force {
     let length = acting.member.pieces[piece].length;
-    let (q0, q1, q2) = (acting.line(piece, s), acting.line(piece, 0.5 * (1.0 + s)), acting.line(piece, 1.0));
+    let (q0, q1, q2) = (
+        acting.line(piece, s),
+        acting.line(piece, 0.5 * (1.0 + s)),
+        acting.line(piece, 1.0),
+    );
     (q0 + q1 * 4.0 + q2) * (length * ((1.0 - s) / 6.0))
 }
 

@@ -16,10 +16,21 @@ pub(super) fn uniform() -> &'static [Node] {
     NODES.get_or_init(|| {
         let root = (6.0_f64 / 5.0).sqrt() * 2.0 / 7.0;
         let (inner, outer) = ((3.0_f64 / 7.0 - root).sqrt(), (3.0_f64 / 7.0 + root).sqrt());
-        let (heavy, light) = ((18.0 + 30.0_f64.sqrt()) / 36.0, (18.0 - 30.0_f64.sqrt()) / 36.0);
-        [(-outer, light), (-inner, heavy), (inner, heavy), (outer, light)]
-            .map(|(x, weight)| Node { s: 0.5 * (1.0 + x), weight: 0.5 * weight })
-            .to_vec()
+        let (heavy, light) = (
+            (18.0 + 30.0_f64.sqrt()) / 36.0,
+            (18.0 - 30.0_f64.sqrt()) / 36.0,
+        );
+        [
+            (-outer, light),
+            (-inner, heavy),
+            (inner, heavy),
+            (outer, light),
+        ]
+        .map(|(x, weight)| Node {
+            s: 0.5 * (1.0 + x),
+            weight: 0.5 * weight,
+        })
+        .to_vec()
     })
 }
 
@@ -34,9 +45,15 @@ pub(super) fn tapered() -> &'static [Node] {
             let t = f64::from(k) * STEP;
             let inner = std::f64::consts::FRAC_PI_2 * t.sinh();
             let weight = std::f64::consts::FRAC_PI_2 * t.cosh() / inner.cosh().powi(2);
-            Node { s: 1.0 / (1.0 + (-2.0 * inner).exp()), weight: 0.5 * STEP * weight }
+            Node {
+                s: 1.0 / (1.0 + (-2.0 * inner).exp()),
+                weight: 0.5 * STEP * weight,
+            }
         };
-        (-REACH..=REACH).map(node).filter(|node| node.s > 0.0 && node.s < 1.0).collect()
+        (-REACH..=REACH)
+            .map(node)
+            .filter(|node| node.s > 0.0 && node.s < 1.0)
+            .collect()
     })
 }
 
@@ -53,7 +70,11 @@ mod tests {
     fn four_points_are_exact_to_degree_seven() {
         for degree in 0..8 {
             let exact = 1.0 / f64::from(degree + 1);
-            assert_relative_eq!(integrate(uniform(), |s| s.powi(degree)), exact, max_relative = 1e-14);
+            assert_relative_eq!(
+                integrate(uniform(), |s| s.powi(degree)),
+                exact,
+                max_relative = 1e-14
+            );
         }
     }
 

@@ -9,7 +9,11 @@ pub(super) struct Residual(f64);
 impl Residual {
     /// A leftover that is not a number counts as infinite: it must never pass as small.
     pub(super) fn take(&mut self, leftover: f64) {
-        let leftover = if leftover.is_nan() { f64::INFINITY } else { leftover };
+        let leftover = if leftover.is_nan() {
+            f64::INFINITY
+        } else {
+            leftover
+        };
         self.0 = self.0.max(leftover);
     }
 
@@ -26,6 +30,10 @@ pub(super) trait Size {
 
 impl<D: Dimension + ?Sized> Size for Quantity<D, SI<f64>, f64> {
     fn over(self, size: Self) -> f64 {
-        if self.value == 0.0 { 0.0 } else { self.value.abs() / size.value }
+        if self.value == 0.0 {
+            0.0
+        } else {
+            self.value.abs() / size.value
+        }
     }
 }

@@ -1,6 +1,6 @@
 //! The whole document: what one run found, job by job.
 
-use super::{CombinationResult, Envelope, Governing};
+use super::{CombinationResult, Envelope, Governing, Verdict};
 use crate::model::Name;
 use crate::quantity::Units;
 use serde::{Deserialize, Serialize};
@@ -98,6 +98,57 @@ pub struct JobResult {
     pub envelope: Vec<Envelope>,
 }
 
+impl JobResult {
+    /// A job of which nothing is known but why: a file that cannot be read, or a fault in the
+    /// checking itself.
+    pub fn unreadable(file: &str, error: ErrorEntry) -> Self {
+        JobResult {
+            errors: vec![error],
+            errors_total: 1,
+            ..Self::empty(file)
+        }
+    }
+
+    /// A job of which nothing is known but its name; an error until something is.
+    pub fn empty(file: &str) -> Self {
+        JobResult {
+            file: file.to_owned(),
+            digest: None,
+            title: None,
+            reference: None,
+            prepared_by: None,
+            checked_by: None,
+            date: None,
+            note: None,
+            datum: None,
+            units: Units::default(),
+            status: JobStatus::Error,
+            errors: Vec::new(),
+            errors_total: 0,
+            cautions: Vec::new(),
+            notes: Vec::new(),
+            materials: Vec::new(),
+            combinations: Vec::new(),
+            governing: Vec::new(),
+            envelope: Vec::new(),
+        }
+    }
+
+    /// The one check that decides: a failing one before any that holds, and among those the one
+    /// with the largest utilisation (one that fails without a utilisation before all).
+    pub fn governing_check(&self) -> Option<&Governing> {
+        let rank = |row: &Governing| match (row.status, row.utilisation) {
+            (Verdict::Fail, used) => (1, used.unwrap_or(f64::INFINITY)),
+            (Verdict::Pass, used) => (0, used.unwrap_or(0.0)),
+        };
+        self.governing.iter().reduce(|first, next| {
+            let (held, candidate) = (rank(first), rank(next));
+            let worse = candidate.0 > held.0 || candidate.0 == held.0 && candidate.1 > held.1;
+            if worse { next } else { first }
+        })
+    }
+}
+
 /// What is wrong, where, and what to write instead.
 #[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
 #[allow(missing_docs)]
@@ -159,4 +210,27 @@ pub struct Counts {
     pub unchecked_jobs: usize,
     /// Errors, not jobs with errors.
     pub errors: usize,
+}
+
+impl Counts {
+    /// Adds what one job was found to hold.
+    pub fn add(&mut self, job: &JobResult) {
+        self.files += 1;
+        self.members += job
+            .combinations
+            .iter()
+            .map(|combination| combination.members.len() + combination.without.len())
+            .max()
+            .unwrap_or(0);
+        self.combinations += job.combinations.len();
+        for check in job.combinations.iter().flat_map(|each| &each.checks) {
+            self.checks += 1;
+            match check.status {
+                Verdict::Pass => self.pass += 1,
+                Verdict::Fail => self.fail += 1,
+            }
+        }
+        self.unchecked_jobs += usize::from(job.status == JobStatus::Unchecked);
+        self.errors += job.errors_total;
+    }
 }

@@ -74,6 +74,8 @@ pub struct SegmentResult {
     pub from: Length,
     /// Where it ends.
     pub to: Length,
+    /// The id of its material; null with layers, for a part known by its stiffness, for a gap.
+    pub material: Option<Name>,
     /// Area for stress at its start; null with layers, for a part known by its stiffness, for a gap.
     pub area_start: Option<Area>,
     /// The same at its end.
@@ -132,6 +134,8 @@ pub struct SegmentResult {
 #[allow(missing_docs)] // the same words as of a segment
 pub struct LayerResult {
     pub name: Name,
+    /// The id of its material.
+    pub material: Name,
     pub force_start: Force,
     pub force_end: Force,
     pub stress_max: Option<Stress>,

@@ -248,21 +248,16 @@ impl Chain {
             let mut force = after;
             if let Some(hold) = rigid {
                 let face = self.holds[hold].face;
-                force = match answer {
-                    Answer::Free { force } => force,
-                    Answer::Held { rest, flexibility } if flexibility > Flexibility::default() => {
-                        (face - rest) / flexibility
-                    }
-                    Answer::Held { rest, .. } if (face - rest).abs() <= self.zero.length => after,
-                    Answer::Held { .. } => {
-                        return Err(NoSolution::Contradiction {
-                            first,
-                            last: station,
-                        });
-                    }
-                };
-                solved.reactions[hold] = force - after;
                 solved.displacements[station] = face;
+                let loaded = arriving[station - first].past_load(self.loads[station]);
+                force = self.force_at_rigid(loaded, face, after, (first, station))?;
+                // The springs beside it answer by its displacement, and it takes the rest.
+                let mut rest = force - after;
+                for &(spring, stiffness, _) in &springs {
+                    solved.reactions[spring] = stiffness * (self.holds[spring].face - face);
+                    rest -= solved.reactions[spring];
+                }
+                solved.reactions[hold] = rest;
             } else {
                 solved.displacements[station] = match answer {
                     Answer::Held { rest, flexibility } => rest + flexibility * force,
@@ -271,17 +266,17 @@ impl Chain {
                         solved.displacements[station + 1] - self.links[station].stretch(after)
                     }
                 };
-            }
-            for &(hold, stiffness, answer) in springs.iter().rev() {
-                let left = match answer {
-                    Answer::Free { force } => force,
-                    Answer::Held { rest, flexibility } => {
-                        (force - stiffness * (rest - self.holds[hold].face))
-                            / (one() + stiffness * flexibility)
-                    }
-                };
-                solved.reactions[hold] = left - force;
-                force = left;
+                for &(hold, stiffness, answer) in springs.iter().rev() {
+                    let left = match answer {
+                        Answer::Free { force } => force,
+                        Answer::Held { rest, flexibility } => {
+                            (force - stiffness * (rest - self.holds[hold].face))
+                                / (one() + stiffness * flexibility)
+                        }
+                    };
+                    solved.reactions[hold] = left - force;
+                    force = left;
+                }
             }
             solved.before[station] = match arriving[station - first] {
                 Answer::Free { force } => force,
@@ -292,6 +287,28 @@ impl Chain {
             }
         }
         Ok(())
+    }
+
+    /// N just before a rigid hold, from how the left answers at its face. Where something rigid
+    /// answers, only one of the two is needed, and the other one takes nothing.
+    fn force_at_rigid(
+        &self,
+        answer: Answer,
+        face: Length,
+        after: Force,
+        (first, station): (usize, usize),
+    ) -> Result<Force, NoSolution> {
+        match answer {
+            Answer::Free { force } => Ok(force),
+            Answer::Held { rest, flexibility } if flexibility > Flexibility::default() => {
+                Ok((face - rest) / flexibility)
+            }
+            Answer::Held { rest, .. } if (face - rest).abs() <= self.zero.length => Ok(after),
+            Answer::Held { .. } => Err(NoSolution::Contradiction {
+                first,
+                last: station,
+            }),
+        }
     }
 
     /// What arrives at each station of a group from its left, before its own load and holds.

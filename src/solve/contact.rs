@@ -151,10 +151,13 @@ impl<'c> Line<'c> {
                 self.knots[..at].iter_mut().for_each(push);
             }
             (Side::End, Split::AllBeyond) | (Side::Start, Split::AllBefore) => {
+                self.states.holds[hold] = true;
                 self.straight.iter_mut().for_each(spring);
                 self.knots.iter_mut().for_each(push);
             }
-            (Side::End, Split::AllBefore) | (Side::Start, Split::AllBeyond) => {}
+            (Side::End, Split::AllBefore) | (Side::Start, Split::AllBeyond) => {
+                self.states.holds[hold] = false;
+            }
         }
     }
 
@@ -177,7 +180,9 @@ impl<'c> Line<'c> {
                 self.pass_first(at);
                 self.straight[0] = upright;
             }
-            (Side::End, Split::AllBefore) | (Side::Start, Split::AllBeyond) => {}
+            (Side::End, Split::AllBefore) | (Side::Start, Split::AllBeyond) => {
+                self.states.holds[hold] = false;
+            }
             (Side::End, Split::AllBeyond) | (Side::Start, Split::AllBefore) => {
                 return Err(NoSolution::Contradiction {
                     first: self.first,

@@ -76,31 +76,38 @@ impl PieceDeformation {
         Ok(self.length * Quotient::new(one, self.rigidity)?.integral())
     }
 
-    /// N along the piece where `anchor` is the force at its end (`from_end`) or its start:
-    /// dN/dx = −q.
-    pub(super) fn force(&self, anchor: Force) -> Curve<Force> {
+    /// N along the piece between the forces at its ends, which differ by its line load:
+    /// dN/dx = −q. It is carried from the weaker end; the other end keeps its own value, so that no
+    /// rounding of the sum shows there.
+    pub(super) fn force(&self, start: Force, end: Force) -> Curve<Force> {
         let q = self.line.coefficients();
         if q.iter().all(|&q| q == ForcePerLength::default()) {
-            return Curve::constant(anchor);
+            return Curve::constant(if self.from_end { end } else { start });
         }
         let n = q.len();
         let step = self.length / n as f64;
-        let mut values = [anchor; 9];
+        let mut values = [start; 9];
+        values[n] = end;
         if self.from_end {
-            for i in (0..n).rev() {
+            for i in (1..n).rev() {
                 values[i] = values[i + 1] + q[i] * step;
             }
         } else {
-            for i in 0..n {
+            for i in 0..n - 1 {
                 values[i + 1] = values[i] - q[i] * step;
             }
         }
         Curve::from_coefficients(&values[..=n])
     }
 
-    /// N along the piece between the forces at its ends, which differ by its line load.
-    pub(super) fn force_between(&self, start: Force, end: Force) -> Curve<Force> {
-        self.force(if self.from_end { end } else { start })
+    /// N along the piece while nothing pulls at the end that it is carried from.
+    pub(super) fn force_of_line(&self) -> Curve<Force> {
+        let load = self.load();
+        if self.from_end {
+            self.force(load, Force::default())
+        } else {
+            self.force(Force::default(), -load)
+        }
     }
 
     /// `∫ N dx / EA`: PL/AE, for any taper and line load.

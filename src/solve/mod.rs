@@ -99,7 +99,7 @@ pub fn member(
         .chain
         .settle()
         .map_err(|reason| explain(member, reason))?;
-    let mut result = recover::member(member, &loading, &prepared, &solved, &states)?;
+    let mut result = recover::member(model, member, &loading, &prepared, &solved, &states)?;
     result.restraint = restraint::share(model, member, combination, &loading, &prepared, &solved);
     let free = solved.free.iter().map(|&(first, last)| {
         (
@@ -181,8 +181,7 @@ fn link(piece: &PieceDeformation) -> Result<Link, quotient::Unbounded> {
     } else {
         piece.flexibility()?
     };
-    let unloaded = piece.force(Force::default());
-    let free = piece.stretch(&unloaded)? + piece.thermal + piece.imposed;
+    let free = piece.stretch(&piece.force_of_line())? + piece.thermal + piece.imposed;
     Ok(Link {
         flexibility,
         free,

@@ -5,7 +5,7 @@ use super::deformation::{Elongation, PieceDeformation, layer_strain};
 use super::loading::{LayerLoading, Loading, pieces_of};
 use super::quotient::{Extreme, Quotient};
 use super::{Prepared, SolveError};
-use crate::model::{Layer, Member, Segment, SegmentKind, SupportKind};
+use crate::model::{Layer, Member, Model, Segment, SegmentKind, SupportKind};
 use crate::quantity::{Area, Curve, Force, Length, Ratio, Stress, from_si};
 use crate::result::{
     LayerResult, MemberResult, MemberState, MemberTotals, SegmentResult, StationResult,
@@ -14,6 +14,7 @@ use crate::result::{
 
 /// The finished results of a member.
 pub(super) fn member(
+    model: &Model,
     member: &Member,
     loading: &Loading,
     prepared: &Prepared,
@@ -22,7 +23,9 @@ pub(super) fn member(
 ) -> Result<MemberResult, SolveError> {
     let mut segments = Vec::with_capacity(member.segments.len());
     for index in 0..member.segments.len() {
-        segments.push(segment(member, index, loading, prepared, solved, states)?);
+        segments.push(segment(
+            model, member, index, loading, prepared, solved, states,
+        )?);
     }
     let reactions = solved
         .reactions
@@ -158,6 +161,7 @@ struct LayerRange {
 }
 
 fn segment(
+    model: &Model,
     member: &Member,
     index: usize,
     loading: &Loading,
@@ -201,7 +205,7 @@ fn segment(
             bears = Some(states.links[piece]);
             continue;
         };
-        let along = deformation.force_between(start, end);
+        let along = deformation.force(start, end);
         let pointed = |_| SolveError::PointLoaded {
             member: member.name.clone(),
             segment: segment.name.clone(),
@@ -260,6 +264,7 @@ fn segment(
         name: segment.name.clone(),
         from: segment.from,
         to: segment.to,
+        material: single.map(|layer| model.materials[layer.material].id.clone()),
         area_start: single.map(|layer| layer.strength_area().start()),
         area_end: single.map(|layer| layer.strength_area().end()),
         rigidity_start: rigidity(first, |piece| piece.rigidity.start()),
@@ -284,7 +289,7 @@ fn segment(
         gross_stress_max_at,
         gross_stress_min,
         gross_stress_min_at,
-        layers: layer_results(segment, &layers),
+        layers: layer_results(model, segment, &layers),
     })
 }
 
@@ -309,7 +314,7 @@ fn wider<T: PartialOrd + Copy>(known: Range<T>, other: Range<T>) -> Range<T> {
     }
 }
 
-fn layer_results(segment: &Segment, gathered: &[LayerRange]) -> Vec<LayerResult> {
+fn layer_results(model: &Model, segment: &Segment, gathered: &[LayerRange]) -> Vec<LayerResult> {
     let SegmentKind::Solid {
         layers,
         layered: true,
@@ -324,6 +329,7 @@ fn layer_results(segment: &Segment, gathered: &[LayerRange]) -> Vec<LayerResult>
             (range.gross.values(), range.gross.places());
         LayerResult {
             name: layer.name.clone(),
+            material: model.materials[layer.material].id.clone(),
             force_start: range.force_start,
             force_end: range.force_end,
             stress_max,

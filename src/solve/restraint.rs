@@ -52,7 +52,8 @@ pub(super) fn share(
     let cold = Prepared::of(member, &cold).ok()?;
     let (without, _) = cold.chain.settle().ok()?;
     let mean = mean_force(member, prepared, solved) - mean_force(member, &cold, &without);
-    Some((mean / held).value)
+    // Adding 0 turns a negative zero into a plain one.
+    Some((mean / held).value + 0.0)
 }
 
 /// `∫N dx / L`.
@@ -61,9 +62,7 @@ fn mean_force(member: &Member, prepared: &Prepared, solved: &Solved) -> Force {
     let mut mean = Force::default();
     for (index, (piece, deformation)) in member.pieces.iter().zip(&prepared.pieces).enumerate() {
         let force = match deformation {
-            Some(deformation) => {
-                deformation.force_between(solved.after[index], solved.before[index + 1])
-            }
+            Some(deformation) => deformation.force(solved.after[index], solved.before[index + 1]),
             None => Curve::constant(solved.after[index]),
         };
         mean += force.mean() * (piece.length / total).value;

@@ -110,7 +110,12 @@ impl<'w, 't> Laying<'_, 'w, 't> {
                 for (case, written) in self.by_case(load, weight) {
                     if let Some(on) = on {
                         let (value, place) = (written.value, written.place.clone());
-                        self.weights.push(Cover { case, on, value, place });
+                        self.weights.push(Cover {
+                            case,
+                            on,
+                            value,
+                            place,
+                        });
                     }
                 }
             }
@@ -140,7 +145,12 @@ impl<'w, 't> Laying<'_, 'w, 't> {
     fn heat<T>(&mut self, case: usize, on: Option<On>, value: Heat, written: &Written<T>) {
         if let Some(on) = on {
             let place = written.place.clone();
-            self.heats.push(Cover { case, on, value, place });
+            self.heats.push(Cover {
+                case,
+                on,
+                value,
+                place,
+            });
         }
     }
 
@@ -293,7 +303,11 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         down: bool,
     ) {
         let values = self.by_case(load, force);
-        let slope = if down { self.slope() } else { Some(Sloped::AXIS) };
+        let slope = if down {
+            self.slope()
+        } else {
+            Some(Sloped::AXIS)
+        };
         let station = load.at.given().and_then(|at| self.outline.find(&at.value));
         let (Some(station), Some(slope), Some(_)) = (station, slope, self.member) else {
             return;
@@ -314,9 +328,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
             (Entry::Given(name), _) => self.held.named(name, self.meaning),
             (Entry::Absent, Entry::Given(at)) => {
                 let station = self.outline.find(&at.value);
-                station.and_then(|station| {
-                    self.held.only_one_at(station, &at.place, self.meaning)
-                })
+                station.and_then(|station| self.held.only_one_at(station, &at.place, self.meaning))
             }
             _ => None,
         };
@@ -336,39 +348,45 @@ impl<'w, 't> Laying<'_, 'w, 't> {
     fn lay_weights(&mut self, member: &Member, cells: &Cells) {
         let mut covers = std::mem::take(&mut self.weights);
         let mut laid = Vec::new();
-        narrowest(&mut covers, cells, "weights", self.meaning, |cover, segment, layer, meaning| {
-            if cover.value == 0.0 {
-                return;
-            }
-            let weighs = match &member.segments[segment].kind {
-                SegmentKind::Solid { layers, .. } => {
-                    let layer = &layers[layer];
-                    let material = &meaning.materials.used[layer.material];
-                    if layer.mass.is_none() && material.density.is_none() {
-                        let message = format!(
-                            "weight needs the density of `{}`, which is not given",
-                            material.id
-                        );
-                        let help = format!(
-                            "add `density` in `[material.{}]`, or `mass` to the segment",
-                            material.id
-                        );
-                        meaning.r.problems.say(&cover.place, message, help);
-                    }
-                    true
+        narrowest(
+            &mut covers,
+            cells,
+            "weights",
+            self.meaning,
+            |cover, segment, layer, meaning| {
+                if cover.value == 0.0 {
+                    return;
                 }
-                SegmentKind::Stiffness(part) => part.mass.is_some(),
-                SegmentKind::Gap(_) => false,
-            };
-            if weighs {
-                laid.push(Weight {
-                    case: cover.case,
-                    segment,
-                    layer,
-                    number: cover.value,
-                });
-            }
-        });
+                let weighs = match &member.segments[segment].kind {
+                    SegmentKind::Solid { layers, .. } => {
+                        let layer = &layers[layer];
+                        let material = &meaning.materials.used[layer.material];
+                        if layer.mass.is_none() && material.density.is_none() {
+                            let message = format!(
+                                "weight needs the density of `{}`, which is not given",
+                                material.id
+                            );
+                            let help = format!(
+                                "add `density` in `[material.{}]`, or `mass` to the segment",
+                                material.id
+                            );
+                            meaning.r.problems.say(&cover.place, message, help);
+                        }
+                        true
+                    }
+                    SegmentKind::Stiffness(part) => part.mass.is_some(),
+                    SegmentKind::Gap(_) => false,
+                };
+                if weighs {
+                    laid.push(Weight {
+                        case: cover.case,
+                        segment,
+                        layer,
+                        number: cover.value,
+                    });
+                }
+            },
+        );
         if !laid.is_empty() {
             self.slope();
         }
@@ -382,31 +400,37 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         let length = self.outline.length().unwrap_or(1.0);
         let mut laid = Vec::new();
         let what = "temperatures";
-        narrowest(&mut covers, cells, what, self.meaning, |cover, segment, layer, meaning| {
-            let Some(change) = change_of(cover, member, datum_is_wrong, meaning) else {
-                return;
-            };
-            let part = match cover.on {
-                On::Case | On::Member => {
-                    let segment = &member.segments[segment];
-                    Along {
-                        start: change.at(segment.from.value / length),
-                        end: change.at(segment.to.value / length),
+        narrowest(
+            &mut covers,
+            cells,
+            what,
+            self.meaning,
+            |cover, segment, layer, meaning| {
+                let Some(change) = change_of(cover, member, datum_is_wrong, meaning) else {
+                    return;
+                };
+                let part = match cover.on {
+                    On::Case | On::Member => {
+                        let segment = &member.segments[segment];
+                        Along {
+                            start: change.at(segment.from.value / length),
+                            end: change.at(segment.to.value / length),
+                        }
                     }
+                    On::Segment(_) | On::Layer(..) => change,
+                };
+                if !expands(cover, member, segment, layer, &part, meaning) {
+                    return;
                 }
-                On::Segment(_) | On::Layer(..) => change,
-            };
-            if !expands(cover, member, segment, layer, &part, meaning) {
-                return;
-            }
-            laid.push(Temperatures {
-                case: cover.case,
-                segment,
-                layer,
-                start: part.start,
-                end: part.end,
-            });
-        });
+                laid.push(Temperatures {
+                    case: cover.case,
+                    segment,
+                    layer,
+                    start: part.start,
+                    end: part.end,
+                });
+            },
+        );
         self.actions.temperatures = laid;
     }
 

@@ -164,7 +164,10 @@ fn few_enough(meaning: &mut Meaning<'_, '_>) -> bool {
     let mut total = Some(0u128);
     let mut over = None;
     for combination in &meaning.job.combinations {
-        let lists = combination.factors.iter().map(|(_, factors)| &factors.value);
+        let lists = combination
+            .factors
+            .iter()
+            .map(|(_, factors)| &factors.value);
         let product = lists.fold(Some(1u128), |product, factors| match factors {
             Factors::One(_) => product,
             Factors::Each(list) => product?.checked_mul(list.len() as u128),

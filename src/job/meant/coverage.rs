@@ -139,7 +139,9 @@ fn twice<V>(first: &Cover<V>, second: &Cover<V>, what: &str, meaning: &mut Meani
     };
     let line = meaning.line(first.place.start);
     let case = meaning.job.cases.get(second.case);
-    let of_case = case.map_or(String::new(), |case| format!(" of the case `{}`", case.name.value));
+    let of_case = case.map_or(String::new(), |case| {
+        format!(" of the case `{}`", case.name.value)
+    });
     let message = format!("two {what}{of_case} act on one place, the other in line {line}");
     let help = "keep one; the narrower of two wins only where they are of different width \
                 (layer, segment, member, case)";

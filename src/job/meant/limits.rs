@@ -201,13 +201,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         self.gap(table, target, &on, common);
     }
 
-    fn gap(
-        &mut self,
-        table: &Limits<'t>,
-        target: Target,
-        on: &dyn Fn() -> Name,
-        common: &Common,
-    ) {
+    fn gap(&mut self, table: &Limits<'t>, target: Target, on: &dyn Fn() -> Name, common: &Common) {
         if let Entry::Given(gap) = &table.gap {
             let (min, max) = gap.value;
             let kind = LimitKind::Gap { min, max };
@@ -360,14 +354,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         problems.unknown("combination", &name.place, message, help);
     }
 
-    fn push(
-        &mut self,
-        kind: LimitKind,
-        target: Target,
-        on: Name,
-        common: &Common,
-        place: &Place,
-    ) {
+    fn push(&mut self, kind: LimitKind, target: Target, on: Name, common: &Common, place: &Place) {
         let reads = match &common.only {
             Some(only) => Reads::Only(only.clone()),
             None => Reads::Purpose(purpose_of(&kind)),
@@ -427,10 +414,7 @@ struct Own {
 
 impl Own {
     /// Of a segment, and of a layer of it.
-    fn of(
-        segment: &crate::job::written::segment::Segment<'_>,
-        layer: Option<usize>,
-    ) -> Self {
+    fn of(segment: &crate::job::written::segment::Segment<'_>, layer: Option<usize>) -> Self {
         let own = Own::among(&segment.limits);
         let layer = layer.map_or(Own::default(), |layer| Own::of_layer(segment, layer));
         Own {

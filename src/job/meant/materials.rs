@@ -1,7 +1,7 @@
 //! Materials: the job's own with what `like` adds, and those of the library that are used.
 
-use super::lookup::Lookup;
 use super::Meaning;
+use super::lookup::Lookup;
 use crate::catalogue::{self, Material};
 use crate::job::nearest::remedy;
 use crate::job::written::{Entry, Job, Reader, Written, material as written};
@@ -26,11 +26,7 @@ enum State {
 }
 
 impl<'w> Materials<'w> {
-    pub(super) fn of<'t>(
-        job: &'w Job<'t>,
-        r: &mut Reader<'t>,
-        remarks: &mut Vec<Remark>,
-    ) -> Self {
+    pub(super) fn of<'t>(job: &'w Job<'t>, r: &mut Reader<'t>, remarks: &mut Vec<Remark>) -> Self {
         let ids = Lookup::new(job.materials.iter().map(|own| own.id.value).collect());
         let mut states: Vec<State> = job.materials.iter().map(|_| State::Open).collect();
         for index in 0..job.materials.len() {
@@ -246,5 +242,9 @@ fn value<T: Copy>(own: &Entry<T>, base: Option<T>) -> Option<Option<T>> {
 fn unknown_help(id: &str, own: &Lookup<&str>) -> Option<String> {
     let all = own.texts().chain(catalogue::ids().map(|id| id as &str));
     let all: Vec<&str> = all.collect();
-    remedy(id, all, "write one of the library, or define `[material.…]`; there are")
+    remedy(
+        id,
+        all,
+        "write one of the library, or define `[material.…]`; there are",
+    )
 }

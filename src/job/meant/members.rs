@@ -240,8 +240,10 @@ fn names_differ<'w, 't>(
     outline: &Outline<'w, 't>,
     meaning: &mut Meaning<'w, 't>,
 ) {
-    let supports: &[WrittenSupport<'t>] =
-        whole.supports.given().map_or(&[], |supports| &supports.value);
+    let supports: &[WrittenSupport<'t>] = whole
+        .supports
+        .given()
+        .map_or(&[], |supports| &supports.value);
     let segments = outline.names.names();
     let mut places: Vec<&Place> = outline
         .segments

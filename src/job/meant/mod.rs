@@ -22,16 +22,16 @@ use crate::quantity::Units;
 use materials::Materials;
 
 /// What all parts of this phase share.
-pub(super) struct Meaning<'w, 't> {
-    pub(super) job: &'w Job<'t>,
-    pub(super) r: &'w mut Reader<'t>,
-    pub(super) remarks: Vec<Remark>,
-    pub(super) materials: Materials<'w>,
+struct Meaning<'w, 't> {
+    job: &'w Job<'t>,
+    r: &'w mut Reader<'t>,
+    remarks: Vec<Remark>,
+    materials: Materials<'w>,
 }
 
 impl<'t> Meaning<'_, 't> {
     /// The number of the line in which a place begins, for messages that name two places.
-    pub(super) fn line(&self, at: usize) -> usize {
+    fn line(&self, at: usize) -> usize {
         let head = self.r.text.get(..at).unwrap_or(self.r.text);
         1 + head.bytes().filter(|byte| *byte == b'\n').count()
     }

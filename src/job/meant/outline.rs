@@ -3,8 +3,8 @@
 use super::Meaning;
 use super::lookup::Lookup;
 use crate::job::nearest::remedy;
-use crate::job::written::station::Station as WrittenStation;
 use crate::job::written::segment::{Kind, Segment as WrittenSegment};
+use crate::job::written::station::Station as WrittenStation;
 use crate::job::written::{Entry, Written};
 use crate::model::{Name, Piece, Place, Station};
 use crate::quantity::{Length, from_si};
@@ -115,7 +115,8 @@ impl<'w, 't> Outline<'w, 't> {
                 problems.unknown("member", place, message, help);
             }
             Fault::Outside(length) => {
-                let message = format!("this station lies outside the member, which is {length} m long");
+                let message =
+                    format!("this station lies outside the member, which is {length} m long");
                 let help = "distances count from the member's start";
                 problems.say(place, message, help);
             }
@@ -130,10 +131,7 @@ impl<'w, 't> Outline<'w, 't> {
         }
     }
 
-    fn spot(
-        &self,
-        station: &WrittenStation<'t>,
-    ) -> Result<Spot, Fault<'t>> {
+    fn spot(&self, station: &WrittenStation<'t>) -> Result<Spot, Fault<'t>> {
         let find = |name: &'t str| self.names.find(name).ok_or(Fault::NoSegment(name));
         match *station {
             WrittenStation::Start => Ok(Spot::Bound(0)),
@@ -212,10 +210,7 @@ impl<'w, 't> Outline<'w, 't> {
     }
 
     /// The index of a station, once the member is cut.
-    pub(super) fn find(
-        &self,
-        station: &WrittenStation<'t>,
-    ) -> Option<usize> {
+    pub(super) fn find(&self, station: &WrittenStation<'t>) -> Option<usize> {
         match self.spot(station).ok()? {
             Spot::Bound(index) => self.station_of_bound.get(index).copied(),
             Spot::Inside(x) => {
@@ -239,7 +234,12 @@ impl<'w, 't> Outline<'w, 't> {
     /// The distance of a bound.
     pub(super) fn bound(&self, index: usize) -> Length {
         let bounds = self.bounds.as_ref();
-        from_si(bounds.and_then(|b| b.get(index)).copied().unwrap_or_default())
+        from_si(
+            bounds
+                .and_then(|b| b.get(index))
+                .copied()
+                .unwrap_or_default(),
+        )
     }
 }
 

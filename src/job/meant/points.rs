@@ -72,7 +72,10 @@ fn needed_at(
     let coefficients = area.coefficients();
     let second = match end {
         "start" => coefficients.get(1),
-        _ => coefficients.len().checked_sub(2).map(|at| &coefficients[at]),
+        _ => coefficients
+            .len()
+            .checked_sub(2)
+            .map(|at| &coefficients[at]),
     };
     let is_cone = second.is_none_or(|second| *second <= Area::default());
     let piece = if end == "start" {

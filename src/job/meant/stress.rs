@@ -66,7 +66,8 @@ pub(super) fn allowed(
     };
     let Some(value) = value else {
         let word = word(strength);
-        let message = format!("this is a share of the {word} strength of `{id}`, which is not given");
+        let message =
+            format!("this is a share of the {word} strength of `{id}`, which is not given");
         let help = format!("add `{word}` in `[material.{id}]`, or write the limit as a stress");
         meaning.r.problems.say(&limit.place, message, help);
         return None;

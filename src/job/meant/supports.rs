@@ -12,8 +12,6 @@ use crate::model::{Name, Place, Support, SupportKind};
 pub(super) struct Held {
     /// In the order of the file, `start` and `end` before the rest; `None` where one is at fault.
     pub(super) supports: Option<Vec<Support>>,
-    /// How many of them are the keys `start` and `end`.
-    pub(super) ends: usize,
 }
 
 /// The supports of a member that is cut.
@@ -45,7 +43,6 @@ pub(super) fn supports<'w, 't>(
             None => sound = false,
         }
     }
-    let ends = supports.len();
     for written in whole.supports.given().map_or(&[][..], |all| &all.value) {
         match support(written, outline) {
             Some(support) => supports.push(support),
@@ -55,7 +52,6 @@ pub(super) fn supports<'w, 't>(
     sound &= agree(&supports, meaning);
     Held {
         supports: sound.then_some(supports),
-        ends,
     }
 }
 
@@ -92,7 +88,11 @@ fn agree(supports: &[Support], meaning: &mut Meaning<'_, '_>) -> bool {
         for &other in others {
             let support = &supports[other];
             if let Some(&fixed) = fixed {
-                let line = meaning.line(supports[if other == fixed { first } else { fixed }].place.start);
+                let line = meaning.line(
+                    supports[if other == fixed { first } else { fixed }]
+                        .place
+                        .start,
+                );
                 let message = format!(
                     "two supports stand at `{}`, and one is fixed: the other (line {line}) never \
                      acts",

@@ -55,7 +55,13 @@ impl<'t> Combination<'t> {
                 match factor(value, r) {
                     Some(factors) => {
                         let place = value.span();
-                        read.push((case, Written { value: factors, place }));
+                        read.push((
+                            case,
+                            Written {
+                                value: factors,
+                                place,
+                            },
+                        ));
                     }
                     None => sound = false,
                 }

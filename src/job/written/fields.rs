@@ -90,7 +90,10 @@ impl<'t> Fields<'t> {
                         known.table,
                         kind_of(other)
                     ),
-                    format!("write its keys in {{ }} or under a header; {}", listed(known.keys)),
+                    format!(
+                        "write its keys in {{ }} or under a header; {}",
+                        listed(known.keys)
+                    ),
                 );
                 None
             }

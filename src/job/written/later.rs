@@ -3,11 +3,23 @@
 
 /// The table in which it stands (`""` for any), the key, and what it is about.
 const LATER: &[(&str, &str, &str)] = &[
-    ("job file", "point", "assemblies of members that share points"),
+    (
+        "job file",
+        "point",
+        "assemblies of members that share points",
+    ),
     ("job file", "body", "bodies that members carry"),
-    ("job file", "hold", "assemblies of members that share points"),
+    (
+        "job file",
+        "hold",
+        "assemblies of members that share points",
+    ),
     ("job file", "watch", "watched displacements"),
-    ("job file", "load", "loads on points and bodies; loads stand in their member"),
+    (
+        "job file",
+        "load",
+        "loads on points and bodies; loads stand in their member",
+    ),
     ("member", "between", "members between points"),
     ("member", "carries", "one-way members"),
     ("combination", "without", "members taken out"),
@@ -16,11 +28,31 @@ const LATER: &[(&str, &str, &str)] = &[
     ("material", "modulus-at", "laws of temperature"),
     ("material", "yield-at", "laws of temperature"),
     ("material", "ultimate-at", "laws of temperature"),
-    ("load", "preload", "a force at assembly; a known misfit is `misfit`"),
-    ("load", "turns", "nut turns; write them as a `misfit` of −number × pitch"),
-    ("load", "take-up", "turnbuckles; write them as a `misfit` of −turns × the sum of the pitches"),
-    ("section", "pipe", "pipes by designation; write `tube` with its dimensions"),
-    ("section", "rebar", "bars by designation; write `round` or `area`"),
+    (
+        "load",
+        "preload",
+        "a force at assembly; a known misfit is `misfit`",
+    ),
+    (
+        "load",
+        "turns",
+        "nut turns; write them as a `misfit` of −number × pitch",
+    ),
+    (
+        "load",
+        "take-up",
+        "turnbuckles; write them as a `misfit` of −turns × the sum of the pitches",
+    ),
+    (
+        "section",
+        "pipe",
+        "pipes by designation; write `tube` with its dimensions",
+    ),
+    (
+        "section",
+        "rebar",
+        "bars by designation; write `round` or `area`",
+    ),
     ("section", "strand", "strands by designation; write `area`"),
     ("section", "rope", "ropes; write `area`"),
     ("section", "stock", "stock sizes; write `round` or `bar`"),

@@ -184,9 +184,11 @@ impl<'t> Limits<'t> {
             r.problems.say(&place, message, "take it out");
         }
         if let Some(table) = value.get_ref().as_table()
-            && table
-                .keys()
-                .all(|key| [&COMMON[..], &["area"]].concat().contains(&key.get_ref().as_ref()))
+            && table.keys().all(|key| {
+                [&COMMON[..], &["area"]]
+                    .concat()
+                    .contains(&key.get_ref().as_ref())
+            })
             && !(limits.area.is_written() || limits.since.is_written())
         {
             let message = "this limit holds nothing";
@@ -296,10 +298,7 @@ fn movement_bound<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Bound<
     })
 }
 
-fn displacements<'t>(
-    value: &'t Value<'t>,
-    r: &mut Reader<'t>,
-) -> Option<Vec<Displacement<'t>>> {
+fn displacements<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Vec<Displacement<'t>>> {
     let one = |value: &'t Value<'t>, r: &mut Reader<'t>| {
         let mut fields = Fields::of(value, DISPLACEMENT, r)?;
         let at = fields.required("at", "\"end\"", r, station);
@@ -316,10 +315,7 @@ fn displacements<'t>(
     }
 }
 
-fn gap<'t>(
-    value: &'t Value<'t>,
-    r: &mut Reader<'t>,
-) -> Option<(Option<Length>, Option<Length>)> {
+fn gap<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<(Option<Length>, Option<Length>)> {
     let mut fields = Fields::of(value, GAP, r)?;
     let min = fields.entry("min", r, value::not_negative("min"));
     let max = fields.entry("max", r, value::not_negative("max"));
@@ -359,7 +355,8 @@ fn area<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<AreaUsed> {
         "gross" => Some(AreaUsed::Gross),
         "net" => Some(AreaUsed::Net),
         other => {
-            let message = format!("a stress stands on the `gross` or the `net` area, not `{other}`");
+            let message =
+                format!("a stress stands on the `gross` or the `net` area, not `{other}`");
             let help = remedy(other, ["gross", "net"], "write");
             r.problems.say(&value.span(), message, help);
             None

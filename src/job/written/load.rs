@@ -140,9 +140,7 @@ fn action<'t>(fields: &mut Fields<'t>, r: &mut Reader<'t>) -> Option<Action<'t>>
         "line" => by_case(value, r, value::along(value::quantity)).map(Action::Line),
         "line-down" => by_case(value, r, value::along(value::quantity)).map(Action::LineDown),
         "weight" => by_case(value, r, value::number).map(Action::Weight),
-        "temperature-change" => {
-            by_case(value, r, value::along(value::change)).map(Action::Change)
-        }
+        "temperature-change" => by_case(value, r, value::along(value::change)).map(Action::Change),
         "temperature" => by_case(value, r, value::along(value::reading)).map(Action::Reading),
         "misfit" => by_case(value, r, value::quantity).map(Action::Misfit),
         "strain" => by_case(value, r, value::strain).map(Action::Strain),
@@ -178,7 +176,10 @@ fn places_fit(fields: &Fields<'_>, action: &str, r: &mut Reader<'_>) -> bool {
     match action {
         "force" | "down" if !fields.has("at") => lacks("`at`", "add `at = \"end\"`"),
         "movement" if !fields.has("at") && !fields.has("support") => {
-            lacks("`support` or `at`", "add `support` with the name of the support that moves");
+            lacks(
+                "`support` or `at`",
+                "add `support` with the name of the support that moves",
+            );
         }
         _ => {}
     }

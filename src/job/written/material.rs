@@ -108,7 +108,10 @@ fn yield_by_thickness<'t>(
             sound = false;
             continue;
         };
-        if table.last().is_some_and(|(last, _)| *last >= Some(thickness)) {
+        if table
+            .last()
+            .is_some_and(|(last, _)| *last >= Some(thickness))
+        {
             let message = "the thicknesses of this table do not rise";
             let help = "each row holds up to its thickness; write the thinnest first";
             r.problems.say(&row.span(), message, help);

@@ -149,7 +149,8 @@ fn runs<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Angle> {
         "level" => return Some(quantity::from_si(0.0)),
         text if text.starts_with(char::is_alphabetic) => {
             let message = format!("no direction is called `{text}`");
-            let help = "write \"up\", \"down\", \"level\", or an angle above level such as \"30 deg\"";
+            let help =
+                "write \"up\", \"down\", \"level\", or an angle above level such as \"30 deg\"";
             r.problems.say(&value.span(), message, help);
             return None;
         }

@@ -28,7 +28,14 @@ use toml::de::DeTable;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "job file",
-    keys: &["job", "case", "combination", "material", "default", "member"],
+    keys: &[
+        "job",
+        "case",
+        "combination",
+        "material",
+        "default",
+        "member",
+    ],
 };
 
 /// Every kind of table with the keys that its reader asks for. Tables whose keys are names
@@ -140,8 +147,7 @@ impl<'t> Job<'t> {
         let members = tables(&mut fields, "member", r);
         if members.is_empty() && !fields.has("member") {
             let help = "add one: `[member.tie]`";
-            r.problems
-                .missing(&(0..0), "a job needs a member", help);
+            r.problems.missing(&(0..0), "a job needs a member", help);
         }
         for (name, value) in members {
             if name::is_for_a_part(name.value, &name.place, r) {

@@ -43,8 +43,7 @@ const fn keys(table: &'static str, keys: &'static [&'static str]) -> Keys {
 }
 
 /// Reads the value of a kind's key; what stands beside it in the section is asked for there.
-type ReadKind =
-    for<'t> fn(&'t Value<'t>, &mut Fields<'t>, &mut Reader<'t>) -> Option<Section>;
+type ReadKind = for<'t> fn(&'t Value<'t>, &mut Fields<'t>, &mut Reader<'t>) -> Option<Section>;
 
 const KINDS: &[(&str, ReadKind)] = &[
     ("round", round),
@@ -185,11 +184,7 @@ fn bar<'t>(value: &'t Value<'t>, _: &mut Fields<'t>, r: &mut Reader<'t>) -> Opti
     }))
 }
 
-fn hollow_box<'t>(
-    value: &'t Value<'t>,
-    _: &mut Fields<'t>,
-    r: &mut Reader<'t>,
-) -> Option<Section> {
+fn hollow_box<'t>(value: &'t Value<'t>, _: &mut Fields<'t>, r: &mut Reader<'t>) -> Option<Section> {
     let mut fields = Fields::of(value, BOX, r)?;
     let width = needed(&mut fields, "width", r);
     let depth = needed(&mut fields, "depth", r);
@@ -252,7 +247,10 @@ fn thread<'t>(
 /// The table of a rolled shape; its designation is for a later version.
 fn rolled<'t>(value: &'t Value<'t>, known: Keys, r: &mut Reader<'t>) -> Option<Fields<'t>> {
     if let DeValue::String(designation) = value.get_ref() {
-        let about = format!("rolled shapes by designation; write `{}` with its dimensions", known.table);
+        let about = format!(
+            "rolled shapes by designation; write `{}` with its dimensions",
+            known.table
+        );
         let (message, help) = refusal(designation, &about);
         r.problems.say(&value.span(), message, help);
         return None;
@@ -263,7 +261,11 @@ fn rolled<'t>(value: &'t Value<'t>, known: Keys, r: &mut Reader<'t>) -> Option<F
             known.table,
             kind_of(value.get_ref())
         );
-        let help = format!("write `{} = {{ {} }}`", known.table, known.keys.join(" = …, ") + " = …");
+        let help = format!(
+            "write `{} = {{ {} }}`",
+            known.table,
+            known.keys.join(" = …, ") + " = …"
+        );
         r.problems.say(&value.span(), message, help);
         return None;
     }

@@ -193,9 +193,7 @@ impl<'t> Layer<'t> {
             fields.lacks("section", "{ area = \"0.352 m2\" }", r);
             layer.section = Entry::Wrong;
         }
-        layer.limits = fields.entry("limit", r, |value, r| {
-            Limits::read(value, Stands::Layer, r)
-        });
+        layer.limits = fields.entry("limit", r, |value, r| Limits::read(value, Stands::Layer, r));
         fields.finish(r);
         Some(layer)
     }

@@ -120,7 +120,9 @@ fn side<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Side> {
         "end" => Some(Side::End),
         "start" => Some(Side::Start),
         other => {
-            let message = format!("a stop blocks movement toward the \"end\" or the \"start\", not `{other}`");
+            let message = format!(
+                "a stop blocks movement toward the \"end\" or the \"start\", not `{other}`"
+            );
             let help = remedy(other, ["end", "start"], "write");
             r.problems.say(&value.span(), message, help);
             None

@@ -101,10 +101,7 @@ pub(crate) fn too_small(key: &str, zero: bool, place: &Place, r: &mut Reader<'_>
 }
 
 /// A change of temperature, with its sign.
-pub(crate) fn change<'t>(
-    value: &'t Value<'t>,
-    r: &mut Reader<'t>,
-) -> Option<TemperatureInterval> {
+pub(crate) fn change<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<TemperatureInterval> {
     let dimension = Dimension::TemperatureChange;
     literal(value, r, dimension, quantity::read_change).map(|literal| r.noted(&literal, value))
 }
@@ -127,10 +124,7 @@ pub(crate) fn strain<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<qua
 }
 
 /// What a stress is held to: a stress, a share of a strength, or a bare 0 for none at all.
-pub(crate) fn stress_limit<'t>(
-    value: &'t Value<'t>,
-    r: &mut Reader<'t>,
-) -> Option<StressLimit> {
+pub(crate) fn stress_limit<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<StressLimit> {
     if is_zero(value) {
         return Some(StressLimit::Stress(nominal(Measure::from_si(0.0))));
     }
@@ -242,7 +236,11 @@ fn literal<'t, T>(
             }
         },
         other => {
-            let message = format!("{} is expected here, not {}", dimension.name(), kind_of(other));
+            let message = format!(
+                "{} is expected here, not {}",
+                dimension.name(),
+                kind_of(other)
+            );
             let example = dimension.example();
             let help = match other {
                 DeValue::Integer(_) | DeValue::Float(_) => format!(

@@ -1,0 +1,220 @@
+//! The text report of results made by hand.
+
+use super::*;
+use crate::quantity::Units;
+use crate::report::sample;
+use unicode_width::UnicodeWidthStr;
+
+const PAGE: Layout = Layout {
+    width: 80,
+    colour: false,
+    digits: 4,
+};
+
+fn whole(job: &JobResult, layout: &Layout) -> String {
+    let mut out = Vec::new();
+    write_job(&mut out, job, layout).unwrap();
+    String::from_utf8(out).unwrap()
+}
+
+fn line(job: &JobResult) -> String {
+    let mut out = Vec::new();
+    write_line(&mut out, job, 22, &PAGE).unwrap();
+    String::from_utf8(out).unwrap()
+}
+
+/// The lines of a report from one that begins with `from`, up to the next empty one.
+fn block(text: &str, from: &str) -> String {
+    let lines = text.lines().skip_while(|line| !line.starts_with(from));
+    let lines: Vec<&str> = lines.take_while(|line| !line.is_empty()).collect();
+    lines.join("\n")
+}
+
+#[test]
+fn the_report_keeps_the_page_and_leaves_no_blanks_at_line_ends() {
+    for job in [sample::failing(), sample::unchecked(), sample::unreadable()] {
+        let text = whole(&job, &PAGE);
+        for line in text.lines() {
+            assert!(line.width() <= 80, "too wide: {line}");
+            assert_eq!(line, line.trim_end());
+        }
+        assert!(text.ends_with("a licensed engineer\ndecide.\n"));
+        assert!(text.contains("Signs: N and stress are + in tension"));
+    }
+}
+
+#[test]
+fn the_head_says_what_the_job_is_and_what_came_of_it() {
+    let text = whole(&sample::failing(), &PAGE);
+    let expected = "\
+Linkspan 2, hanger and post
+===========================
+verdict      fail: 1 of 4 checks fails
+reference    LS-31 rev B
+file         linkspan/hanger.toml
+datum        10.00 degC
+prepared by  R. Aune
+note         Loads as of the survey of the spring; the post is looked at as
+             built.
+";
+    assert!(text.starts_with(expected), "{text}");
+}
+
+#[test]
+fn a_stress_over_its_limit_or_near_it_is_warned_of_at_the_head() {
+    let text = whole(&sample::failing(), &PAGE);
+    let expected = "\
+warning      hanger.lower thread at 2850 mm, combination strength/live=1.5:
+             tension of 342.0 MPa against 300.0 MPa allowable, ratio 1.140
+warning      hanger.shank at 2850 mm, combination strength/live=1.5: tension of
+             290.0 MPa against 300.0 MPa allowable, ratio 0.967";
+    assert_eq!(block(&text, "warning"), expected);
+
+    // 94 % is not near, and a movement has no warning, however far over its limit.
+    let mut job = sample::failing();
+    job.governing.remove(0);
+    job.governing[0].utilisation = Some(0.94);
+    job.governing[1].utilisation = Some(1.5);
+    job.governing[1].status = crate::result::Verdict::Fail;
+    assert!(!whole(&job, &PAGE).contains("warning"));
+}
+
+#[test]
+fn segments_say_make_up_forces_and_stresses_with_their_layers() {
+    let text = whole(&sample::failing(), &PAGE);
+    let expected = "\
+tier 1          2850               84.25   81.00    95.00  1250
+tier 1.grout          grout       -40.00  -41.00
+tier 1.bars           rod-steel   -40.00  -41.00
+joint          150.0               84.25   81.00";
+    assert!(text.contains(expected), "{text}");
+    let elongation = "
+              elongation         from  from misfit  elongation
+              from force  temperature   and strain      in all    gap
+segment             [mm]         [mm]         [mm]        [mm]   [mm]  bears
+----------------------------------------------------------------------------
+tier 1             1.080            0            0       1.080
+joint              1.080            0            0       1.080  4.500  no
+whole member       2.160            0            0       2.160
+";
+    assert!(text.contains(elongation), "{text}");
+}
+
+#[test]
+fn supports_say_reaction_gap_and_whether_they_bear() {
+    let text = whole(&sample::failing(), &PAGE);
+    let expected = "\
+support  at     kind         [kN]   [mm]  bears
+-----------------------------------------------
+base     start  spring      41.00
+kerb     start  stop            0  2.300  no
+cap      start  stop    undecided      0  yes";
+    assert_eq!(
+        block(&text, "support  at     kind         [kN]   [mm]"),
+        expected
+    );
+}
+
+#[test]
+fn checks_say_demand_limit_utilisation_verdict_source_and_line() {
+    let text = whole(&sample::failing(), &PAGE);
+    assert!(
+        text.contains("tension     hanger.lower thread   342.0  300.0  MPa         1.140  fail\n")
+    );
+    assert!(
+        text.contains("bears       post.cap                yes    yes                     pass\n")
+    );
+    assert!(
+        text.contains("tension     hanger.lower thread  2850  net     44  contract, clause 4.2\n")
+    );
+}
+
+#[test]
+fn a_combination_says_its_purpose_and_factors_and_proves_itself() {
+    let text = whole(&sample::failing(), &PAGE);
+    let title = "Combination strength/live=1.5, for strength: 1.35 dead - 0.5 frost + 1.5 live\n";
+    assert!(text.contains(title), "{text}");
+    let proof = "Relative residuals: equilibrium 1.1e-16, compatibility 2.2e-16, energy 0.0e0\n";
+    assert!(text.contains(proof), "{text}");
+    // In a job without cases the one combination has nothing to say of factors.
+    assert!(whole(&sample::unchecked(), &PAGE).contains("\nCombination all\n"));
+}
+
+#[test]
+fn cautions_and_notes_stand_with_their_place() {
+    let text = whole(&sample::failing(), &PAGE);
+    assert!(text.contains("- member.post (line 31): carries compression, and no buckling"));
+    assert!(text.contains("- member.hanger: nominal values were used"));
+}
+
+#[test]
+fn the_verdict_words_are_four() {
+    let verdict = |job: &JobResult| block(&whole(job, &PAGE), "verdict");
+    assert!(verdict(&sample::unchecked()).starts_with("verdict      unchecked: no limit"));
+    assert!(verdict(&sample::unreadable()).starts_with("verdict      error: 2 errors"));
+    let mut passing = sample::failing();
+    passing.status = crate::result::JobStatus::Pass;
+    assert!(verdict(&passing).starts_with("verdict      pass: all 4 checks hold"));
+}
+
+#[test]
+fn us_units_and_digits_are_obeyed() {
+    let mut job = sample::failing();
+    job.units = Units::US;
+    let layout = Layout { digits: 6, ..PAGE };
+    let text = whole(&job, &layout);
+    // 342 MPa at 6894.757293168 Pa a psi, 84.25 kN at 4448.2216152605 N a kip: exact definitions.
+    assert!(text.contains("49.6029"), "{text}");
+    assert!(text.contains("18.9402 kip"), "{text}");
+    assert!(text.contains("datum        50.0000 degF"), "{text}");
+    assert!(text.contains("1.14000"), "{text}");
+}
+
+#[test]
+fn a_wide_page_holds_a_table_in_one() {
+    let wide = Layout { width: 160, ..PAGE };
+    let text = whole(&sample::failing(), &wide);
+    let rows = text
+        .lines()
+        .filter(|line| line.starts_with("tension     hanger.shank"));
+    assert_eq!(rows.count(), 2); // governing, and the combination's own
+}
+
+#[test]
+fn a_brief_of_one_job_keeps_the_governing_checks_alone() {
+    let mut out = Vec::new();
+    write_brief(&mut out, &sample::failing(), &PAGE).unwrap();
+    let text = String::from_utf8(out).unwrap();
+    assert!(text.contains("Governing checks") && text.contains("Signs: "));
+    assert!(!text.contains("Member ") && !text.contains("Materials"));
+}
+
+#[test]
+fn a_brief_of_many_has_a_line_a_job() {
+    assert_eq!(
+        line(&sample::failing()),
+        "fail       linkspan/hanger.toml    1.140 tension on hanger.lower thread, combination \
+         strength/live=1.5\n"
+    );
+    assert_eq!(
+        line(&sample::unchecked()),
+        "unchecked  linkspan/trial.toml\n"
+    );
+    assert_eq!(
+        line(&sample::unreadable()),
+        "error      linkspan/broken.toml    the member `tie` has no segment\n"
+    );
+}
+
+#[test]
+fn counts_say_what_was_looked_at() {
+    let mut counts = Counts::default();
+    counts.add(&sample::failing());
+    counts.add(&sample::unreadable());
+    let mut out = Vec::new();
+    write_counts(&mut out, &counts, &PAGE).unwrap();
+    assert_eq!(
+        String::from_utf8(out).unwrap(),
+        "Looked at 2 files, 2 members, 1 combination and 4 checks: 3 pass, 1 fail; 2\nerrors.\n"
+    );
+}
