@@ -65,7 +65,8 @@ fn compare(number: usize, chain: &Chain, result: &JobResult, state: &State) {
         &state.support_gap,
         &state.joint_gap,
     ];
-    let length_scale = lengths.map(|l| largest(l)).into_iter().fold(0.0, f64::max);
+    // Where nothing moves by a micrometre, rounding is held against that.
+    let length_scale = lengths.map(|l| largest(l)).into_iter().fold(1e-6, f64::max);
     let force_scale = largest(&state.force_before).max(largest(&state.reaction));
     let near = |what: &str, found: f64, expected: f64, scale: f64| {
         assert!(
