@@ -177,7 +177,10 @@ impl<'w, 't> Laying<'_, 'w, 't> {
                     format!("add `case`; the cases are `{}`", names.join("`, `"))
                 });
                 let message = "in a job with cases each load names its case";
-                self.meaning.r.problems.missing(&load.place, message, help);
+                self.meaning
+                    .r
+                    .problems
+                    .missing("case", &load.place, message, help);
                 Vec::new()
             }
             (ByCase::Each(_), Entry::Given(case)) => {
@@ -210,6 +213,9 @@ impl<'w, 't> Laying<'_, 'w, 't> {
             None => (written.value, None),
         };
         let problems = &mut self.meaning.r.problems;
+        if self.outline.segments.is_empty() {
+            return None;
+        }
         let Some(index) = self.outline.names.find(segment) else {
             if !self.outline.segments.iter().any(|s| s.name.is_wrong()) {
                 let message = format!("no segment of this member is called `{segment}`");
@@ -456,7 +462,10 @@ fn change_of(
             let message = "a reading of temperature needs a datum";
             let help = "add `datum = \"10 degC\"` to `[job]`, the temperature at which lengths \
                         are as drawn, or write a `temperature-change`";
-            meaning.r.problems.say(&cover.place, message, help);
+            meaning
+                .r
+                .problems
+                .missing("datum", &cover.place, message, help);
         }
         return None;
     };

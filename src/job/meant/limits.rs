@@ -288,7 +288,14 @@ impl<'w, 't> Laying<'_, 'w, 't> {
 
     /// What `in`, `since` and `source` of a table say; `None` where one is at fault.
     fn common(&mut self, table: &Limits<'t>) -> Option<Common> {
-        let combinations = self.combinations?;
+        let Some(combinations) = self.combinations else {
+            // They are at fault; what else is wrong with the limit is looked for all the same.
+            return Some(Common {
+                only: None,
+                since: None,
+                source: None,
+            });
+        };
         let mut sound = !(table.names.is_wrong() || table.since.is_wrong());
         let only = table.names.given().map(|names| {
             let mut only = Vec::new();

@@ -202,7 +202,7 @@ fn made<'t>(
     let Some(modulus) = modulus else {
         let message = format!("the material `{}` needs a `modulus`", own.id.value);
         let help = "add `modulus = \"205 GPa\"`, or `like` with the id of a material to start from";
-        r.problems.missing(&own.place, message, help);
+        r.problems.missing("modulus", &own.place, message, help);
         return None;
     };
     let text = |entry: &Entry<&str>, base: Option<&String>| match entry {

@@ -14,7 +14,7 @@ fn model(text: &str) -> Model {
     }
 }
 
-const SMALL: &str = r#"
+pub(super) const SMALL: &str = r#"
 [member.tie]
 start = "fixed"
 segment = [{ length = "8 ft", section = { round = "5/8 in" }, material = "steel-a36" }]
@@ -53,7 +53,7 @@ fn the_smallest_job_has_one_combination_called_all() {
     assert_eq!(model.limits[1].reads, Reads::Purpose(Purpose::Service));
 }
 
-const WHOLE: &str = r#"
+pub(super) const WHOLE: &str = r#"
 [job]
 title = "Ferry ramp, hanger line 4"
 reference = "FR-204 rev C"
