@@ -1,12 +1,14 @@
 //! Reading whole jobs. Expected values are worked by hand from the job's own numbers.
 
 mod bad_files;
+mod bad_loads;
 mod bad_members;
 mod bad_segments;
 mod bad_tables;
 mod draw;
 mod fuzz;
 mod good;
+mod good_combinations;
 
 use super::{Source, read};
 use std::fmt::Write;
