@@ -23,6 +23,9 @@ impl Twofold {
     /// A whole number without loss.
     pub(super) fn whole(number: u64) -> Self {
         let high = number as f64;
+        if number < 1 << 53 {
+            return Twofold::of(high);
+        }
         // The difference has at most 11 bits; it is negative where the double was rounded up.
         let low = (i128::from(number) - high as i128) as f64;
         Twofold { high, low }
@@ -46,6 +49,13 @@ impl Twofold {
     }
 
     pub(super) fn times(self, other: Twofold) -> Self {
+        // Most factors are 1, and a fused product is dear where the processor is not asked for it.
+        if other == Twofold::ONE {
+            return self;
+        }
+        if self == Twofold::ONE {
+            return other;
+        }
         let product = Twofold::product(self.high, other.high);
         let cross = self.high * other.low + self.low * other.high;
         Twofold::sum(product.high, product.low + cross)

@@ -65,6 +65,9 @@ impl<'t> Cursor<'t> {
     /// Reads over blanks, the unbreakable and the narrow ones of typesetting among them; whether
     /// there was one.
     pub(super) fn blanks(&mut self) -> bool {
+        if !matches!(self.peek(), Some(b' ' | b'\t' | 0x80..)) {
+            return false;
+        }
         let before = self.rest.len();
         self.rest = self
             .rest

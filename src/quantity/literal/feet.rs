@@ -18,6 +18,10 @@ pub(super) fn feet_inches(
     cursor: &mut Cursor<'_>,
     first: &Number,
 ) -> Result<Option<(Exact, Written)>, LiteralError> {
+    // Most literals are neither: no mark and no `f` comes next.
+    if !matches!(cursor.peek(), Some(b'\'' | b'"' | b'f' | 0x80..)) {
+        return Ok(None);
+    }
     let start = cursor.at();
     if cursor.take_any(&INCHES) {
         let unit = Written::named(&INCH, start..cursor.at());

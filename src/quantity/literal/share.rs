@@ -4,7 +4,6 @@ use super::cursor::Cursor;
 use super::number::{Number, number};
 use super::{Literal, LiteralError, read, refuse};
 use crate::catalogue::Strength;
-use crate::quantity::exact::Exact;
 use crate::quantity::unit::{self, Pound};
 use crate::quantity::{Length, Stress};
 
@@ -67,8 +66,10 @@ pub fn read_stress_limit(text: &str) -> Result<StressLimit, LiteralError> {
     if cursor.rest.starts_with(char::is_alphabetic) {
         let strength = strength(&mut cursor)?;
         let divisor = divisor(&mut cursor, STRESS_LIMIT)?;
-        let factor = divisor.value.inverse();
-        return share(factor, strength);
+        return Ok(StressLimit::Share {
+            factor: divisor.value.inverse().rounded(),
+            strength,
+        });
     }
     let Ok(first) = number(&mut cursor) else {
         return stress(text);
@@ -84,7 +85,10 @@ pub fn read_stress_limit(text: &str) -> Result<StressLimit, LiteralError> {
     let strength = strength(&mut cursor)?;
     end(&mut cursor, STRESS_LIMIT)?;
     positive(&first, start, STRESS_LIMIT)?;
-    share(first.value, strength)
+    Ok(StressLimit::Share {
+        factor: first.value.rounded(),
+        strength,
+    })
 }
 
 /// Reads the bound of a movement: `"6 mm"` or `"length / 500"`.
@@ -120,13 +124,6 @@ fn stress(text: &str) -> Result<StressLimit, LiteralError> {
     read(text)
         .map(StressLimit::Stress)
         .map_err(|error| with_help(error, STRESS_LIMIT))
-}
-
-fn share(factor: Exact, strength: Strength) -> Result<StressLimit, LiteralError> {
-    Ok(StressLimit::Share {
-        factor: factor.rounded(),
-        strength,
-    })
 }
 
 /// The letters that come next.

@@ -20,6 +20,9 @@ pub(super) fn tolerance(
     dimension: Dimension,
     nominal: f64,
 ) -> Result<Option<Deviations>, LiteralError> {
+    if cursor.is_done() {
+        return Ok(None);
+    }
     // The tolerance of a reading is an interval.
     let dimension = match dimension {
         Dimension::Temperature => Dimension::TemperatureChange,
