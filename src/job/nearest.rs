@@ -22,7 +22,7 @@ fn all_nearest<'c>(written: &str, candidates: impl IntoIterator<Item = &'c str>)
         .filter(|candidate| !candidate.is_empty())
         .filter_map(|candidate| {
             let low = candidate.to_lowercase();
-            if low.len().abs_diff(written_low.len()) > 2 * allowed + 2 {
+            if low.chars().count().abs_diff(length) > allowed {
                 return None;
             }
             let distance = distance(&written_low, &low);

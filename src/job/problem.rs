@@ -38,6 +38,9 @@ enum RestsOn {
     Tables(&'static str),
 }
 
+/// With more faults of the syntax than this a text is no job yet, and they alone are told.
+const MANY: usize = 200;
+
 /// The findings of a run, in the order in which they were made.
 #[derive(Debug, Default)]
 pub(crate) struct Problems {
@@ -94,6 +97,9 @@ impl Problems {
     /// All findings with those of the syntax, in the order of the text, each once. What the syntax
     /// may have caused is left out.
     pub(crate) fn with_syntax(self, syntax: Vec<Problem>, text: &str) -> Vec<Problem> {
+        if syntax.len() > MANY {
+            return sorted(syntax);
+        }
         let broken: Vec<Broken> = syntax.iter().map(|p| Broken::at(&p.place, text)).collect();
         let misspelt = &self.misspelt;
         let own = self.found.into_iter().filter(|(problem, rests_on)| {
@@ -102,13 +108,17 @@ impl Problems {
                     .iter()
                     .any(|broken| broken.may_cause(&problem.place, *rests_on, text))
         });
-        let mut all: Vec<Problem> = own.map(|(problem, _)| problem).chain(syntax).collect();
-        all.sort_by(|a, b| {
-            (a.place.start, a.place.end, &a.message).cmp(&(b.place.start, b.place.end, &b.message))
-        });
-        all.dedup_by(|a, b| a.place == b.place && a.message == b.message);
-        all
+        sorted(own.map(|(problem, _)| problem).chain(syntax).collect())
     }
+}
+
+/// In the order of the text, each once.
+fn sorted(mut all: Vec<Problem>) -> Vec<Problem> {
+    all.sort_by(|a, b| {
+        (a.place.start, a.place.end, &a.message).cmp(&(b.place.start, b.place.end, &b.message))
+    });
+    all.dedup_by(|a, b| a.place == b.place && a.message == b.message);
+    all
 }
 
 /// Keys that a table may also take from `[default]` or `[job]`.

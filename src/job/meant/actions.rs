@@ -28,6 +28,7 @@ pub(super) fn actions<'w, 't>(
         outline,
         held,
         member,
+        cells: member.map(|member| Cells::of(&member.segments)),
         actions: Actions::default(),
         weights: Vec::new(),
         heats: Vec::new(),
@@ -38,7 +39,7 @@ pub(super) fn actions<'w, 't>(
         laid.load(load);
     }
     let member = member?;
-    let cells = Cells::of(&member.segments);
+    let cells = laid.cells.take()?;
     laid.lay_weights(member, &cells);
     laid.lay_heat(member, &cells);
     (!whole.loads.is_wrong()).then_some(laid.actions)
@@ -51,6 +52,8 @@ pub(super) struct Laying<'a, 'w, 't> {
     held: &'a Held,
     /// The member without its actions; `None` where something about it is at fault.
     pub(super) member: Option<&'a Member>,
+    /// Its layers in one row.
+    cells: Option<Cells>,
     pub(super) actions: Actions,
     pub(super) weights: Vec<Cover<f64>>,
     pub(super) heats: Vec<Cover<Heat>>,
@@ -243,10 +246,10 @@ impl<'w, 't> Laying<'_, 'w, 't> {
 
     /// A strain of everything that is covered.
     fn free_strain(&mut self, case: usize, on: Option<On>, strain: Ratio) {
-        let (Some(on), Some(member)) = (on, self.member) else {
+        let (Some(on), Some(cells)) = (on, &self.cells) else {
             return;
         };
-        for (segment, layer) in Cells::of(&member.segments).each(on) {
+        for (segment, layer) in cells.each(on) {
             self.actions.strains.push(FreeStrain {
                 case,
                 segment,

@@ -13,6 +13,7 @@ use crate::model::{
     Target,
 };
 use crate::quantity::{Force, Length, MovementBound, StressLimit};
+use std::collections::HashSet;
 use std::ops::Neg;
 
 /// All limits of a job in the order of the file.
@@ -25,7 +26,7 @@ pub(super) fn limits<'w, 't>(
         combinations,
         meaning,
         limits: Vec::new(),
-        unread: Vec::new(),
+        unread: HashSet::new(),
     };
     for (index, meant) in meant.iter().enumerate() {
         laying.of_member(index, meant);
@@ -40,8 +41,8 @@ pub(super) struct Laying<'a, 'w, 't> {
     pub(super) combinations: Option<&'a Combinations>,
     pub(super) meaning: &'a mut Meaning<'w, 't>,
     limits: Vec<Limit>,
-    /// The places of limits that no combination reads and that have their caution.
-    pub(super) unread: Vec<Place>,
+    /// Where limits begin that no combination reads and that have their caution.
+    pub(super) unread: HashSet<usize>,
 }
 
 impl<'w, 't> Laying<'_, 'w, 't> {

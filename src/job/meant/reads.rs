@@ -104,10 +104,9 @@ impl<'t> Laying<'_, '_, 't> {
                 .iter()
                 .any(|(_, purpose, _)| purpose.is_none_or(|purpose| purpose == *wanted)),
         };
-        if is_read || self.unread.contains(place) {
+        if is_read || !self.unread.insert(place.start) {
             return;
         }
-        self.unread.push(place.clone());
         let purpose = match reads {
             Reads::Only(_) => "that `in` names",
             Reads::Purpose(Purpose::Service) => "of the purpose \"service\"",

@@ -122,3 +122,22 @@ fn texts_that_once_were_hard_end_well() {
     ends_well(&"[".repeat(10_000));
     ends_well(&format!("[member.m]\nlimit = {}", "[".repeat(200)));
 }
+
+/// A member of many segments with a load, a limit and a support on each: the cost must grow in line
+/// with their number, which a quadratic step would show as minutes.
+#[test]
+fn many_segments_are_read_in_one_go() {
+    let mut text = String::from("[member.m]\nstart = \"fixed\"\n");
+    for number in 0..20_000 {
+        text.push_str(&format!(
+            "[[member.m.segment]]\nname = \"s{number}\"\nlength = \"1 m\"\nsection = {{ area = \"1 cm2\" }}\n\
+             material = \"steel-s355\"\nlimit = {{ tension = \"0.6 yield\", elongation = \"1 mm\" }}\n\
+             [[member.m.load]]\non = \"s{number}\"\nstrain = 1e-6\n\
+             [[member.m.load]]\nat = \"s{number}.end\"\nforce = \"1 kN\"\n\
+             [[member.m.support]]\nat = \"{number}.5 m\"\nstop = \"1 mm\"\n"
+        ));
+    }
+    let model = read(&text).unwrap_or_else(|problems| panic!("{:?}", &problems[..1]));
+    assert_eq!(model.members[0].stations.len(), 40_001);
+    assert_eq!(model.limits.len(), 40_000);
+}
