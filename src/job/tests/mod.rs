@@ -6,9 +6,11 @@ mod bad_members;
 mod bad_segments;
 mod bad_tables;
 mod draw;
+mod follow_ups;
 mod fuzz;
 mod good;
 mod good_combinations;
+mod good_limits;
 
 use super::{Source, read};
 use std::fmt::Write;
