@@ -150,7 +150,10 @@ fn meant<'w, 't>(whole: Whole<'w, 't>, meaning: &mut Meaning<'w, 't>) -> Meant<'
         let message = format!("the member `{}` needs a segment", whole.name.value);
         let help = "add `segment = [{ length = …, section = …, material = … }]`, or `like` with \
                     the name of another member";
-        meaning.r.problems.missing(whole.place, message, help);
+        meaning
+            .r
+            .problems
+            .missing("segment", whole.place, message, help);
     }
     let mut outline = Outline::of(written);
     names_differ(&whole, &outline, meaning);

@@ -43,7 +43,7 @@ pub(super) fn allowed(
                     place,
                     caution: false,
                 };
-                if !meaning.remarks.contains(&remark) {
+                if meaning.remarks.last() != Some(&remark) {
                     meaning.remarks.push(remark);
                 }
                 Some(value)
