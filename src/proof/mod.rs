@@ -17,6 +17,10 @@ use acting::Acting;
 use piece::Integrated;
 use residual::{Residual, Size};
 
+/// The share of a member's largest force below which N somewhere may be nothing but the rounding of
+/// forces that cancel: ten powers above that rounding.
+const DOUBT: f64 = 1e-6;
+
 /// The residuals of one member's finished result.
 ///
 /// * equilibrium: at every station, along every piece, and of the whole; layers against N.
@@ -36,8 +40,9 @@ pub fn member(
         equilibrium: Residual::default(),
         compatibility: Residual::default(),
     };
+    let doubt = result.force_max.abs().max(result.force_min.abs()) * DOUBT;
     let pieces: Vec<Integrated> = (0..member.pieces.len())
-        .map(|piece| proof.integrate(piece))
+        .map(|piece| proof.integrate(piece, doubt))
         .collect();
     proof.stations();
     proof.whole(&pieces);
@@ -87,10 +92,10 @@ impl Proof<'_> {
         self.result.stations[station].displacement
     }
 
-    fn integrate(&self, piece: usize) -> Integrated {
+    fn integrate(&self, piece: usize, doubt: Force) -> Integrated {
         let (_, start) = self.forces_at(piece);
         let (end, _) = self.forces_at(piece + 1);
-        Integrated::over(&self.acting, piece, start, end)
+        Integrated::over(&self.acting, piece, (start, end), doubt)
     }
 
     /// N after − N before + load + reactions = 0 at every station.

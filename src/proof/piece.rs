@@ -34,7 +34,14 @@ pub(super) struct Integrated {
 }
 
 impl Integrated {
-    pub(super) fn over(acting: &Acting, piece: usize, start: Force, end: Force) -> Self {
+    /// `doubt` is a force below which N is no more than what other forces leave of each other; it
+    /// counts among the sizes, so that such a remainder is not held against itself.
+    pub(super) fn over(
+        acting: &Acting,
+        piece: usize,
+        (start, end): (Force, Force),
+        doubt: Force,
+    ) -> Self {
         let length = acting.member.pieces[piece].length;
         let mut sum = Integrated {
             most: start.max(end),
@@ -72,7 +79,7 @@ impl Integrated {
                 (force / local.rigidity, local.thermal + local.imposed);
             let dx = length * node.weight;
             sum.force += elastic * dx;
-            sum.force_size += elastic.abs() * dx;
+            sum.force_size += (elastic.abs() + doubt / local.rigidity) * dx;
             sum.thermal += local.thermal * dx;
             sum.imposed += local.imposed * dx;
             sum.free_size += local.free_size * dx;

@@ -245,20 +245,26 @@ impl Chain {
             }
 
             solved.after[station] = after;
-            let mut force = after;
             if let Some(hold) = rigid {
                 let face = self.holds[hold].face;
                 solved.displacements[station] = face;
-                let loaded = arriving[station - first].past_load(self.loads[station]);
-                force = self.force_at_rigid(loaded, face, after, (first, station))?;
+                let load = self.loads[station];
+                let before = self.force_at_rigid(
+                    arriving[station - first],
+                    face,
+                    after + load,
+                    (first, station),
+                )?;
                 // The springs beside it answer by its displacement, and it takes the rest.
-                let mut rest = force - after;
+                let mut rest = before - load - after;
                 for &(spring, stiffness, _) in &springs {
                     solved.reactions[spring] = stiffness * (self.holds[spring].face - face);
                     rest -= solved.reactions[spring];
                 }
+                solved.before[station] = before;
                 solved.reactions[hold] = rest;
             } else {
+                let mut force = after;
                 solved.displacements[station] = match answer {
                     Answer::Held { rest, flexibility } => rest + flexibility * force,
                     // Nothing holds it from the left, so it follows what it hangs on at its right.
@@ -277,11 +283,11 @@ impl Chain {
                     solved.reactions[hold] = left - force;
                     force = left;
                 }
+                solved.before[station] = match arriving[station - first] {
+                    Answer::Free { force } => force,
+                    Answer::Held { .. } => force + self.loads[station],
+                };
             }
-            solved.before[station] = match arriving[station - first] {
-                Answer::Free { force } => force,
-                Answer::Held { .. } => force + self.loads[station],
-            };
             if station > first {
                 after = solved.before[station] + self.links[station - 1].load;
             }
@@ -290,12 +296,12 @@ impl Chain {
     }
 
     /// N just before a rigid hold, from how the left answers at its face. Where something rigid
-    /// answers, only one of the two is needed, and the other one takes nothing.
+    /// answers, only one of the two is needed: the hold takes nothing and N is `passed_on`.
     fn force_at_rigid(
         &self,
         answer: Answer,
         face: Length,
-        after: Force,
+        passed_on: Force,
         (first, station): (usize, usize),
     ) -> Result<Force, NoSolution> {
         match answer {
@@ -303,7 +309,7 @@ impl Chain {
             Answer::Held { rest, flexibility } if flexibility > Flexibility::default() => {
                 Ok((face - rest) / flexibility)
             }
-            Answer::Held { rest, .. } if (face - rest).abs() <= self.zero.length => Ok(after),
+            Answer::Held { rest, .. } if (face - rest).abs() <= self.zero.length => Ok(passed_on),
             Answer::Held { .. } => Err(NoSolution::Contradiction {
                 first,
                 last: station,
