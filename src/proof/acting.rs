@@ -188,7 +188,7 @@ impl<'m> Acting<'m> {
                     self.layer(index, 0).imposed,
                 );
                 Local {
-                    rigidity: part.stiffness * segment.length(),
+                    rigidity: part.stiffness * segment.length,
                     thermal: hot,
                     imposed: cut,
                     free_size: hot.abs() + cut.abs(),

@@ -287,21 +287,15 @@ impl Proof<'_> {
         if result.layers.is_empty() {
             return;
         }
-        let ends: [(Force, fn(&crate::result::LayerResult) -> Force); 2] = [
-            (result.force_start, |layer| layer.force_start),
-            (result.force_end, |layer| layer.force_end),
-        ];
-        for (whole, of) in ends {
-            let sum = result
-                .layers
+        let layers = || result.layers.iter();
+        let starts: Vec<Force> = layers().map(|layer| layer.force_start).collect();
+        let ends: Vec<Force> = layers().map(|layer| layer.force_end).collect();
+        for (whole, parts) in [(result.force_start, starts), (result.force_end, ends)] {
+            let sum = parts.iter().fold(Force::default(), |sum, &part| sum + part);
+            let size = parts
                 .iter()
-                .fold(Force::default(), |sum, layer| sum + of(layer));
-            let size = result
-                .layers
-                .iter()
-                .fold(Force::default(), |sum, layer| sum + of(layer).abs());
-            self.equilibrium
-                .take((whole - sum).over(whole.abs() + size));
+                .fold(whole.abs(), |size, part| size + part.abs());
+            self.equilibrium.take((whole - sum).over(size));
         }
     }
 

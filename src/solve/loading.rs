@@ -119,7 +119,7 @@ impl Loading {
                     let unit: Stress = from_si(1.0);
                     self.layers.push(LayerLoading {
                         modulus: unit,
-                        area: Curve::constant(part.stiffness * segment.length() / unit),
+                        area: Curve::constant(part.stiffness * segment.length / unit),
                         thermal: no_strain,
                         imposed: Ratio::default(),
                     });

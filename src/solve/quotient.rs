@@ -48,6 +48,7 @@ pub(super) struct Extreme<T> {
 
 /// Nodes and weights of Gauss–Legendre quadrature with 16 points on 0..1, the half nearer to 0;
 /// the other half mirrors it. Roots of the Legendre polynomial P16, computed to 40 digits.
+#[allow(clippy::excessive_precision)] // as computed; the compiler rounds them
 const GAUSS: [(f64, f64); 8] = [
     (0.0052995325041750337019, 0.013576229705877047426),
     (0.027712488463383711961, 0.031126761969323946431),

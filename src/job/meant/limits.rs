@@ -165,7 +165,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
             self.push(kind, target, on(), common, &force.place);
         }
         if let Entry::Given(elongation) = &table.elongation {
-            let kind = LimitKind::Elongation(movement_limit(elongation.value, segment.length()));
+            let kind = LimitKind::Elongation(movement_limit(elongation.value, segment.length));
             self.push(kind, target, on(), common, &elongation.place);
         }
         self.gap(table, target, &on, common);
