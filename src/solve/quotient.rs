@@ -46,6 +46,9 @@ pub(super) struct Extreme<T> {
     pub(super) at: f64,
 }
 
+/// The largest and the least value.
+pub(super) type Extremes<T> = (Extreme<T>, Extreme<T>);
+
 /// Nodes and weights of Gauss–Legendre quadrature with 16 points on 0..1, the half nearer to 0;
 /// the other half mirrors it. Roots of the Legendre polynomial P16, computed to 40 digits.
 #[allow(clippy::excessive_precision)] // as computed; the compiler rounds them
@@ -108,12 +111,7 @@ where
     }
 
     /// The largest and the least value with their places; of equal ones the first.
-    pub(super) fn extremes(
-        &self,
-    ) -> (
-        Extreme<<A as Div<B>>::Output>,
-        Extreme<<A as Div<B>>::Output>,
-    ) {
+    pub(super) fn extremes(&self) -> Extremes<<A as Div<B>>::Output> {
         let start = Extreme {
             value: self.at(0.0),
             at: 0.0,
