@@ -76,6 +76,13 @@ where
 {
     /// Fails where the denominator vanishes at an end and the numerator does not as well.
     pub(super) fn new(numerator: Curve<A>, denominator: Curve<B>) -> Result<Self, Unbounded> {
+        let zero = B::default();
+        if denominator.start() != zero && denominator.end() != zero {
+            return Ok(Quotient {
+                numerator,
+                denominator,
+            });
+        }
         let (numerator, denominator) = cancelled(numerator, denominator)?;
         let (numerator, denominator) = cancelled(numerator.reversed(), denominator.reversed())?;
         Ok(Quotient {
