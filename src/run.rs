@@ -95,11 +95,10 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         solved.combination(model, index, stiffness.as_deref(), style);
     }
     let line_of = |place: &crate::model::Place| source.line_and_column(place).0;
-    let lines: Vec<usize> = model
-        .limits
-        .iter()
-        .map(|limit| line_of(&limit.place))
-        .collect();
+    let lines = lines_of(
+        &source.text,
+        model.limits.iter().map(|limit| limit.place.start),
+    );
     let since = |index: usize| solved.indices.binary_search(&index).ok();
     let checks: Vec<_> = solved
         .indices
@@ -174,6 +173,25 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         result,
         drawn_errors,
     }
+}
+
+/// The line of each place. Places mostly come in the order of the text, so that it is counted
+/// through once.
+fn lines_of(text: &str, places: impl Iterator<Item = usize>) -> Vec<usize> {
+    let (mut at, mut line) = (0, 1);
+    let line_at = |place: usize| {
+        let place = place.min(text.len());
+        if place < at {
+            (at, line) = (0, 1);
+        }
+        line += text.as_bytes()[at..place]
+            .iter()
+            .filter(|&&byte| byte == b'\n')
+            .count();
+        at = place;
+        line
+    };
+    places.map(line_at).collect()
 }
 
 /// What the combinations came to; one that cannot be solved is a problem and has no result.
