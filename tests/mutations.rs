@@ -20,24 +20,75 @@ const LONGEST: Duration = Duration::from_secs(2);
 
 /// Numbers that a job may hold in place of its own.
 const NUMBERS: &[&str] = &[
-    "0", "-1", "1", "1e308", "-1e308", "1e-320", "5e-324", "1e400", "nan", "inf", "-inf", "-0.0",
-    "1e15", "1e-15", "1e9", "0.1", "999999999999999999999", "1/3", "1/0", "2 ± 3", "1e",
+    "0",
+    "-1",
+    "1",
+    "1e308",
+    "-1e308",
+    "1e-320",
+    "5e-324",
+    "1e400",
+    "nan",
+    "inf",
+    "-inf",
+    "-0.0",
+    "1e15",
+    "1e-15",
+    "1e9",
+    "0.1",
+    "999999999999999999999",
+    "1/3",
+    "1/0",
+    "2 ± 3",
+    "1e",
 ];
 
 /// Units that may stand in place of a job's own.
 const UNITS: &[&str] = &[
-    "mm", "m", "cm", "km", "in", "ft", "kN", "N", "MN", "kip", "lbf", "lb", "t", "tf", "kgf", "MPa", "GPa",
-    "ksi", "psi", "N/mm2", "kN/mm", "lbf/in", "kN/m", "kg/m3", "kg/m", "/K", "/degF", "K",
-    "degC", "degF", "deg", "rad", "%", "ue", "mm2", "cm2", "yield", "ultimate", "mN", "kN m",
+    "mm", "m", "cm", "km", "in", "ft", "kN", "N", "MN", "kip", "lbf", "lb", "t", "tf", "kgf",
+    "MPa", "GPa", "ksi", "psi", "N/mm2", "kN/mm", "lbf/in", "kN/m", "kg/m3", "kg/m", "/K", "/degF",
+    "K", "degC", "degF", "deg", "rad", "%", "ue", "mm2", "cm2", "yield", "ultimate", "mN", "kN m",
 ];
 
 /// Values that may stand in place of a whole value.
 const VALUES: &[&str] = &[
-    "true", "false", "\"\"", "[]", "{}", "[[]]", "[{}]", "1979-05-27", "\"fixed\"", "\"end\"",
-    "\"start\"", "\"up\"", "\"level\"", "\"0 m\"", "\"-3 kN\"", "\"1e308 m\"", "\"1e-320 m\"", "0", "1", "-1",
-    "1e308", "nan", "[0, 0]", "[1, 1, 1]", "[\"1 mm\", \"0 mm\"]", "[\"1 kN\", \"-1 kN\"]", "\"length / 1e-320\"",
-    "\"length / 1e308\"", "\"1e308 yield\"", "{ dead = \"1 kN\" }", "\"+1e300 K\"", "\"0 K\"", "[0.0, 1.0]",
-    "\"1e-300 MPa\"", "\"1e300 MPa\"", "\"1e-12 mm\"", "\"1e12 m\"",
+    "true",
+    "false",
+    "\"\"",
+    "[]",
+    "{}",
+    "[[]]",
+    "[{}]",
+    "1979-05-27",
+    "\"fixed\"",
+    "\"end\"",
+    "\"start\"",
+    "\"up\"",
+    "\"level\"",
+    "\"0 m\"",
+    "\"-3 kN\"",
+    "\"1e308 m\"",
+    "\"1e-320 m\"",
+    "0",
+    "1",
+    "-1",
+    "1e308",
+    "nan",
+    "[0, 0]",
+    "[1, 1, 1]",
+    "[\"1 mm\", \"0 mm\"]",
+    "[\"1 kN\", \"-1 kN\"]",
+    "\"length / 1e-320\"",
+    "\"length / 1e308\"",
+    "\"1e308 yield\"",
+    "{ dead = \"1 kN\" }",
+    "\"+1e300 K\"",
+    "\"0 K\"",
+    "[0.0, 1.0]",
+    "\"1e-300 MPa\"",
+    "\"1e300 MPa\"",
+    "\"1e-12 mm\"",
+    "\"1e12 m\"",
 ];
 
 /// A stream of numbers that looks random: splitmix64, of Steele, Lea and Flood (2014).
@@ -90,7 +141,9 @@ impl Parts {
             }
             parts.lines.push(here.clone());
             if let Some((key, value)) = body.split_once('=') {
-                parts.keys.push(here.start..here.start + key.trim_end().len());
+                parts
+                    .keys
+                    .push(here.start..here.start + key.trim_end().len());
                 let from = here.start + body.len() - value.trim_start().len();
                 parts.values.push(from..here.start + body.len());
             }
@@ -196,7 +249,10 @@ fn jobs() -> BTreeMap<String, String> {
     for folder in ["examples", "tests/published"] {
         for entry in fs::read_dir(root.join(folder)).unwrap() {
             let path = entry.unwrap().path();
-            if path.extension().is_some_and(|extension| extension == "toml") {
+            if path
+                .extension()
+                .is_some_and(|extension| extension == "toml")
+            {
                 let name = path.file_name().unwrap().to_string_lossy().into_owned();
                 jobs.insert(name, fs::read_to_string(&path).unwrap());
             }
