@@ -4,7 +4,7 @@
 //! Each function panics where its invariant is broken; that is how a fuzzer learns of it.
 
 use crate::quantity::{self, Area, Force, ForcePerLength, Length, Stress};
-use crate::result::{Document, JobResult, JobStatus, Residuals};
+use crate::result::{Document, JobStatus, Residuals};
 
 /// No text makes the literal reader panic, and what it reads is finite and within its tolerance.
 ///
@@ -66,24 +66,9 @@ pub fn job(bytes: &[u8]) {
             combination.name
         );
     }
-    assert!(is_finite(&result), "a result that is no number");
-}
-
-fn is_finite(result: &JobResult) -> bool {
-    // JSON has no word for what is not finite: it would be written as null.
-    result
-        .combinations
-        .iter()
-        .flat_map(|combination| &combination.members)
-        .all(|member| {
-            let stations = member
-                .stations
-                .iter()
-                .map(|station| station.displacement.value);
-            stations
-                .chain([member.elongation.value, member.force_max.value])
-                .all(f64::is_finite)
-        })
+    if let Err(number) = crate::report::all_finite(&result) {
+        panic!("a result that is no number: {number}");
+    }
 }
 
 /// Any text is refused as a results document, or is written again as it was read.

@@ -6,8 +6,8 @@ use std::io::{self, Read};
 use std::path::{Path, PathBuf};
 use walkdir::{DirEntry, WalkDir};
 
-/// A job file is not read beyond this; more than a thousand times any job written by hand.
-const MOST_BYTES: u64 = 1 << 28;
+/// A job file is not read beyond this.
+const MOST_BYTES: u64 = crate::job::MOST_BYTES as u64;
 
 /// Where one job comes from.
 #[derive(Debug, Clone, PartialEq, Eq)]

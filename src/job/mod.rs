@@ -21,12 +21,25 @@ pub use source::{Source, Undecoded, decode};
 use crate::model::Model;
 use toml::de::DeTable;
 
+/// A job file may have as many bytes; that of a member of 100,000 segments has a tenth.
+pub const MOST_BYTES: usize = 1 << 26;
+
+/// In a larger text only the first fault of the syntax is looked for: one that is nothing but
+/// faults would fill the memory with them.
+const LARGE: usize = 1 << 22;
+
 /// Reads a job from its text.
 ///
 /// # Errors
 /// Everything that is wrong with it, in the order of the text, each fault once.
 pub fn read(text: &str) -> Result<Model, Vec<Problem>> {
-    let (table, errors) = DeTable::parse_recoverable(text);
+    let (table, errors) = if text.len() <= LARGE {
+        DeTable::parse_recoverable(text)
+    } else {
+        let table = DeTable::parse(text);
+        let table = table.map_err(|error| vec![syntax::first_of_large(&error, text)])?;
+        (table, Vec::new())
+    };
     let mut reader = written::Reader::new(text);
     let job = written::Job::read(table.get_ref(), &mut reader);
     let model = meant::model(&job, &mut reader);

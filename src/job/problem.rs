@@ -17,14 +17,54 @@ pub struct Problem {
 
 impl Problem {
     /// A problem at a place, with its remedy.
+    ///
+    /// Names of the job in the sentences are cut where they are very long, and control characters
+    /// in them replaced, since a message ends on a terminal.
     pub fn new(place: &Place, message: String, help: Option<String>) -> Self {
         Problem {
             place: place.clone(),
-            message,
-            help,
+            message: legible(message),
+            help: help.map(legible),
             combination: None,
         }
     }
+}
+
+/// A name in a message may have as many bytes, and a message outside of names.
+const NAME: usize = 64;
+const SENTENCE: usize = 800;
+
+/// A sentence that fits on a screen.
+fn legible(sentence: String) -> String {
+    let has_control = sentence.bytes().any(|byte| byte < b' ' || byte >= 0x7f)
+        && sentence.chars().any(char::is_control);
+    if sentence.len() <= NAME && !has_control {
+        return sentence;
+    }
+    let mut out = String::with_capacity(sentence.len().min(SENTENCE));
+    for (index, part) in sentence.split('`').enumerate() {
+        if index > 0 {
+            out.push('`');
+        }
+        let (room, is_name) = (SENTENCE - out.len().min(SENTENCE), index % 2 == 1);
+        let room = if is_name { room.min(NAME) } else { room };
+        let cut = part.len() > room;
+        let end = (0..=room.min(part.len()))
+            .rev()
+            .find(|&end| part.is_char_boundary(end));
+        let kept = &part[..end.unwrap_or(0)];
+        out.extend(
+            kept.chars()
+                .map(|c| if c.is_control() { '\u{fffd}' } else { c }),
+        );
+        if cut {
+            out.push('…');
+        }
+        if out.len() >= SENTENCE {
+            break;
+        }
+    }
+    out
 }
 
 /// What a finding rests on, and so whether a fault of the syntax elsewhere may have caused it.
@@ -47,6 +87,8 @@ pub(crate) struct Problems {
     found: Vec<(Problem, RestsOn)>,
     /// Unknown keys: the table, and the key that is meant.
     misspelt: Vec<(Place, &'static str)>,
+    /// The roots whose tables are there but cannot be read.
+    lost: Vec<&'static str>,
 }
 
 impl Problems {
@@ -71,6 +113,11 @@ impl Problems {
     /// by it in all likelihood.
     pub(crate) fn misspelt(&mut self, table: &Place, meant: Option<&'static str>) {
         self.misspelt.push((table.clone(), meant.unwrap_or("")));
+    }
+
+    /// Takes note that nothing can be said about which tables this root has.
+    pub(crate) fn lost(&mut self, root: &'static str) {
+        self.lost.push(root);
     }
 
     /// A name that no table of this root defines.
@@ -101,9 +148,10 @@ impl Problems {
             return sorted(syntax);
         }
         let broken: Vec<Broken> = syntax.iter().map(|p| Broken::at(&p.place, text)).collect();
-        let misspelt = &self.misspelt;
+        let (misspelt, lost) = (&self.misspelt, &self.lost);
         let own = self.found.into_iter().filter(|(problem, rests_on)| {
             !is_misspelt(misspelt, &problem.place, *rests_on)
+                && !matches!(rests_on, RestsOn::Tables(root) if lost.contains(root))
                 && !broken
                     .iter()
                     .any(|broken| broken.may_cause(&problem.place, *rests_on, text))

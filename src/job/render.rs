@@ -23,9 +23,14 @@ pub fn draw(problem: &Problem, source: &Source) -> String {
     );
     let (text, part) = source.line_around(&problem.place);
     if !text.trim().is_empty() {
-        let cells: Vec<Cell> = cells(text, &part);
+        let near = near(text, part.start);
+        let part = part.start - near.start..part.end.min(near.end) - near.start;
+        let cells: Vec<Cell> = cells(&text[near.clone()], &part);
         let (from, to) = window(&cells);
-        let cut = (from > 0, to < cells.len());
+        let cut = (
+            from > 0 || near.start > 0,
+            to < cells.len() || near.end < text.len(),
+        );
         let mut shown = String::new();
         let mut marks = String::new();
         if cut.0 {
@@ -66,6 +71,15 @@ pub fn draw_all(problems: &[Problem], source: &Source) -> String {
         let _ = writeln!(out, "\n{}: {rest} more errors are not shown", source.file);
     }
     out
+}
+
+/// The part of a line around a byte of it that may come to be shown, so that the cost of drawing
+/// does not hang on how long the line is.
+fn near(line: &str, at: usize) -> std::ops::Range<usize> {
+    let is_boundary = |end: &usize| line.is_char_boundary(*end);
+    let from = (0..=at.saturating_sub(8 * WIDTH)).rev().find(is_boundary);
+    let to = (line.len().min(at + 8 * WIDTH)..=line.len()).find(is_boundary);
+    from.unwrap_or(0)..to.unwrap_or(line.len())
 }
 
 /// A character as it is shown.

@@ -1,6 +1,6 @@
 //! The text of a job file, and where in it a place stands.
 
-use super::Problem;
+use super::{MOST_BYTES, Problem};
 use crate::model::Place;
 use std::borrow::Cow;
 use std::sync::OnceLock;
@@ -82,9 +82,22 @@ impl Source {
 /// The text of a file's bytes without its byte-order mark.
 ///
 /// # Errors
-/// Bytes that are no UTF-8, with the encoding that they look like, and NUL bytes. The text of the
+/// More than [`MOST_BYTES`] bytes; bytes that are no UTF-8, with the encoding that they look like, and NUL bytes. The text of the
 /// error's [`Source`] is what could be read, so that the place can be drawn.
 pub fn decode(bytes: &[u8]) -> Result<Cow<'_, str>, Box<Undecoded>> {
+    if bytes.len() > MOST_BYTES {
+        return Err(Box::new(Undecoded {
+            text: String::new(),
+            problem: Problem::new(
+                &(0..0),
+                format!(
+                    "the file is larger than {} MiB: no job is",
+                    MOST_BYTES >> 20
+                ),
+                Some("look whether it is the file that you mean".to_owned()),
+            ),
+        }));
+    }
     let utf16 = match bytes {
         [0xff, 0xfe, ..] => true,
         [0xfe, 0xff, ..] => true,

@@ -1,19 +1,27 @@
 //! Faults of the syntax, in words that tell what to write instead.
 
 use super::Problem;
+use crate::model::Place;
 
 const QUOTES: &str = "write texts and values with a unit in quotes, such as \"2.85 m\"";
 const LINE: &str = "write `key = value`, one on each line";
 const HEADER: &str = "write a header as `[member.H4]`, one of a list as `[[member.H4.segment]]`";
 const CLOSE: &str = "close every [ with ] and every { with }, with commas between";
+const UNQUOTED: &str = "this stands without quotes";
+const BACKSLASH: &str = "a backslash begins a sign that is none";
+const ESCAPES: &str = "write two backslashes for one, or the text in single quotes: '3\\4'";
+const NO_NUMBER: &str = "this is no number";
+const NUMBER: &str =
+    "write a bare number as `1.5` or `1.5e3`; a value with a unit stands in quotes";
+const DEEP: &str = "lists, tables or keys are nested too deep here";
+const SHALLOW: &str = "no value of a job is nested more than six deep";
+
+/// The parser goes as deep, and does not say where a key with dots went deeper.
+const DEEPEST: usize = 80;
 
 /// What the parser says begins so, what we say, and the remedy.
 const WORDS: &[(&str, &str, &str)] = &[
-    (
-        "string values must be quoted",
-        "this stands without quotes",
-        QUOTES,
-    ),
+    ("string values must be quoted", UNQUOTED, QUOTES),
     (
         "invalid boolean",
         "this is neither true nor false, and a text stands in quotes",
@@ -29,15 +37,44 @@ const WORDS: &[(&str, &str, &str)] = &[
         "this text is not closed",
         "close the quotes on the same line",
     ),
+    (
+        "invalid multi-line",
+        "this text of several lines is not closed",
+        "close it with the three quotes that it began with",
+    ),
+    ("missing escaped value", BACKSLASH, ESCAPES),
+    ("too few unicode value digits", BACKSLASH, ESCAPES),
+    ("invalid value", "no value can be made of this", QUOTES),
+    ("missing value", "the value is missing here", LINE),
     ("unclosed table", "this header is not closed", HEADER),
     ("unclosed array table", "this header is not closed", HEADER),
     ("unclosed array", "this list is not closed", CLOSE),
     ("unclosed inline table", "this table is not closed", CLOSE),
+    ("missing comma", "a comma is missing here", CLOSE),
+    ("extra comma", "here is one comma too many", CLOSE),
+    ("extra `,`", "here is one comma too many", CLOSE),
+    (
+        "unexpected `=` in array",
+        "a list holds values without keys",
+        "write `{ key = value }` for a table in a list",
+    ),
     ("key with no value", "this key has no value", LINE),
+    ("missing assignment", "this key has no value", LINE),
+    ("missing key", "a key is missing here", LINE),
     (
         "unquoted keys cannot be empty",
         "a key is missing here",
         LINE,
+    ),
+    (
+        "invalid unquoted key",
+        "this key holds a letter that only a key in quotes may hold",
+        "write the key in quotes: `[member.\"H 4\"]`",
+    ),
+    (
+        "keys cannot be multi-line",
+        "a key stands on one line",
+        "write it with one quote on each side",
     ),
     (
         "unexpected key or value",
@@ -45,17 +82,69 @@ const WORDS: &[(&str, &str, &str)] = &[
         LINE,
     ),
     ("extra `=`", "here is one `=` too many", LINE),
-    ("extra `,`", "here is one comma too many", CLOSE),
+    ("extra assignment", "here is one `=` too many", LINE),
     (
-        "recursion limit",
-        "lists and tables are nested too deep here",
-        "no key of a job needs so many",
+        "cannot extend",
+        "a key with dots adds to what is closed already",
+        "write all keys of a table in one place",
     ),
+    (
+        "unexpected leading zero",
+        "a number begins with a 0 too many",
+        "leave the 0 out",
+    ),
+    (
+        "`_` may only go between digits",
+        "a `_` stands at the edge of a number",
+        "write `1_250`, with digits on both sides",
+    ),
+    ("unexpected sign", "a number has one sign too many", NUMBER),
+    (
+        "redundant numeric sign",
+        "a number has one sign too many",
+        NUMBER,
+    ),
+    (
+        "integers with a radix",
+        "a number in another base has no sign",
+        NUMBER,
+    ),
+    (
+        "radix must be lowercase",
+        "the letter of a base is a small one",
+        NUMBER,
+    ),
+    (
+        "redundant integer number prefix",
+        "a number has one `0x`, `0o` or `0b` too many",
+        NUMBER,
+    ),
+    ("invalid date-time", "this is no date and no number", QUOTES),
+    ("invalid integer", NO_NUMBER, NUMBER),
+    ("invalid float", NO_NUMBER, NUMBER),
+    ("invalid mantissa", NO_NUMBER, NUMBER),
+    ("invalid fraction", NO_NUMBER, NUMBER),
+    ("invalid exponent", NO_NUMBER, NUMBER),
+    ("invalid hexadecimal", NO_NUMBER, NUMBER),
+    ("invalid octal", NO_NUMBER, NUMBER),
+    ("invalid binary", NO_NUMBER, NUMBER),
+    (
+        "carriage return",
+        "a carriage return stands alone",
+        "end lines with a line feed, or with both",
+    ),
+    (
+        "invalid comment character",
+        "a comment holds a control character",
+        "take it out",
+    ),
+    ("recursion limit", DEEP, SHALLOW),
+    ("cannot recurse further", DEEP, SHALLOW),
 ];
 
 /// A fault of the syntax as a problem of the job.
 pub(super) fn problem(error: &toml::de::Error, text: &str) -> Problem {
-    let place = error.span().unwrap_or(0..0);
+    let place = error.span().unwrap_or_else(|| dotted(text));
     let start = floor(text, place.start);
     let place = start..floor(text, place.end).max(start);
     let what = error.message();
@@ -72,6 +161,29 @@ pub(super) fn problem(error: &toml::de::Error, text: &str) -> Problem {
         }
     };
     Problem::new(&place, message, Some(help.to_owned()))
+}
+
+/// The only fault that is told of the syntax of a large text.
+pub(super) fn first_of_large(error: &toml::de::Error, text: &str) -> Problem {
+    let mut problem = problem(error, text);
+    let help = problem.help.unwrap_or_default();
+    problem.help = Some(format!(
+        "{help}; in a file as large as this only the first fault of the syntax is told"
+    ));
+    problem
+}
+
+/// The first key of so many dots that the parser gave it up.
+fn dotted(text: &str) -> Place {
+    let mut at = 0;
+    for line in text.split_inclusive('\n') {
+        let keys = line.split('=').next().unwrap_or(line).trim_end();
+        if keys.matches('.').count() + 1 >= DEEPEST {
+            return at..at + keys.len();
+        }
+        at += line.len();
+    }
+    0..0
 }
 
 /// Whether the place lies in a value without quotes.

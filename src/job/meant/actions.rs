@@ -14,21 +14,22 @@ use crate::job::written::{ByCase, Entry, Written};
 use crate::model::{Actions, FreeStrain, Member, Movement, Name, PointForce};
 use crate::quantity::{Length, Ratio, from_si};
 
-/// Everything that acts on a member; `None` where that cannot be said. Names are checked for a
-/// member with faults too.
+/// Everything that acts on a member; `None` where that cannot be said. Of a member that is not
+/// `sound` names are checked all the same, and that materials give what acts on them.
 pub(super) fn actions<'w, 't>(
     whole: &Whole<'w, 't>,
     outline: &Outline<'w, 't>,
     held: &Held,
-    member: Option<&Member>,
+    member: &Member,
+    sound: bool,
     meaning: &mut Meaning<'w, 't>,
 ) -> Option<Actions> {
     let mut laid = Laying {
         whole,
         outline,
         held,
-        member,
-        cells: member.map(|member| Cells::of(&member.segments)),
+        member: sound.then_some(member),
+        cells: Cells::of(&member.segments),
         actions: Actions::default(),
         weights: Vec::new(),
         heats: Vec::new(),
@@ -38,11 +39,9 @@ pub(super) fn actions<'w, 't>(
     for load in whole.loads.given().map_or(&[][..], |all| &all.value) {
         laid.load(load);
     }
-    let member = member?;
-    let cells = laid.cells.take()?;
-    laid.lay_weights(member, &cells);
-    laid.lay_heat(member, &cells);
-    (!whole.loads.is_wrong()).then_some(laid.actions)
+    laid.lay_weights(member);
+    laid.lay_heat(member);
+    (sound && !whole.loads.is_wrong()).then_some(laid.actions)
 }
 
 /// Actions on their way onto a member.
@@ -53,7 +52,7 @@ pub(super) struct Laying<'a, 'w, 't> {
     /// The member without its actions; `None` where something about it is at fault.
     pub(super) member: Option<&'a Member>,
     /// Its layers in one row.
-    cells: Option<Cells>,
+    pub(super) cells: Cells,
     pub(super) actions: Actions,
     pub(super) weights: Vec<Cover<f64>>,
     pub(super) heats: Vec<Cover<Heat>>,
@@ -246,10 +245,10 @@ impl<'w, 't> Laying<'_, 'w, 't> {
 
     /// A strain of everything that is covered.
     fn free_strain(&mut self, case: usize, on: Option<On>, strain: Ratio) {
-        let (Some(on), Some(cells)) = (on, &self.cells) else {
+        let Some(on) = on else {
             return;
         };
-        for (segment, layer) in cells.each(on) {
+        for (segment, layer) in self.cells.each(on) {
             self.actions.strains.push(FreeStrain {
                 case,
                 segment,

@@ -5,7 +5,6 @@ use crate::job::nearest::remedy;
 use crate::job::written::combination::{self as written, Factors, purpose_named};
 use crate::job::written::{Entry, Job, Written};
 use crate::model::{Case, Combination, Name, Purpose, Remark};
-use std::fmt::Write;
 use std::ops::Range;
 
 /// A job may have as many combinations, lists multiplied out.
@@ -223,7 +222,7 @@ fn multiply_out(
         .map(|case| if case.always { 1.0 } else { 0.0 })
         .collect();
     let mut named = vec![false; cases.len()];
-    let mut lists: Vec<(usize, &str, &[f64])> = Vec::new();
+    let mut lists: Vec<(usize, Vec<(f64, String)>)> = Vec::new();
     for (case, written) in &combination.factors {
         let Some(index) = of_case(case) else {
             continue; // an unknown one has been reported
@@ -231,7 +230,10 @@ fn multiply_out(
         named[index] = true;
         match &written.value {
             Factors::One(factor) => factors[index] = *factor,
-            Factors::Each(list) => lists.push((index, case.value, list)),
+            Factors::Each(list) => {
+                let choice = |&factor: &f64| (factor, format!("/{}={factor}", case.value));
+                lists.push((index, list.iter().map(choice).collect()));
+            }
         }
     }
     let shown = shown(cases, |index| named[index]);
@@ -244,9 +246,10 @@ fn multiply_out(
         } else {
             text.clear();
             text.push_str(family);
-            for (&(index, case, list), &chosen) in lists.iter().zip(&choice) {
-                factors[index] = list[chosen];
-                let _ = write!(text, "/{case}={}", list[chosen]);
+            for ((index, list), &chosen) in lists.iter().zip(&choice) {
+                let (factor, named) = &list[chosen];
+                factors[*index] = *factor;
+                text.push_str(named);
             }
             Name::from(text.as_str())
         };
@@ -261,7 +264,7 @@ fn multiply_out(
         });
         // On to the next choice, as an odometer turns.
         let mut turned = false;
-        for (chosen, (_, _, list)) in choice.iter_mut().zip(&lists).rev() {
+        for (chosen, (_, list)) in choice.iter_mut().zip(&lists).rev() {
             *chosen += 1;
             if *chosen < list.len() {
                 turned = true;

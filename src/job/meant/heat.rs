@@ -2,7 +2,7 @@
 
 use super::Meaning;
 use super::actions::Laying;
-use super::coverage::{Cells, Cover, On, narrowest};
+use super::coverage::{Cover, On, narrowest};
 use crate::catalogue::section::Along;
 use crate::job::written::Written;
 use crate::model::{Member, SegmentKind, Temperatures, Weight};
@@ -36,12 +36,12 @@ impl Laying<'_, '_, '_> {
     }
 
     /// Weights, the narrowest at each place. What has neither density nor mass is reported.
-    pub(super) fn lay_weights(&mut self, member: &Member, cells: &Cells) {
+    pub(super) fn lay_weights(&mut self, member: &Member) {
         let mut covers = std::mem::take(&mut self.weights);
         let mut laid = Vec::new();
         narrowest(
             &mut covers,
-            cells,
+            &self.cells,
             "weights",
             self.meaning,
             |cover, segment, layer, meaning| {
@@ -85,7 +85,7 @@ impl Laying<'_, '_, '_> {
     }
 
     /// Temperatures, the narrowest at each place, readings as their difference from the datum.
-    pub(super) fn lay_heat(&mut self, member: &Member, cells: &Cells) {
+    pub(super) fn lay_heat(&mut self, member: &Member) {
         let mut covers = std::mem::take(&mut self.heats);
         let datum_is_wrong = self.datum_is_wrong();
         let length = self.outline.length().unwrap_or(1.0);
@@ -93,7 +93,7 @@ impl Laying<'_, '_, '_> {
         let what = "temperatures";
         narrowest(
             &mut covers,
-            cells,
+            &self.cells,
             what,
             self.meaning,
             |cover, segment, layer, meaning| {

@@ -48,16 +48,17 @@ pub(super) struct Laying<'a, 'w, 't> {
 impl<'w, 't> Laying<'_, 'w, 't> {
     fn of_member(&mut self, index: usize, meant: &Meant<'w, 't>) {
         let of_member = meant.whole.limits.or(&self.meaning.job.default.limits);
+        let member = &meant.member;
         for table in tables(of_member) {
             let common = self.common(table);
-            if let (Some(common), Some(member)) = (common, &meant.member) {
+            if let Some(common) = common {
                 self.on_member(index, table, &common, meant, member);
             }
         }
         for (at, segment) in meant.outline.segments.iter().enumerate() {
             for table in tables(&segment.limits) {
                 let common = self.common(table);
-                if let (Some(common), Some(member)) = (common, &meant.member) {
+                if let Some(common) = common {
                     self.on_segment(index, at, table, &common, meant, member);
                 }
             }
@@ -67,7 +68,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
             for (number, layer) in layers.iter().enumerate() {
                 for table in tables(&layer.limits) {
                     let common = self.common(table);
-                    if let (Some(common), Some(member)) = (common, &meant.member) {
+                    if let Some(common) = common {
                         self.stresses(index, at, number, table, &common, member);
                     }
                 }
@@ -77,8 +78,10 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         for (number, support) in supports.iter().flat_map(|all| all.value.iter().enumerate()) {
             for table in tables(&support.limits) {
                 let common = self.common(table);
-                if let (Some(common), Some(member)) = (common, &meant.member) {
-                    let ends = member.supports.len() - supports.map_or(0, |all| all.value.len());
+                if let Some(common) = common {
+                    let written = supports.map_or(0, |all| all.value.len());
+                    // Of a member with faults the supports may not be known.
+                    let ends = member.supports.len().saturating_sub(written);
                     self.on_support(index, ends + number, table, &common, member);
                 }
             }

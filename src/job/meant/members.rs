@@ -37,8 +37,11 @@ pub(super) struct Whole<'w, 't> {
 pub(super) struct Meant<'w, 't> {
     pub(super) whole: Whole<'w, 't>,
     pub(super) outline: Outline<'w, 't>,
-    /// `None` where something about it is at fault.
-    pub(super) member: Option<Member>,
+    /// What is known of it. Where something is at fault it lacks that: a segment its layers, the
+    /// whole its stations or supports.
+    pub(super) member: Member,
+    /// Whether nothing about it is at fault.
+    pub(super) sound: bool,
 }
 
 /// All members of a job whose `like` leads somewhere.
@@ -168,47 +171,55 @@ fn meant<'w, 't>(whole: Whole<'w, 't>, meaning: &mut Meaning<'w, 't>) -> Meant<'
     }
     let cut = outline.stations();
     let held = supports::supports(&whole, &outline, meaning);
-    let segments: Option<Vec<Segment>> = kinds
-        .into_iter()
-        .enumerate()
-        .map(|(index, kind)| {
-            Some(Segment {
-                name: outline.names.names()[index].clone(),
-                place: written[index].place.clone(),
-                from: outline.bound(index),
-                to: outline.bound(index + 1),
-                length: from_si(outline.length_of(index)),
-                kind: kind?,
-            })
-        })
-        .collect();
-    let member = member(&whole, segments, cut, &held, meaning);
-    let member = with_actions(member, &whole, &outline, &held, meaning);
-    if let Some(member) = &member {
-        points(member, meaning);
+    let mut sound = !written.is_empty() && cut.is_some() && held.supports.is_some();
+    let segments = kinds.into_iter().enumerate().map(|(index, kind)| {
+        sound &= kind.is_some();
+        Segment {
+            name: outline.names.names()[index].clone(),
+            place: written[index].place.clone(),
+            from: outline.bound(index),
+            to: outline.bound(index + 1),
+            length: from_si(outline.length_of(index)),
+            kind: kind.unwrap_or(NOTHING),
+        }
+    });
+    let segments = segments.collect();
+    let mut member = member(&whole, segments, cut, &held, meaning);
+    let actions = actions(&whole, &outline, &held, &member, sound, meaning);
+    sound &= actions.is_some();
+    member.actions = actions.unwrap_or_default();
+    if sound {
+        points(&member, meaning);
     }
     Meant {
         whole,
         outline,
         member,
+        sound,
     }
 }
 
-/// A member on which nothing acts yet.
+/// What stands for a make-up that is at fault: no layer, so that nothing can be missing in one.
+const NOTHING: SegmentKind = SegmentKind::Solid {
+    layers: Vec::new(),
+    layered: true,
+};
+
+/// What is known of a member on which nothing acts yet.
 fn member<'w, 't>(
     whole: &Whole<'w, 't>,
-    segments: Option<Vec<Segment>>,
+    segments: Vec<Segment>,
     cut: Option<(Vec<crate::model::Station>, Vec<crate::model::Piece>)>,
     held: &Held,
     meaning: &Meaning<'w, 't>,
-) -> Option<Member> {
-    let (stations, pieces) = cut?;
+) -> Member {
+    let (stations, pieces) = cut.unwrap_or_default();
     let job = meaning.job;
     let job_datum = job
         .heading
         .as_ref()
         .and_then(|heading| heading.datum.given());
-    Some(Member {
+    Member {
         name: name(whole.name),
         place: whole.place.clone(),
         runs: whole
@@ -217,26 +228,12 @@ fn member<'w, 't>(
             .given()
             .map(|runs| runs.value),
         datum: whole.datum.given().or(job_datum).map(|datum| datum.value),
-        segments: segments.filter(|segments| !segments.is_empty())?,
+        segments,
         stations,
         pieces,
-        supports: held.supports.clone()?,
+        supports: held.supports.clone().unwrap_or_default(),
         actions: Actions::default(),
-    })
-}
-
-/// Lays the actions on a member; those of a member with faults are checked all the same.
-fn with_actions<'w, 't>(
-    member: Option<Member>,
-    whole: &Whole<'w, 't>,
-    outline: &Outline<'w, 't>,
-    held: &Held,
-    meaning: &mut Meaning<'w, 't>,
-) -> Option<Member> {
-    let actions = actions(whole, outline, held, member.as_ref(), meaning);
-    let mut member = member?;
-    member.actions = actions?;
-    Some(member)
+    }
 }
 
 /// Segments and supports of a member share one set of names.

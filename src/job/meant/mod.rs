@@ -85,7 +85,7 @@ pub(super) fn model<'t>(job: &Job<'t>, r: &mut Reader<'t>) -> Option<Model> {
         materials: materials.used,
         members: meant
             .into_iter()
-            .map(|meant| meant.member)
+            .map(|meant| meant.sound.then_some(meant.member))
             .collect::<Option<_>>()?,
         limits,
         tolerances: std::mem::take(&mut r.tolerances),

@@ -113,6 +113,9 @@ impl<'t> Fields<'t> {
     /// The value of a key.
     pub(crate) fn get(&mut self, key: &'static str) -> Option<&'t Value<'t>> {
         debug_assert!(self.known.keys.contains(&key), "{key} is not listed");
+        if self.found == self.table.len() {
+            return None; // all that is there has been asked for, each key once
+        }
         let value = self.table.get(key);
         self.found += usize::from(value.is_some());
         value

@@ -46,13 +46,12 @@ pub(crate) struct Material<'t> {
 }
 
 impl<'t> Material<'t> {
-    /// `None` for a value that is no table.
-    pub(super) fn read(
-        id: Written<&'t str>,
-        table: &'t Value<'t>,
-        r: &mut Reader<'t>,
-    ) -> Option<Self> {
-        let mut fields = Fields::of(table, KEYS, r)?;
+    /// Even of a value that is no table a material comes out, of which nothing is known but its
+    /// name.
+    pub(super) fn read(id: Written<&'t str>, table: &'t Value<'t>, r: &mut Reader<'t>) -> Self {
+        let Some(mut fields) = Fields::of(table, KEYS, r) else {
+            return Self::unknown(id, table.span());
+        };
         let one_yield = fields.entry("yield", r, |value, r| {
             value::positive("yield")(value, r).map(|strength| vec![(None, strength)])
         });
@@ -79,7 +78,26 @@ impl<'t> Material<'t> {
             source: fields.entry("source", r, value::text),
         };
         fields.finish(r);
-        Some(material)
+        material
+    }
+
+    fn unknown(id: Written<&'t str>, place: Place) -> Self {
+        Material {
+            id,
+            place,
+            like: Entry::Wrong,
+            modulus: Entry::Wrong,
+            expansion: Entry::Wrong,
+            density: Entry::Wrong,
+            yield_strength: Entry::Wrong,
+            ultimate: Entry::Wrong,
+            proof: Entry::Wrong,
+            crushing: Entry::Wrong,
+            range: Entry::Wrong,
+            family: Entry::Wrong,
+            note: Entry::Wrong,
+            source: Entry::Wrong,
+        }
     }
 }
 

@@ -45,13 +45,12 @@ pub(crate) struct Member<'t> {
 }
 
 impl<'t> Member<'t> {
-    /// `None` for a value that is no table.
-    pub(super) fn read(
-        name: Written<&'t str>,
-        table: &'t Value<'t>,
-        r: &mut Reader<'t>,
-    ) -> Option<Self> {
-        let mut fields = Fields::of(table, KEYS, r)?;
+    /// Even of a value that is no table a member comes out, of which nothing is known but its
+    /// name.
+    pub(super) fn read(name: Written<&'t str>, table: &'t Value<'t>, r: &mut Reader<'t>) -> Self {
+        let Some(mut fields) = Fields::of(table, KEYS, r) else {
+            return Self::unknown(name, table.span());
+        };
         fields.entry("note", r, value::text);
         let member = Member {
             name,
@@ -74,7 +73,23 @@ impl<'t> Member<'t> {
             }),
         };
         fields.finish(r);
-        Some(member)
+        member
+    }
+
+    fn unknown(name: Written<&'t str>, place: Place) -> Self {
+        Member {
+            name,
+            place,
+            like: Entry::Wrong,
+            start: Entry::Wrong,
+            end: Entry::Wrong,
+            runs: Entry::Wrong,
+            datum: Entry::Wrong,
+            segments: Entry::Wrong,
+            supports: Entry::Wrong,
+            loads: Entry::Wrong,
+            limits: Entry::Wrong,
+        }
     }
 }
 

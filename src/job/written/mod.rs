@@ -133,13 +133,13 @@ impl<'t> Job<'t> {
             job.cases.push(case::Case::read(name, value, r));
         }
         for (name, value) in tables(&mut fields, "combination", r) {
-            name::is_good(name.value, &name.place, r);
+            name::is_for_a_combination(name.value, &name.place, r);
             let combination = combination::Combination::read(name, value, r);
             job.combinations.push(combination);
         }
         for (id, value) in tables(&mut fields, "material", r) {
             name::is_good(id.value, &id.place, r);
-            job.materials.extend(material::Material::read(id, value, r));
+            job.materials.push(material::Material::read(id, value, r));
         }
         let members = tables(&mut fields, "member", r);
         let is_a_table = |member: &Value<'_>| member.get_ref().is_table();
@@ -150,7 +150,7 @@ impl<'t> Job<'t> {
         }
         for (name, value) in members {
             name::is_for_a_part(name.value, &name.place, r);
-            job.members.extend(member::Member::read(name, value, r));
+            job.members.push(member::Member::read(name, value, r));
         }
         fields.finish(r);
         job
@@ -167,5 +167,9 @@ fn tables<'t>(
         return Vec::new();
     };
     let help = "write a header for each name: `[".to_owned() + key + ".NAME]`";
-    named(value, key, &help, r).unwrap_or_default()
+    let tables = named(value, key, &help, r);
+    if tables.is_none() {
+        r.problems.lost(key);
+    }
+    tables.unwrap_or_default()
 }

@@ -42,6 +42,22 @@ pub(crate) fn is_good(name: &str, place: &Place, r: &mut Reader<'_>) -> bool {
     false
 }
 
+/// Words with which an address says which of all combinations it means.
+const OF_ALL: &[&str] = &["max", "min", "abs"];
+
+/// Whether a combination may be called so; reports it if not.
+pub(crate) fn is_for_a_combination(name: &str, place: &Place, r: &mut Reader<'_>) -> bool {
+    if !is_good(name, place, r) {
+        return false;
+    }
+    let reserved = OF_ALL.contains(&name);
+    if reserved {
+        let message = format!("the name `{name}` is taken: addresses of results need it");
+        r.problems.say(place, message, "write another name");
+    }
+    !reserved
+}
+
 /// Whether a member or a part of it may be called so; reports it if not.
 pub(crate) fn is_for_a_part(name: &str, place: &Place, r: &mut Reader<'_>) -> bool {
     if !is_good(name, place, r) {
