@@ -234,9 +234,7 @@ impl<'a> Run<'a> {
                 json::write(self.out, &document)
             }
             Form::Whole | Form::Brief => {
-                if !self.one_job {
-                    writeln!(self.out)?;
-                }
+                writeln!(self.out)?;
                 text::write_counts(self.out, &self.counts, &self.layout)
             }
         }
