@@ -45,7 +45,9 @@ pub fn write_line(
         }
         (_, Some(check), _) => format!(
             "{} on {}, combination {}",
-            check.check, check.on, check.combination
+            checks::governing_name(job, check),
+            check.on,
+            check.combination
         ),
         _ => String::new(),
     };

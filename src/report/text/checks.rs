@@ -15,7 +15,7 @@ const NEAR: f64 = 0.95;
 
 /// What a row of either kind of check says.
 struct Row<'a> {
-    check: &'a Name,
+    check: String,
     on: &'a Name,
     combination: Option<&'a Name>,
     at: Option<f64>,
@@ -28,10 +28,10 @@ struct Row<'a> {
     line: usize,
 }
 
-impl<'a> From<&'a CheckResult> for Row<'a> {
-    fn from(check: &'a CheckResult) -> Self {
+impl<'a> Row<'a> {
+    fn of(check: &'a CheckResult) -> Self {
         Row {
-            check: &check.check,
+            check: named(check),
             on: &check.on,
             combination: None,
             at: check.at,
@@ -44,12 +44,10 @@ impl<'a> From<&'a CheckResult> for Row<'a> {
             line: check.line,
         }
     }
-}
 
-impl<'a> From<&'a Governing> for Row<'a> {
-    fn from(check: &'a Governing) -> Self {
+    fn governing(job: &JobResult, check: &'a Governing) -> Self {
         Row {
-            check: &check.check,
+            check: governing_name(job, check),
             on: &check.on,
             combination: Some(&check.combination),
             at: check.at,
@@ -61,6 +59,34 @@ impl<'a> From<&'a Governing> for Row<'a> {
             status: check.status,
             line: check.line,
         }
+    }
+}
+
+/// The check's name, and of a gap which of its two limits it is held against: `gap min`.
+fn named(check: &CheckResult) -> String {
+    let is = |bound: &&str| {
+        let value = check.details.get(*bound).and_then(|value| value.as_f64());
+        value == Some(check.limit)
+    };
+    match ["min", "max"].iter().find(|bound| is(bound)) {
+        Some(bound) => format!("{} {bound}", check.check),
+        None => check.check.to_string(),
+    }
+}
+
+/// The same of a governing check.
+pub(super) fn governing_name(job: &JobResult, governing: &Governing) -> String {
+    let of = |check: &&CheckResult| {
+        check.check == governing.check
+            && check.on == governing.on
+            && check.line == governing.line
+            && check.limit == governing.limit
+    };
+    let mut combinations = job.combinations.iter();
+    let combination = combinations.find(|each| each.name == governing.combination);
+    match combination.and_then(|each| each.checks.iter().find(of)) {
+        Some(check) => named(check),
+        None => governing.check.to_string(),
     }
 }
 
@@ -128,7 +154,8 @@ pub(super) fn write_governing(
     }
     writeln!(out)?;
     title(out, "Governing checks", '-', layout.width)?;
-    let rows: Vec<Row> = job.governing.iter().map(Row::from).collect();
+    let rows = job.governing.iter();
+    let rows: Vec<Row> = rows.map(|check| Row::governing(job, check)).collect();
     write_rows(out, &rows, &layout.style(job), layout)?;
     write_failing(out, job, layout)?;
     write_sources(out, job, layout)
@@ -149,7 +176,7 @@ fn write_failing(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::R
         };
         let combinations = job.combinations.iter();
         let times = combinations.filter(|each| each.checks.iter().any(|check| failed(&check)));
-        let text = failure(check, times.count(), &layout.style(job));
+        let text = failure(job, check, times.count(), layout);
         wrapped(out, "- ", &text, layout.width)?;
     }
     Ok(())
@@ -157,14 +184,19 @@ fn write_failing(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::R
 
 /// `tension on stay.eye at 120 mm is 340 MPa in combination strength; the limit of 275 MPa is set in
 /// line 48: brief 3.1`.
-fn failure(check: &Governing, times: usize, style: &Style) -> String {
-    let mut text = format!("{} on {}", check.check, check.on);
+fn failure(job: &JobResult, check: &Governing, times: usize, layout: &Layout) -> String {
+    let style = &layout.style(job);
+    let mut text = format!("{} on {}", governing_name(job, check), check.on);
     if let Some(at) = check.at {
         text += &format!(" at {}", with_unit::<Length>(style, from_si(at)));
     }
     let shown = |si| match dimension(check.unit) {
         Some(dimension) => style.quantity(dimension, si),
         None => value(style, check.unit, si),
+    };
+    let limit = match check.unit {
+        Unit::None => String::new(),
+        _ => format!(" of {}", shown(check.limit)),
     };
     text += &format!(
         " is {} in combination {}",
@@ -174,11 +206,7 @@ fn failure(check: &Governing, times: usize, style: &Style) -> String {
     if times > 1 {
         text += &format!(", the worst of {} that fail", counted(times, "combination"));
     }
-    text += &format!(
-        "; the limit of {} is set in line {}",
-        shown(check.limit),
-        check.line
-    );
+    text += &format!("; the limit{limit} is set in line {}", check.line);
     if let Some(source) = &check.source {
         text += &format!(": {source}");
     }
@@ -214,7 +242,7 @@ pub(super) fn write_checks(
     layout: &Layout,
 ) -> io::Result<()> {
     title(out, "Checks", '-', layout.width)?;
-    let rows: Vec<Row> = checks.iter().map(Row::from).collect();
+    let rows: Vec<Row> = checks.iter().map(Row::of).collect();
     write_rows(out, &rows, style, layout)
 }
 
@@ -243,7 +271,7 @@ fn write_rows(out: &mut dyn Write, rows: &[Row], style: &Style, layout: &Layout)
     let used = rows.iter().map(|row| ratio(style, row.utilisation));
     let at = Column::number("at", Some(style.unit(Length::DIMENSION)), at);
     Table::of([
-        Column::words("check", rows.iter().map(|row| row.check)),
+        Column::words("check", rows.iter().map(|row| &row.check)),
         Column::names("on", rows.iter().map(|row| row.on)),
     ])
     .block([

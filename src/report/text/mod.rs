@@ -45,7 +45,8 @@ impl Layout {
 const SIGNS: &str = "N and stress are + in tension, elongation + for growth, displacements and \
      forces + toward the member's end. A reaction is the force that the support puts on the \
      member. A gap is the clearance that remains: + open, 0 bearing. Places (at) are distances \
-     from the member's start. Utilisation is demand over limit by size.";
+     from the member's start. Utilisation is demand over limit by size; for a least gap (gap min) \
+     it is what has closed over what may close.";
 
 /// What rounding leaves of numbers that cancel: a number smaller than this share of the largest of
 /// its kind beside it is shown as 0. JSON and CSV keep it.
