@@ -13,7 +13,7 @@ use unicode_width::UnicodeWidthStr;
 pub fn write_brief(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
     heading::write(out, job, layout)?;
     checks::write_governing(out, job, layout)?;
-    write_foot(out, layout)
+    write_foot(out, job, layout)
 }
 
 /// Writes one line: the verdict, the utilisation of the check that governs, the file padded to

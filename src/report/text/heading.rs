@@ -16,12 +16,12 @@ pub(super) const LABEL: usize = 13;
 
 /// Writes title, verdict, what the job says of itself, and the warnings.
 pub(super) fn write(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
-    title(
-        out,
-        job.title.as_deref().unwrap_or("Untitled job"),
-        '=',
-        layout.width,
-    )?;
+    let untitled = match job.status {
+        JobStatus::Error if job.combinations.is_empty() => "Job without a result",
+        _ => "Untitled job",
+    };
+    let heading = job.title.as_deref().unwrap_or(untitled);
+    title(out, heading, '=', layout.width)?;
     let word = status(job.status);
     writeln!(
         out,
@@ -30,17 +30,13 @@ pub(super) fn write(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io
         paint(word, layout.colour),
         reason(job)
     )?;
-    let file = match job.file.as_str() {
-        "-" => "standard input",
-        path => path,
-    };
     let style = layout.style(job);
     let datum = job
         .datum
         .map(|kelvin| with_unit::<ThermodynamicTemperature>(&style, from_si(kelvin)));
     let labelled = [
         ("reference", job.reference.as_deref()),
-        ("file", Some(file)),
+        ("file", Some(job.file.as_str())),
         ("datum", datum.as_deref()),
         ("prepared by", job.prepared_by.as_deref()),
         ("checked by", job.checked_by.as_deref()),

@@ -68,7 +68,7 @@ pub fn write_job(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::R
         write_combination(out, job, combination, layout)?;
     }
     write_remarks(out, job, layout)?;
-    write_foot(out, layout)
+    write_foot(out, job, layout)
 }
 
 /// Writes how much was looked at and what came of it.
@@ -180,7 +180,11 @@ fn write_remarks(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::R
     Ok(())
 }
 
-fn write_foot(out: &mut dyn Write, layout: &Layout) -> io::Result<()> {
+/// What its numbers mean and what they are for; nothing below a report that has none.
+fn write_foot(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
+    if job.combinations.is_empty() {
+        return Ok(());
+    }
     writeln!(out)?;
     wrapped(out, "Signs: ", SIGNS, layout.width)?;
     wrapped(out, "", CLOSING, layout.width)
