@@ -340,11 +340,9 @@ fn unproven(
 /// Where tolerances are written, that the nominal values were used.
 fn tolerances(model: &Model) -> Option<Remark> {
     let first = model.tolerances.first()?;
-    let count = model.tolerances.len();
-    let text = if count == 1 {
-        "one value bears a tolerance: its nominal value was used".to_owned()
-    } else {
-        format!("{count} values bear tolerances: their nominal values were used")
+    let text = match model.tolerances.len() {
+        1 => "one value bears a tolerance: its nominal value was used".to_owned(),
+        count => format!("{count} values bear tolerances: their nominal values were used"),
     };
     Some(Remark {
         about: "job".into(),
