@@ -302,14 +302,14 @@ fn unproven(
 fn tolerances(model: &Model) -> Option<Remark> {
     let first = model.tolerances.first()?;
     let count = model.tolerances.len();
-    let values = if count == 1 {
-        "value bears a tolerance".to_owned()
+    let text = if count == 1 {
+        "one value bears a tolerance: its nominal value was used".to_owned()
     } else {
-        format!("{count} values bear tolerances")
+        format!("{count} values bear tolerances: their nominal values were used")
     };
     Some(Remark {
         about: "job".into(),
-        text: format!("{values}: the nominal values were used"),
+        text,
         place: Some(first.clone()),
         caution: false,
     })

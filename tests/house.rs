@@ -5,8 +5,8 @@ use std::path::{Path, PathBuf};
 
 fn sources(folder: &Path) -> Vec<PathBuf> {
     let mut found = Vec::new();
-    for entry in fs::read_dir(folder).unwrap() {
-        let path = entry.unwrap().path();
+    for entry in fs::read_dir(folder).expect("a folder of sources") {
+        let path = entry.expect("a readable folder").path();
         if path.is_dir() {
             found.extend(sources(&path));
         } else if path.extension().is_some_and(|ending| ending == "rs") {
@@ -42,7 +42,7 @@ fn breaches(room: &str, forbidden: &[&str]) -> Vec<String> {
     let files = sources(&root);
     assert!(!files.is_empty(), "no source in {room}");
     for file in files {
-        for named in rooms_named(&fs::read_to_string(&file).unwrap()) {
+        for named in rooms_named(&fs::read_to_string(&file).expect("a readable source")) {
             if forbidden.contains(&named.as_str()) {
                 found.push(format!("{} names crate::{named}", file.display()));
             }

@@ -130,7 +130,7 @@ fn both(one: &Chain, other: &Chain) -> Result<(Outcome, Outcome), TestCaseError>
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(300))]
+    #![proptest_config(ProptestConfig { cases: 300, failure_persistence: None, ..ProptestConfig::default() })]
 
     /// Superposition where no state changes: half-way between two sets of actions in which the same
     /// contacts bear, the same bear, and every result is the mean.

@@ -3,16 +3,6 @@
 use crate::quantity::{Density, Expansion, Length, Stress, ThermodynamicTemperature};
 use std::sync::Arc;
 
-/// A strength that a limit may be a share of.
-#[derive(Debug, Clone, Copy, PartialEq, Eq)]
-#[allow(missing_docs)]
-pub enum Strength {
-    Yield,
-    Ultimate,
-    Proof,
-    Crushing,
-}
-
 /// A material with what is known of it; what is not known is `None` and an error where it is needed.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Material {

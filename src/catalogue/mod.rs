@@ -7,5 +7,5 @@ mod material;
 pub mod section;
 
 pub use library::{digest, files, ids, library};
-pub use material::{Material, Strength};
+pub use material::Material;
 pub use section::{Section, Shape};

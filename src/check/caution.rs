@@ -1,15 +1,23 @@
 //! What a report warns of, each where its condition holds.
 
-use crate::catalogue::Shape;
+use crate::catalogue::{Section, Shape};
 use crate::model::{Layer, Limit, LimitKind, Member, Model, Place, Remark, ShareFactor};
 use crate::quantity::{Dimension, Force, Length, Stress, Style, ThermodynamicTemperature, from_si};
 use crate::result::{CombinationResult, MemberResult};
 use crate::solve::Threshold;
 
 /// Slenderness L/r above which a member in compression is called slender (AISC 360-22, user note
-/// to E2), and one that is only pulled (user note to D1).
+/// to E2).
 const SLENDER_IN_COMPRESSION: f64 = 200.0;
+
+/// Slenderness above which a member that is only pulled is (user note to D1, which leaves rods and
+/// hangers out).
 const SLENDER_IN_TENSION: f64 = 300.0;
+
+/// A share of a strength below this holds a safety factor of allowable-stress design (0.6 yield,
+/// 0.5 ultimate); resistance and partial factors lie above (0.75 is a resistance factor, 1/1.1 a
+/// partial factor) and go with factored loads. Common practice.
+const HOLDS_A_SAFETY_FACTOR: f64 = 0.7;
 
 /// A movement of this share of the member's length is no small displacement any more.
 const LARGE_MOVEMENT: f64 = 1.0 / 50.0;
@@ -115,7 +123,7 @@ impl Look<'_> {
     }
 
     fn slenderness(&self) -> Option<Remark> {
-        let layers = self
+        let single = self
             .member
             .segments
             .iter()
@@ -123,37 +131,46 @@ impl Look<'_> {
                 [only] => Some(only),
                 _ => None,
             });
+        let pushed = self.greatest_compression().is_some();
+        let rod = |layer: &Layer| {
+            matches!(
+                layer.section,
+                Section::Round(_) | Section::Bar(_) | Section::Thread(_)
+            )
+        };
+        let (limit, how) = if pushed {
+            (
+                SLENDER_IN_COMPRESSION,
+                "in compression (AISC 360-22, user note to E2)",
+            )
+        } else {
+            (
+                SLENDER_IN_TENSION,
+                "in tension (AISC 360-22, user note to D1)",
+            )
+        };
         let ends = |layer: &Layer| {
             [
                 layer.section.gyration_at(0.0),
                 layer.section.gyration_at(1.0),
             ]
         };
-        let least = layers
+        let radii = single
+            .filter(|layer| pushed || !rod(layer))
             .flat_map(ends)
-            .flatten()
+            .flatten();
+        let least = radii
             .filter(|radius| radius.value > 0.0)
             .reduce(Length::min)?;
         let slenderness = (self.member.length() / least).value;
-        let (limit, how, rule) = if self.greatest_compression().is_some() {
-            (
-                SLENDER_IN_COMPRESSION,
-                "in compression",
-                "AISC 360-22, user note to E2",
-            )
-        } else {
-            (
-                SLENDER_IN_TENSION,
-                "in tension",
-                "AISC 360-22, user note to D1",
-            )
-        };
         if slenderness <= limit {
             return None;
         }
         let radius = self.style.quantity(Dimension::Length, least.value);
         self.caution(
-            format!("slender: length over least radius of gyration ({radius}) is {slenderness:.0}, over {limit:.0} {how} ({rule})"),
+            format!(
+                "slender: length over least radius of gyration ({radius}) is {slenderness:.0}, over {limit:.0} {how}"
+            ),
             None,
         )
     }
@@ -297,20 +314,19 @@ fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
         return None;
     };
     let ShareFactor(share) = share?;
-    let factored = model
+    if share >= HOLDS_A_SAFETY_FACTOR {
+        return None;
+    }
+    let factored = |factors: &[f64]| factors.iter().any(|&factor| factor > 1.0);
+    let (_, combination) = model
         .combinations
         .iter()
         .enumerate()
         .find(|(index, combination)| {
-            super::reads(limit, *index, combination)
-                && combination.factors.iter().any(|&factor| factor > 1.0)
-        });
-    let (_, combination) = factored?;
-    if share >= 1.0 {
-        return None;
-    }
+            super::reads(limit, *index, combination) && factored(&combination.factors)
+        })?;
     Some(Remark {
-        about: limit.on.to_string(),
+        about: format!("limit.{}", super::word(&limit.kind)),
         text: format!(
             "this limit is {share:.3} of a strength and so may hold a safety factor already, and `{}` has factored loads: safety may be counted twice",
             combination.name,

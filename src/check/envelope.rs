@@ -56,7 +56,8 @@ fn range(
     combinations: &[CombinationResult],
     of: &dyn Fn(&MemberResult) -> Option<f64>,
 ) -> Envelope {
-    let (mut most, mut least): (Option<(f64, usize)>, Option<(f64, usize)>) = (None, None);
+    let mut most: Option<(f64, usize)> = None;
+    let mut least: Option<(f64, usize)> = None;
     for (index, combination) in combinations.iter().enumerate() {
         let Some(value) = of(&combination.members[member]) else {
             continue;

@@ -72,7 +72,8 @@ pub fn combination(
 ) -> Vec<CheckResult> {
     let mut checks = Vec::new();
     for (limit, &line) in model.limits.iter().zip(lines) {
-        if !reads(limit, index, &model.combinations[index]) {
+        // A movement counted from this very combination is nothing to check.
+        if limit.since == Some(index) || !reads(limit, index, &model.combinations[index]) {
             continue;
         }
         let member = limit.target.member();

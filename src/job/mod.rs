@@ -1,5 +1,5 @@
 //! The job file: as written, with each key and value at its place, then as meant, a
-//! [`Model`](crate::model::Model).
+//! [`Model`].
 //!
 //! All faults of a file come out of one run, in the order of the text: those of the syntax, those
 //! of single values, and those of what values mean together. Nothing is concluded from a value that

@@ -6,26 +6,35 @@ pub(crate) fn nearest<'c>(
     written: &str,
     candidates: impl IntoIterator<Item = &'c str>,
 ) -> Option<&'c str> {
+    all_nearest(written, candidates).first().copied()
+}
+
+/// All candidates that come equally near.
+fn all_nearest<'c>(written: &str, candidates: impl IntoIterator<Item = &'c str>) -> Vec<&'c str> {
     let length = written.chars().count();
     if length == 0 || length > 64 {
-        return None;
+        return Vec::new();
     }
     let written_low = written.to_lowercase();
     let allowed = (length / 3).clamp(1, 3);
-    candidates
+    let near: Vec<(usize, &str)> = candidates
         .into_iter()
         .filter(|candidate| !candidate.is_empty())
         .filter_map(|candidate| {
             let low = candidate.to_lowercase();
-            if low.len().abs_diff(written_low.len()) > 2 * allowed + 2 {
+            if low.chars().count().abs_diff(length) > allowed {
                 return None;
             }
             let distance = distance(&written_low, &low);
             let shortest = length.min(candidate.chars().count());
             (distance <= allowed && distance < shortest.max(2)).then_some((distance, candidate))
         })
-        .min_by_key(|(distance, _)| *distance)
-        .map(|(_, candidate)| candidate)
+        .collect();
+    let least = near.iter().map(|(distance, _)| *distance).min();
+    let nearest = near
+        .into_iter()
+        .filter(|(distance, _)| Some(*distance) == least);
+    nearest.map(|(_, candidate)| candidate).collect()
 }
 
 /// A remedy that names the nearest candidate, or else lists them where they are few.
@@ -34,8 +43,13 @@ pub(crate) fn remedy<'c>(
     candidates: impl IntoIterator<Item = &'c str> + Clone,
     of_all: &str,
 ) -> Option<String> {
-    if let Some(near) = nearest(written, candidates.clone()) {
-        return Some(format!("`{near}` comes nearest"));
+    match all_nearest(written, candidates.clone()).as_slice() {
+        [] => {}
+        [one] => return Some(format!("`{one}` comes nearest")),
+        several => {
+            let several = &several[..several.len().min(4)];
+            return Some(format!("`{}` come nearest", several.join("` and `")));
+        }
     }
     let mut few = candidates.into_iter();
     let mut list = String::new();

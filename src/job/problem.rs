@@ -32,16 +32,21 @@ impl Problem {
 enum RestsOn {
     /// The value itself.
     Itself,
-    /// Something is missing in the table that stands at the place.
-    TheTable,
+    /// This key is missing in the table that stands at the place; `""` for one of several.
+    Lacks(&'static str),
     /// Nothing of this name is in tables of this root (`case`, `material`, `member` …).
     Tables(&'static str),
 }
+
+/// With more faults of the syntax than this a text is no job yet, and they alone are told.
+const MANY: usize = 200;
 
 /// The findings of a run, in the order in which they were made.
 #[derive(Debug, Default)]
 pub(crate) struct Problems {
     found: Vec<(Problem, RestsOn)>,
+    /// Unknown keys: the table, and the key that is meant.
+    misspelt: Vec<(Place, &'static str)>,
 }
 
 impl Problems {
@@ -50,14 +55,22 @@ impl Problems {
         self.push(place, message.into(), help.into(), RestsOn::Itself);
     }
 
-    /// Something that the table at the place lacks.
+    /// A key that the table at the place lacks, `""` for one of several. Left out where the table
+    /// has a misspelling of it.
     pub(crate) fn missing(
         &mut self,
+        key: &'static str,
         place: &Place,
         message: impl Into<String>,
         help: impl Into<Help>,
     ) {
-        self.push(place, message.into(), help.into(), RestsOn::TheTable);
+        self.push(place, message.into(), help.into(), RestsOn::Lacks(key));
+    }
+
+    /// Takes note of a key that the table at the place does not have, and of the one that is meant
+    /// by it in all likelihood.
+    pub(crate) fn misspelt(&mut self, table: &Place, meant: Option<&'static str>) {
+        self.misspelt.push((table.clone(), meant.unwrap_or("")));
     }
 
     /// A name that no table of this root defines.
@@ -84,19 +97,42 @@ impl Problems {
     /// All findings with those of the syntax, in the order of the text, each once. What the syntax
     /// may have caused is left out.
     pub(crate) fn with_syntax(self, syntax: Vec<Problem>, text: &str) -> Vec<Problem> {
+        if syntax.len() > MANY {
+            return sorted(syntax);
+        }
         let broken: Vec<Broken> = syntax.iter().map(|p| Broken::at(&p.place, text)).collect();
+        let misspelt = &self.misspelt;
         let own = self.found.into_iter().filter(|(problem, rests_on)| {
-            !broken
-                .iter()
-                .any(|broken| broken.may_cause(&problem.place, *rests_on, text))
+            !is_misspelt(misspelt, &problem.place, *rests_on)
+                && !broken
+                    .iter()
+                    .any(|broken| broken.may_cause(&problem.place, *rests_on, text))
         });
-        let mut all: Vec<Problem> = own.map(|(problem, _)| problem).chain(syntax).collect();
-        all.sort_by(|a, b| {
-            (a.place.start, a.place.end, &a.message).cmp(&(b.place.start, b.place.end, &b.message))
-        });
-        all.dedup_by(|a, b| a.place == b.place && a.message == b.message);
-        all
+        sorted(own.map(|(problem, _)| problem).chain(syntax).collect())
     }
+}
+
+/// In the order of the text, each once.
+fn sorted(mut all: Vec<Problem>) -> Vec<Problem> {
+    all.sort_by(|a, b| {
+        (a.place.start, a.place.end, &a.message).cmp(&(b.place.start, b.place.end, &b.message))
+    });
+    all.dedup_by(|a, b| a.place == b.place && a.message == b.message);
+    all
+}
+
+/// Keys that a table may also take from `[default]` or `[job]`.
+const SHARED: [&str; 3] = ["material", "runs", "datum"];
+
+/// Whether what is missing is there under a misspelt key.
+fn is_misspelt(misspelt: &[(Place, &'static str)], place: &Place, rests_on: RestsOn) -> bool {
+    let RestsOn::Lacks(key) = rests_on else {
+        return false;
+    };
+    misspelt.iter().any(|(table, meant)| {
+        let same = table == place && (key.is_empty() || *meant == key);
+        same || SHARED.contains(&key) && *meant == key
+    })
 }
 
 /// The optional remedy of a problem.
@@ -126,8 +162,8 @@ struct Broken<'t> {
     lines: Place,
     /// The block of lines from the header above it to the next one.
     block: Place,
-    /// The first name of the block's header; `None` where the header itself is at fault or there
-    /// is none.
+    /// The first name of the block's header, `""` above the first one; `None` where the header
+    /// itself is at fault.
     root: Option<&'t str>,
 }
 
@@ -139,6 +175,7 @@ impl<'t> Broken<'t> {
         let mut root = None;
         if !is_header(&text[lines.clone()]) {
             block.start = 0;
+            root = Some("");
             let mut end = lines.start;
             while end > 0 {
                 let start = text[..end - 1].rfind('\n').map_or(0, |at| at + 1);
@@ -164,13 +201,18 @@ impl<'t> Broken<'t> {
 
     fn may_cause(&self, place: &Place, rests_on: RestsOn, text: &str) -> bool {
         let lines = lines_of(place, text);
+        if self.root.is_none() && self.block.contains(&place.start) {
+            return true; // without its header nobody knows what this table is
+        }
         if lines.start <= self.lines.end && self.lines.start <= lines.end {
             return true;
         }
         match rests_on {
             RestsOn::Itself => false,
-            RestsOn::TheTable => self.block.contains(&place.start) || self.root.is_none(),
-            RestsOn::Tables(root) => self.root.is_none_or(|broken| broken == root),
+            RestsOn::Lacks(_) => self.block.contains(&place.start) || self.root.is_none(),
+            RestsOn::Tables(root) => self
+                .root
+                .is_none_or(|broken| broken.is_empty() || broken == root),
         }
     }
 }

@@ -88,7 +88,7 @@ pub fn decode(bytes: &[u8]) -> Result<Cow<'_, str>, Box<Undecoded>> {
     let utf16 = match bytes {
         [0xff, 0xfe, ..] => true,
         [0xfe, 0xff, ..] => true,
-        [0, b, ..] | [b, 0, ..] => *b != 0,
+        [0, a, 0, b, ..] | [a, 0, b, 0, ..] => *a != 0 && *b != 0,
         _ => false,
     };
     if utf16 {

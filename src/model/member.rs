@@ -53,16 +53,13 @@ pub struct Segment {
     pub from: Length,
     /// Where it ends.
     pub to: Length,
+    /// Its length as written, which the difference of the two places only rounds.
+    pub length: Length,
     /// What it is made of.
     pub kind: SegmentKind,
 }
 
 impl Segment {
-    /// Its length as drawn.
-    pub fn length(&self) -> Length {
-        self.to - self.from
-    }
-
     /// Its layers; none for a part known by its stiffness and for a gap.
     pub fn layers(&self) -> &[Layer] {
         match &self.kind {

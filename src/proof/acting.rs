@@ -20,6 +20,8 @@ pub(super) struct Acting<'m> {
     layers: Vec<OnLayer>,
     first_layer: Vec<usize>,
     pub(super) movements: Vec<Length>,
+    /// Standard gravity along the axis, + toward the end.
+    gravity: f64,
 }
 
 #[derive(Clone, Copy, Default)]
@@ -31,7 +33,7 @@ struct OnLayer {
 }
 
 /// Everything of a piece at one place along it.
-#[derive(Clone, Copy, Default)]
+#[derive(Debug, Clone, Copy, Default)]
 pub(super) struct Local {
     /// EA.
     pub(super) rigidity: Force,
@@ -60,6 +62,7 @@ impl<'m> Acting<'m> {
             layers: vec![OnLayer::default(); count],
             first_layer,
             movements: vec![Length::default(); member.supports.len()],
+            gravity: -member.rise() * STANDARD_GRAVITY,
         };
         let factor = |case: usize| combination.factors[case];
         for force in &member.actions.forces {
@@ -110,7 +113,7 @@ impl<'m> Acting<'m> {
         let mut line = start * (1.0 - s) + end * s;
         let index = self.member.pieces[piece].segment;
         let segment = &self.member.segments[index];
-        let along = -self.member.rise() * STANDARD_GRAVITY;
+        let along = self.gravity;
         let mut add =
             |per_length: f64, times: f64| line += from_si::<_, _>(per_length * along * times);
         match &segment.kind {
@@ -188,7 +191,7 @@ impl<'m> Acting<'m> {
                     self.layer(index, 0).imposed,
                 );
                 Local {
-                    rigidity: part.stiffness * segment.length(),
+                    rigidity: part.stiffness * segment.length,
                     thermal: hot,
                     imposed: cut,
                     free_size: hot.abs() + cut.abs(),

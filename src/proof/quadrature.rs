@@ -82,7 +82,8 @@ mod tests {
     fn steep_tapers_integrate_to_their_closed_forms() {
         for ratio in [1.0_f64, 0.5, 1e-2, 1e-4, 1e-6] {
             let round = integrate(tapered(), |s| ((1.0 - s) + ratio * s).powi(-2));
-            assert_relative_eq!(round, 1.0 / ratio, max_relative = 1e-10);
+            // A node next to the thin end is known to a rounding of 1, so to one of 1 / ratio there.
+            assert_relative_eq!(round, 1.0 / ratio, max_relative = 1e-14 + 4e-16 / ratio);
         }
     }
 }

@@ -231,6 +231,7 @@ where
     T: Copy + Default + Add<Output = T> + Sub<Output = T> + Mul<f64, Output = T>,
 {
     type Output = Self;
+    #[allow(clippy::suspicious_arithmetic_impl)] // a sum with the other's coefficients negated
     fn sub(self, other: Self) -> Self {
         self + other.map(|c| T::default() - c)
     }

@@ -21,8 +21,8 @@ mod unit;
 pub use curve::Curve;
 pub use dimension::{Dimension, Measure};
 pub use literal::{
-    Literal, LiteralError, MovementBound, StressLimit, read, read_change, read_movement_bound,
-    read_reading, read_stress_limit,
+    Literal, LiteralError, MovementBound, Strength, StressLimit, read, read_change,
+    read_movement_bound, read_reading, read_stress_limit,
 };
 pub use show::Style;
 use std::marker::PhantomData;

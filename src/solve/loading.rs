@@ -49,14 +49,8 @@ impl LayerLoading {
 }
 
 impl Loading {
-    /// Adds up what `combination` puts on `member`; `with_temperature` off leaves the changes of
-    /// temperature out, for the share of full restraint.
-    pub(super) fn of(
-        model: &Model,
-        member: &Member,
-        combination: &Combination,
-        with_temperature: bool,
-    ) -> Self {
+    /// Adds up what `combination` puts on `member`.
+    pub(super) fn of(model: &Model, member: &Member, combination: &Combination) -> Self {
         let mut loading = Loading {
             forces: vec![Force::default(); member.stations.len()],
             lines: vec![Curve::constant(ForcePerLength::default()); member.pieces.len()],
@@ -80,9 +74,10 @@ impl Loading {
                 loading.add_weight(model, member, action.segment, action.layer, times);
             }
         }
-        if with_temperature {
-            for action in &actions.temperatures {
-                let change = Curve::linear(action.start, action.end) * factor(action.case);
+        for action in &actions.temperatures {
+            let times = factor(action.case);
+            if times != 0.0 {
+                let change = Curve::linear(action.start, action.end) * times;
                 loading.add_temperature(model, member, action.segment, action.layer, &change);
             }
         }
@@ -119,7 +114,7 @@ impl Loading {
                     let unit: Stress = from_si(1.0);
                     self.layers.push(LayerLoading {
                         modulus: unit,
-                        area: Curve::constant(part.stiffness * segment.length() / unit),
+                        area: Curve::constant(part.stiffness * segment.length / unit),
                         thermal: no_strain,
                         imposed: Ratio::default(),
                     });

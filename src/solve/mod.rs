@@ -93,14 +93,14 @@ pub fn member(
     member: &Member,
     combination: &Combination,
 ) -> Result<Solution, SolveError> {
-    let loading = Loading::of(model, member, combination, true);
+    let loading = Loading::of(model, member, combination);
     let prepared = Prepared::of(member, &loading)?;
     let (solved, states) = prepared
         .chain
         .settle()
         .map_err(|reason| explain(member, reason))?;
     let mut result = recover::member(model, member, &loading, &prepared, &solved, &states)?;
-    result.restraint = restraint::share(model, member, combination, &loading, &prepared, &solved);
+    result.restraint = restraint::share(member, &loading, &prepared, &solved);
     let free = solved.free.iter().map(|&(first, last)| {
         (
             member.stations[first].name.clone(),

@@ -1,27 +1,18 @@
 //! What acts on a member: loads and cases with their names resolved, laid on segments and layers.
 
 use super::Meaning;
-use super::coverage::{Cells, Cover, On, narrowest};
+use super::coverage::{Cells, Cover, On};
 use super::forces::{Line, Sloped};
+use super::heat::Heat;
 use super::members::Whole;
 use super::outline::Outline;
 use super::supports::Held;
-use crate::catalogue::section::Along;
 use crate::job::nearest::remedy;
 use crate::job::written::load::{Action, Load};
 use crate::job::written::segment::Kind;
 use crate::job::written::{ByCase, Entry, Written};
-use crate::model::{
-    Actions, FreeStrain, Member, Movement, Name, PointForce, SegmentKind, Temperatures, Weight,
-};
-use crate::quantity::{Length, Ratio, TemperatureInterval, ThermodynamicTemperature, from_si};
-
-/// What a load of a case says of temperature.
-#[derive(Debug, Clone, Copy)]
-enum Heat {
-    Change(Along<TemperatureInterval>),
-    Reading(Along<ThermodynamicTemperature>),
-}
+use crate::model::{Actions, FreeStrain, Member, Movement, Name, PointForce};
+use crate::quantity::{Length, Ratio, from_si};
 
 /// Everything that acts on a member; `None` where that cannot be said. Names are checked for a
 /// member with faults too.
@@ -37,6 +28,7 @@ pub(super) fn actions<'w, 't>(
         outline,
         held,
         member,
+        cells: member.map(|member| Cells::of(&member.segments)),
         actions: Actions::default(),
         weights: Vec::new(),
         heats: Vec::new(),
@@ -47,7 +39,7 @@ pub(super) fn actions<'w, 't>(
         laid.load(load);
     }
     let member = member?;
-    let cells = Cells::of(&member.segments);
+    let cells = laid.cells.take()?;
     laid.lay_weights(member, &cells);
     laid.lay_heat(member, &cells);
     (!whole.loads.is_wrong()).then_some(laid.actions)
@@ -60,9 +52,11 @@ pub(super) struct Laying<'a, 'w, 't> {
     held: &'a Held,
     /// The member without its actions; `None` where something about it is at fault.
     pub(super) member: Option<&'a Member>,
+    /// Its layers in one row.
+    cells: Option<Cells>,
     pub(super) actions: Actions,
-    weights: Vec<Cover<f64>>,
-    heats: Vec<Cover<Heat>>,
+    pub(super) weights: Vec<Cover<f64>>,
+    pub(super) heats: Vec<Cover<Heat>>,
     pub(super) meaning: &'a mut Meaning<'w, 't>,
 }
 
@@ -142,18 +136,6 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         }
     }
 
-    fn heat<T>(&mut self, case: usize, on: Option<On>, value: Heat, written: &Written<T>) {
-        if let Some(on) = on {
-            let place = written.place.clone();
-            self.heats.push(Cover {
-                case,
-                on,
-                value,
-                place,
-            });
-        }
-    }
-
     /// The value of a load for each case that it acts in. Every load of a job with cases names
     /// one, and none of a job without.
     pub(super) fn by_case<T>(
@@ -177,7 +159,10 @@ impl<'w, 't> Laying<'_, 'w, 't> {
                     format!("add `case`; the cases are `{}`", names.join("`, `"))
                 });
                 let message = "in a job with cases each load names its case";
-                self.meaning.r.problems.missing(&load.place, message, help);
+                self.meaning
+                    .r
+                    .problems
+                    .missing("case", &load.place, message, help);
                 Vec::new()
             }
             (ByCase::Each(_), Entry::Given(case)) => {
@@ -210,6 +195,9 @@ impl<'w, 't> Laying<'_, 'w, 't> {
             None => (written.value, None),
         };
         let problems = &mut self.meaning.r.problems;
+        if self.outline.segments.is_empty() {
+            return None;
+        }
         let Some(index) = self.outline.names.find(segment) else {
             if !self.outline.segments.iter().any(|s| s.name.is_wrong()) {
                 let message = format!("no segment of this member is called `{segment}`");
@@ -258,10 +246,10 @@ impl<'w, 't> Laying<'_, 'w, 't> {
 
     /// A strain of everything that is covered.
     fn free_strain(&mut self, case: usize, on: Option<On>, strain: Ratio) {
-        let (Some(on), Some(member)) = (on, self.member) else {
+        let (Some(on), Some(cells)) = (on, &self.cells) else {
             return;
         };
-        for (segment, layer) in Cells::of(&member.segments).each(on) {
+        for (segment, layer) in cells.each(on) {
             self.actions.strains.push(FreeStrain {
                 case,
                 segment,
@@ -342,155 +330,5 @@ impl<'w, 't> Laying<'_, 'w, 't> {
                 movement: written.value,
             });
         }
-    }
-
-    /// Weights, the narrowest at each place. What has neither density nor mass is reported.
-    fn lay_weights(&mut self, member: &Member, cells: &Cells) {
-        let mut covers = std::mem::take(&mut self.weights);
-        let mut laid = Vec::new();
-        narrowest(
-            &mut covers,
-            cells,
-            "weights",
-            self.meaning,
-            |cover, segment, layer, meaning| {
-                if cover.value == 0.0 {
-                    return;
-                }
-                let weighs = match &member.segments[segment].kind {
-                    SegmentKind::Solid { layers, .. } => {
-                        let layer = &layers[layer];
-                        let material = &meaning.materials.used[layer.material];
-                        if layer.mass.is_none() && material.density.is_none() {
-                            let message = format!(
-                                "weight needs the density of `{}`, which is not given",
-                                material.id
-                            );
-                            let help = format!(
-                                "add `density` in `[material.{}]`, or `mass` to the segment",
-                                material.id
-                            );
-                            meaning.r.problems.say(&cover.place, message, help);
-                        }
-                        true
-                    }
-                    SegmentKind::Stiffness(part) => part.mass.is_some(),
-                    SegmentKind::Gap(_) => false,
-                };
-                if weighs {
-                    laid.push(Weight {
-                        case: cover.case,
-                        segment,
-                        layer,
-                        number: cover.value,
-                    });
-                }
-            },
-        );
-        if !laid.is_empty() {
-            self.slope();
-        }
-        self.actions.weights = laid;
-    }
-
-    /// Temperatures, the narrowest at each place, readings as their difference from the datum.
-    fn lay_heat(&mut self, member: &Member, cells: &Cells) {
-        let mut covers = std::mem::take(&mut self.heats);
-        let datum_is_wrong = self.datum_is_wrong();
-        let length = self.outline.length().unwrap_or(1.0);
-        let mut laid = Vec::new();
-        let what = "temperatures";
-        narrowest(
-            &mut covers,
-            cells,
-            what,
-            self.meaning,
-            |cover, segment, layer, meaning| {
-                let Some(change) = change_of(cover, member, datum_is_wrong, meaning) else {
-                    return;
-                };
-                let part = match cover.on {
-                    On::Case | On::Member => {
-                        let segment = &member.segments[segment];
-                        Along {
-                            start: change.at(segment.from.value / length),
-                            end: change.at(segment.to.value / length),
-                        }
-                    }
-                    On::Segment(_) | On::Layer(..) => change,
-                };
-                if !expands(cover, member, segment, layer, &part, meaning) {
-                    return;
-                }
-                laid.push(Temperatures {
-                    case: cover.case,
-                    segment,
-                    layer,
-                    start: part.start,
-                    end: part.end,
-                });
-            },
-        );
-        self.actions.temperatures = laid;
-    }
-
-    fn datum_is_wrong(&self) -> bool {
-        let heading = self.meaning.job.heading.as_ref();
-        self.whole.datum.is_wrong() || heading.is_some_and(|heading| heading.datum.is_wrong())
-    }
-}
-
-/// The change that a cover means; a reading without a datum is reported.
-fn change_of(
-    cover: &Cover<Heat>,
-    member: &Member,
-    datum_is_wrong: bool,
-    meaning: &mut Meaning<'_, '_>,
-) -> Option<Along<TemperatureInterval>> {
-    let reading = match cover.value {
-        Heat::Change(change) => return Some(change),
-        Heat::Reading(reading) => reading,
-    };
-    let Some(datum) = member.datum else {
-        if !datum_is_wrong {
-            let message = "a reading of temperature needs a datum";
-            let help = "add `datum = \"10 degC\"` to `[job]`, the temperature at which lengths \
-                        are as drawn, or write a `temperature-change`";
-            meaning.r.problems.say(&cover.place, message, help);
-        }
-        return None;
-    };
-    Some(Along {
-        start: from_si(reading.start.value - datum.value),
-        end: from_si(reading.end.value - datum.value),
-    })
-}
-
-/// Whether a layer answers a change of temperature; a material that does not say how much is
-/// reported.
-fn expands(
-    cover: &Cover<Heat>,
-    member: &Member,
-    segment: usize,
-    layer: usize,
-    change: &Along<TemperatureInterval>,
-    meaning: &mut Meaning<'_, '_>,
-) -> bool {
-    match &member.segments[segment].kind {
-        SegmentKind::Solid { layers, .. } => {
-            let material = &meaning.materials.used[layers[layer].material];
-            let none = TemperatureInterval::default();
-            if material.expansion.is_none() && !(change.start == none && change.end == none) {
-                let message = format!(
-                    "a temperature needs the expansion of `{}`, which is not given",
-                    material.id
-                );
-                let help = format!("add `expansion` in `[material.{}]`", material.id);
-                meaning.r.problems.say(&cover.place, message, help);
-            }
-            true
-        }
-        SegmentKind::Stiffness(part) => part.expansion.is_some(),
-        SegmentKind::Gap(_) => false,
     }
 }

@@ -164,13 +164,13 @@ fn few_enough(meaning: &mut Meaning<'_, '_>) -> bool {
     let mut total = Some(0u128);
     let mut over = None;
     for combination in &meaning.job.combinations {
-        let lists = combination
+        let mut lists = combination
             .factors
             .iter()
             .map(|(_, factors)| &factors.value);
-        let product = lists.fold(Some(1u128), |product, factors| match factors {
-            Factors::One(_) => product,
-            Factors::Each(list) => product?.checked_mul(list.len() as u128),
+        let product = lists.try_fold(1u128, |product, factors| match factors {
+            Factors::One(_) => Some(product),
+            Factors::Each(list) => product.checked_mul(list.len() as u128),
         });
         total = total
             .zip(product)
@@ -197,7 +197,7 @@ fn grouped(number: u128) -> String {
     let digits = number.to_string();
     let mut out = String::with_capacity(digits.len() * 4 / 3);
     for (index, digit) in digits.chars().enumerate() {
-        if index > 0 && (digits.len() - index) % 3 == 0 {
+        if index > 0 && (digits.len() - index).is_multiple_of(3) {
             out.push(',');
         }
         out.push(digit);

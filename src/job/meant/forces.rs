@@ -59,7 +59,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
                 let help = "add `runs = \"up\"`, \"down\", \"level\" or an angle above level, the \
                             direction from start to end";
                 let problems = &mut self.meaning.r.problems;
-                problems.missing(self.whole.place, message, help);
+                problems.missing("runs", self.whole.place, message, help);
                 None
             }
         }

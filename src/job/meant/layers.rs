@@ -100,7 +100,9 @@ impl<'w, 't> Meaning<'w, 't> {
             Entry::Absent => {
                 let message = "no material is given here";
                 let help = "add `material = \"steel-s355\"`, or give one to all in `[default]`";
-                self.r.problems.missing(&written.place, message, help);
+                self.r
+                    .problems
+                    .missing("material", &written.place, message, help);
                 None
             }
         };

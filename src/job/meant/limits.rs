@@ -3,16 +3,17 @@
 use super::Meaning;
 use super::combinations::Combinations;
 use super::members::Meant;
+use super::reads::Common;
 use super::stress::allowed;
-use crate::job::nearest::remedy;
-use crate::job::written::combination::purpose_named;
+use crate::job::written::Entry;
 use crate::job::written::limit::{Bound, Limits};
-use crate::job::written::{Entry, Written};
+use crate::job::written::segment::{Kind, Segment};
 use crate::model::{
-    AreaUsed, Limit, LimitKind, Member, MovementLimit, Name, Place, Purpose, Reads, Remark,
-    SegmentKind, Target,
+    AreaUsed, Limit, LimitKind, Member, MovementLimit, Name, Place, Purpose, Reads, SegmentKind,
+    Target,
 };
 use crate::quantity::{Force, Length, MovementBound, StressLimit};
+use std::collections::HashSet;
 use std::ops::Neg;
 
 /// All limits of a job in the order of the file.
@@ -25,7 +26,7 @@ pub(super) fn limits<'w, 't>(
         combinations,
         meaning,
         limits: Vec::new(),
-        unread: Vec::new(),
+        unread: HashSet::new(),
     };
     for (index, meant) in meant.iter().enumerate() {
         laying.of_member(index, meant);
@@ -36,20 +37,12 @@ pub(super) fn limits<'w, 't>(
 }
 
 /// Limits on their way onto members.
-struct Laying<'a, 'w, 't> {
-    combinations: Option<&'a Combinations>,
-    meaning: &'a mut Meaning<'w, 't>,
+pub(super) struct Laying<'a, 'w, 't> {
+    pub(super) combinations: Option<&'a Combinations>,
+    pub(super) meaning: &'a mut Meaning<'w, 't>,
     limits: Vec<Limit>,
-    /// The places of limits that no combination reads and that have their caution.
-    unread: Vec<Place>,
-}
-
-/// What all limits of one table have in common.
-struct Common {
-    /// The combinations that `in` names; by purpose where it is left out.
-    only: Option<Vec<usize>>,
-    since: Option<usize>,
-    source: Option<Name>,
+    /// Where limits begin that no combination reads and that have their caution.
+    pub(super) unread: HashSet<usize>,
 }
 
 impl<'w, 't> Laying<'_, 'w, 't> {
@@ -68,7 +61,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
                     self.on_segment(index, at, table, &common, meant, member);
                 }
             }
-            let crate::job::written::segment::Kind::Solid { layers, .. } = &segment.kind else {
+            let Kind::Solid { layers, .. } = &segment.kind else {
                 continue;
             };
             for (number, layer) in layers.iter().enumerate() {
@@ -172,7 +165,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
             self.push(kind, target, on(), common, &force.place);
         }
         if let Entry::Given(elongation) = &table.elongation {
-            let kind = LimitKind::Elongation(movement_limit(elongation.value, segment.length()));
+            let kind = LimitKind::Elongation(movement_limit(elongation.value, segment.length));
             self.push(kind, target, on(), common, &elongation.place);
         }
         self.gap(table, target, &on, common);
@@ -286,74 +279,6 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         }
     }
 
-    /// What `in`, `since` and `source` of a table say; `None` where one is at fault.
-    fn common(&mut self, table: &Limits<'t>) -> Option<Common> {
-        let combinations = self.combinations?;
-        let mut sound = !(table.names.is_wrong() || table.since.is_wrong());
-        let only = table.names.given().map(|names| {
-            let mut only = Vec::new();
-            for name in &names.value {
-                let known = only.len();
-                covered(name.value, combinations, &mut only);
-                if only.len() == known && purpose_named(name.value).is_none() {
-                    sound = false;
-                    self.unknown(name, combinations, " nor a purpose");
-                }
-            }
-            only.sort_unstable();
-            only.dedup();
-            only
-        });
-        let since = table.since.given().and_then(|since| {
-            let index = self.one(since, combinations);
-            sound &= index.is_some();
-            index
-        });
-        sound.then(|| Common {
-            only,
-            since,
-            source: table.source.given().map(|source| Name::from(source.value)),
-        })
-    }
-
-    /// The one combination that `since` names.
-    fn one(&mut self, since: &Written<&str>, combinations: &Combinations) -> Option<usize> {
-        let mut all = combinations.all.iter();
-        if let Some(index) = all.position(|combination| &*combination.name == since.value) {
-            return Some(index);
-        }
-        let family = combinations
-            .families
-            .iter()
-            .find(|(name, ..)| &**name == since.value);
-        match family {
-            Some((_, _, range)) if range.len() == 1 => Some(range.start),
-            Some((_, _, range)) => {
-                let message = format!(
-                    "`{}` stands for {} combinations, and `since` takes one",
-                    since.value,
-                    range.len()
-                );
-                let first = &combinations.all[range.start].name;
-                let help = format!("name one of them, such as \"{first}\"");
-                self.meaning.r.problems.say(&since.place, message, help);
-                None
-            }
-            None => {
-                self.unknown(since, combinations, "");
-                None
-            }
-        }
-    }
-
-    fn unknown(&mut self, name: &Written<&str>, combinations: &Combinations, nor: &str) {
-        let message = format!("`{}` is no combination{nor}", name.value);
-        let families = combinations.families.iter().map(|(name, ..)| &**name);
-        let help = remedy(name.value, families, "the combinations are");
-        let problems = &mut self.meaning.r.problems;
-        problems.unknown("combination", &name.place, message, help);
-    }
-
     fn push(&mut self, kind: LimitKind, target: Target, on: Name, common: &Common, place: &Place) {
         let reads = match &common.only {
             Some(only) => Reads::Only(only.clone()),
@@ -370,38 +295,6 @@ impl<'w, 't> Laying<'_, 'w, 't> {
             place: place.clone(),
         });
     }
-
-    fn caution_if_unread(&mut self, reads: &Reads, on: &Name, place: &Place) {
-        let Some(combinations) = self.combinations else {
-            return;
-        };
-        let is_read = match reads {
-            Reads::Only(only) => !only.is_empty(),
-            Reads::Purpose(wanted) => combinations
-                .families
-                .iter()
-                .any(|(_, purpose, _)| purpose.is_none_or(|purpose| purpose == *wanted)),
-        };
-        if is_read || self.unread.contains(place) {
-            return;
-        }
-        self.unread.push(place.clone());
-        let purpose = match reads {
-            Reads::Only(_) => "that `in` names",
-            Reads::Purpose(Purpose::Service) => "of the purpose \"service\"",
-            Reads::Purpose(Purpose::Strength) => "of the purpose \"strength\"",
-        };
-        let member = on.split('.').next().unwrap_or(on);
-        self.meaning.remarks.push(Remark {
-            about: format!("member.{member}"),
-            text: format!(
-                "no combination reads this limit on `{on}`: there is none {purpose}, so it is \
-                 not checked"
-            ),
-            place: Some(place.clone()),
-            caution: true,
-        });
-    }
 }
 
 /// The limits that a segment or a layer has of its own.
@@ -414,7 +307,7 @@ struct Own {
 
 impl Own {
     /// Of a segment, and of a layer of it.
-    fn of(segment: &crate::job::written::segment::Segment<'_>, layer: Option<usize>) -> Self {
+    fn of(segment: &Segment<'_>, layer: Option<usize>) -> Self {
         let own = Own::among(&segment.limits);
         let layer = layer.map_or(Own::default(), |layer| Own::of_layer(segment, layer));
         Own {
@@ -424,9 +317,9 @@ impl Own {
         }
     }
 
-    fn of_layer(segment: &crate::job::written::segment::Segment<'_>, layer: usize) -> Self {
+    fn of_layer(segment: &Segment<'_>, layer: usize) -> Self {
         match &segment.kind {
-            crate::job::written::segment::Kind::Solid { layers, .. } => layers
+            Kind::Solid { layers, .. } => layers
                 .get(layer)
                 .map_or(Own::default(), |layer| Own::among(&layer.limits)),
             _ => Own::default(),
@@ -445,19 +338,6 @@ impl Own {
 
 fn tables<'e, 't>(limits: &'e Entry<Vec<Limits<'t>>>) -> &'e [Limits<'t>] {
     limits.given().map_or(&[], |limits| &limits.value)
-}
-
-/// Adds the combinations that a name of `in` covers: one, all of a family, or all of a purpose.
-fn covered(name: &str, combinations: &Combinations, only: &mut Vec<usize>) {
-    let purpose = purpose_named(name);
-    for (family, of, range) in &combinations.families {
-        if &**family == name || purpose.is_some() && (of.is_none() || *of == purpose) {
-            only.extend(range.clone());
-        } else if name.starts_with(&**family) && name.contains('/') {
-            let of_family = range.clone();
-            only.extend(of_family.filter(|&index| &*combinations.all[index].name == name));
-        }
-    }
 }
 
 /// Which combinations read a limit that does not say: by its kind.

@@ -22,7 +22,7 @@ pub(super) struct Materials<'w> {
 enum State {
     Open,
     OnTheWay,
-    Done(Option<Material>),
+    Done(Option<Box<Material>>),
 }
 
 impl<'w> Materials<'w> {
@@ -48,7 +48,7 @@ impl<'w> Materials<'w> {
         let own = states
             .into_iter()
             .map(|state| match state {
-                State::Done(material) => material,
+                State::Done(material) => material.map(|material| *material),
                 State::Open | State::OnTheWay => None,
             })
             .collect();
@@ -122,7 +122,7 @@ fn follow<'w, 't>(
     while let Some(index) = next {
         match &states[index] {
             State::Done(material) => {
-                base = material.clone().map(Some).ok_or(());
+                base = material.as_deref().cloned().map(Some).ok_or(());
                 break;
             }
             State::OnTheWay => {
@@ -163,7 +163,7 @@ fn follow<'w, 't>(
             .ok()
             .and_then(|base| made(&job.materials[index], base, r));
         base = material.clone().map(Some).ok_or(());
-        states[index] = State::Done(material);
+        states[index] = State::Done(material.map(Box::new));
     }
 }
 
@@ -202,7 +202,7 @@ fn made<'t>(
     let Some(modulus) = modulus else {
         let message = format!("the material `{}` needs a `modulus`", own.id.value);
         let help = "add `modulus = \"205 GPa\"`, or `like` with the id of a material to start from";
-        r.problems.missing(&own.place, message, help);
+        r.problems.missing("modulus", &own.place, message, help);
         return None;
     };
     let text = |entry: &Entry<&str>, base: Option<&String>| match entry {

@@ -15,6 +15,7 @@ use crate::job::written::segment::Segment as WrittenSegment;
 use crate::job::written::support::Support as WrittenSupport;
 use crate::job::written::{Entry, Written};
 use crate::model::{Actions, Member, Name, Place, Segment, SegmentKind};
+use crate::quantity::from_si;
 use crate::quantity::{Angle, ThermodynamicTemperature};
 
 /// A member with the keys that it takes over by `like`.
@@ -150,7 +151,10 @@ fn meant<'w, 't>(whole: Whole<'w, 't>, meaning: &mut Meaning<'w, 't>) -> Meant<'
         let message = format!("the member `{}` needs a segment", whole.name.value);
         let help = "add `segment = [{ length = …, section = …, material = … }]`, or `like` with \
                     the name of another member";
-        meaning.r.problems.missing(whole.place, message, help);
+        meaning
+            .r
+            .problems
+            .missing("segment", whole.place, message, help);
     }
     let mut outline = Outline::of(written);
     names_differ(&whole, &outline, meaning);
@@ -173,6 +177,7 @@ fn meant<'w, 't>(whole: Whole<'w, 't>, meaning: &mut Meaning<'w, 't>) -> Meant<'
                 place: written[index].place.clone(),
                 from: outline.bound(index),
                 to: outline.bound(index + 1),
+                length: from_si(outline.length_of(index)),
                 kind: kind?,
             })
         })

@@ -6,6 +6,7 @@ mod actions;
 mod combinations;
 mod coverage;
 mod forces;
+mod heat;
 mod layers;
 mod limits;
 mod lookup;
@@ -13,6 +14,7 @@ mod materials;
 mod members;
 mod outline;
 mod points;
+mod reads;
 mod stress;
 mod supports;
 

@@ -115,6 +115,7 @@ impl<'w, 't> Outline<'w, 't> {
                 problems.unknown("member", place, message, help);
             }
             Fault::Outside(length) => {
+                let length = (length * 1e9).round() / 1e9;
                 let message =
                     format!("this station lies outside the member, which is {length} m long");
                 let help = "distances count from the member's start";

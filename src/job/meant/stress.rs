@@ -1,9 +1,10 @@
 //! The limit of a stress, where it is a share of a strength.
 
 use super::Meaning;
-use crate::catalogue::{Shape, Strength};
+use crate::catalogue::Shape;
 use crate::job::written::Written;
 use crate::model::{Layer, Remark, ShareFactor};
+use crate::quantity::Strength;
 use crate::quantity::{Length, Stress, StressLimit};
 
 /// A thickness may exceed that of a row by this share and still be in it: the rounding of units.
@@ -43,7 +44,7 @@ pub(super) fn allowed(
                     place,
                     caution: false,
                 };
-                if !meaning.remarks.contains(&remark) {
+                if meaning.remarks.last() != Some(&remark) {
                     meaning.remarks.push(remark);
                 }
                 Some(value)

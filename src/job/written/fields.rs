@@ -2,7 +2,7 @@
 
 use super::Reader;
 use super::later::later;
-use crate::job::nearest::remedy;
+use crate::job::nearest::{nearest, remedy};
 use crate::model::Place;
 use toml::Spanned;
 use toml::de::{DeArray, DeTable, DeValue};
@@ -154,9 +154,10 @@ impl<'t> Fields<'t> {
     }
 
     /// Reports that a key is missing.
-    pub(crate) fn lacks(&self, key: &str, example: &str, r: &mut Reader<'t>) {
+    pub(crate) fn lacks(&self, key: &'static str, example: &str, r: &mut Reader<'t>) {
         let article = article(self.known.table);
         r.problems.missing(
+            key,
             &self.place,
             format!("{article} {} needs `{key}`", self.known.table),
             format!("add `{key} = {example}`"),
@@ -183,23 +184,38 @@ impl<'t> Fields<'t> {
             if self.known.keys.contains(&name) {
                 continue;
             }
-            unknown_key(name, &key.span(), self.known, r);
+            unknown_key(name, &key.span(), &self.place, self.known, r);
         }
     }
 }
 
 /// Reports a key that a table does not have.
-pub(crate) fn unknown_key(name: &str, place: &Place, known: Keys, r: &mut Reader<'_>) {
+pub(crate) fn unknown_key(
+    name: &str,
+    place: &Place,
+    table: &Place,
+    known: Keys,
+    r: &mut Reader<'_>,
+) {
+    let keys = || known.keys.iter().copied();
     if let Some((message, help)) = later(known.table, name) {
+        let stem = name.strip_suffix("-at").unwrap_or(name);
+        r.problems.misspelt(table, keys().find(|key| *key == stem));
         r.problems.say(place, message, help);
         return;
     }
+    r.problems.misspelt(table, nearest(name, keys()));
     let article = article(known.table);
-    let help = remedy(
-        name,
-        known.keys.iter().copied(),
-        &format!("the keys of {article} {} are", known.table),
-    );
+    let help = match (known.table, name) {
+        ("section", "count" | "net" | "holes" | "material" | "length") => {
+            Some(format!("write `{name}` beside `section`, not in it"))
+        }
+        _ => remedy(
+            name,
+            keys(),
+            &format!("the keys of {article} {} are", known.table),
+        ),
+    };
     let message = format!("{article} {} has no key `{name}`", known.table);
     r.problems.say(place, message, help);
 }
@@ -268,7 +284,7 @@ pub(crate) fn kind_of(value: &DeValue<'_>) -> &'static str {
 
 /// `a` or `an`, as the word that follows asks for.
 pub(crate) fn article(word: &str) -> &'static str {
-    if word.starts_with(['a', 'e', 'i', 'o', 'u']) {
+    if word == "h" || word.starts_with(['a', 'e', 'i', 'o', 'u']) {
         "an"
     } else {
         "a"

@@ -192,8 +192,10 @@ impl<'t> Limits<'t> {
             && !(limits.area.is_written() || limits.since.is_written())
         {
             let message = "this limit holds nothing";
-            let help = format!("add one of `{}`", known.keys.join("`, `"));
-            r.problems.missing(&fields.place, message, help);
+            let is_held = |key: &&str| !COMMON.contains(key) && *key != "area";
+            let held: Vec<&str> = known.keys.iter().copied().filter(is_held).collect();
+            let help = format!("add one of `{}`", held.join("`, `"));
+            r.problems.missing("", &fields.place, message, help);
         }
         elsewhere(&fields, value, known, r);
         Some(limits)
@@ -219,7 +221,7 @@ fn elsewhere<'t>(fields: &Fields<'t>, value: &'t Value<'t>, known: Keys, r: &mut
             "reaction" => "a support",
             "gap" | "bears" => "a stop or a gap segment",
             _ => {
-                unknown_key(name, &key.span(), known, r);
+                unknown_key(name, &key.span(), &fields.place, known, r);
                 continue;
             }
         };
@@ -324,7 +326,7 @@ fn gap<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<(Option<Length>, 
     if min.is_absent() && max.is_absent() {
         let message = "this limit of a gap holds nothing";
         let help = "write `{ min = \"3 mm\" }`, `{ max = \"20 mm\" }` or both";
-        r.problems.missing(&place, message, help);
+        r.problems.missing("", &place, message, help);
     }
     if min.is_wrong() || max.is_wrong() {
         return None;
@@ -357,7 +359,7 @@ fn area<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<AreaUsed> {
         other => {
             let message =
                 format!("a stress stands on the `gross` or the `net` area, not `{other}`");
-            let help = remedy(other, ["gross", "net"], "write");
+            let help = remedy(other, ["gross", "net"], "write one of");
             r.problems.say(&value.span(), message, help);
             None
         }

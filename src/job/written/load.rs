@@ -126,7 +126,7 @@ fn action<'t>(fields: &mut Fields<'t>, r: &mut Reader<'t>) -> Option<Action<'t>>
         if !LATER.iter().any(|key| fields.has(key)) {
             let message = "a load needs an action";
             let help = format!("add one of `{}`", ACTIONS.join("`, `"));
-            r.problems.missing(&fields.place, message, help);
+            r.problems.missing("", &fields.place, message, help);
         }
         return None;
     };
@@ -168,15 +168,16 @@ fn places_fit(fields: &Fields<'_>, action: &str, r: &mut Reader<'_>) -> bool {
         r.problems.say(&place, message, help);
         fits = false;
     }
-    let mut lacks = |needs: &str, help: &str| {
+    let mut lacks = |key: &'static str, needs: &str, help: &str| {
         let message = format!("a `{action}` needs {needs}");
-        r.problems.missing(&fields.place, message, help);
+        r.problems.missing(key, &fields.place, message, help);
         fits = false;
     };
     match action {
-        "force" | "down" if !fields.has("at") => lacks("`at`", "add `at = \"end\"`"),
+        "force" | "down" if !fields.has("at") => lacks("at", "`at`", "add `at = \"end\"`"),
         "movement" if !fields.has("at") && !fields.has("support") => {
             lacks(
+                "",
                 "`support` or `at`",
                 "add `support` with the name of the support that moves",
             );

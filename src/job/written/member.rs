@@ -1,6 +1,6 @@
 //! `[member.NAME]` and `[default]`.
 
-use super::fields::{Entry, Fields, Keys, Value, Written, list};
+use super::fields::{Entry, Fields, Keys, Value, Written, kind_of, list};
 use super::limit::{Limits, Stands};
 use super::load::Load;
 use super::segment::Segment;
@@ -9,6 +9,11 @@ use super::{Reader, value};
 use crate::model::Place;
 use crate::quantity::{self, Angle, ThermodynamicTemperature};
 use std::f64::consts::FRAC_PI_2;
+use toml::de::DeValue;
+
+/// The forms of a direction, for messages.
+const DIRECTIONS: &str =
+    "write \"up\", \"down\", \"level\", or an angle above level such as \"30 deg\"";
 
 pub(crate) const KEYS: Keys = Keys {
     table: "member",
@@ -143,15 +148,21 @@ fn fixed<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<()> {
 
 /// The direction from start to end as an angle above level.
 fn runs<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Angle> {
-    match value::text(value, r)? {
+    let DeValue::String(text) = value.get_ref() else {
+        let message = format!(
+            "a direction is expected here, not {}",
+            kind_of(value.get_ref())
+        );
+        r.problems.say(&value.span(), message, DIRECTIONS);
+        return None;
+    };
+    match text.as_ref() {
         "up" => return Some(quantity::from_si(FRAC_PI_2)),
         "down" => return Some(quantity::from_si(-FRAC_PI_2)),
         "level" => return Some(quantity::from_si(0.0)),
         text if text.starts_with(char::is_alphabetic) => {
             let message = format!("no direction is called `{text}`");
-            let help =
-                "write \"up\", \"down\", \"level\", or an angle above level such as \"30 deg\"";
-            r.problems.say(&value.span(), message, help);
+            r.problems.say(&value.span(), message, DIRECTIONS);
             return None;
         }
         _ => {}
@@ -160,7 +171,7 @@ fn runs<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Angle> {
     // 90 deg comes out of its factor within a rounding of π/2; beyond it no angle above level lies.
     if angle.value.abs() > FRAC_PI_2 * (1.0 + 1e-12) {
         let message = "an angle above level lies between -90 deg and 90 deg";
-        r.problems.say(&value.span(), message, "");
+        r.problems.say(&value.span(), message, DIRECTIONS);
         return None;
     }
     Some(angle)

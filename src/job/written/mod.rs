@@ -129,30 +129,28 @@ impl<'t> Job<'t> {
             members: Vec::new(),
         };
         for (name, value) in tables(&mut fields, "case", r) {
-            if name::is_good(name.value, &name.place, r) {
-                job.cases.push(case::Case::read(name, value, r));
-            }
+            name::is_good(name.value, &name.place, r);
+            job.cases.push(case::Case::read(name, value, r));
         }
         for (name, value) in tables(&mut fields, "combination", r) {
-            if name::is_good(name.value, &name.place, r) {
-                let combination = combination::Combination::read(name, value, r);
-                job.combinations.push(combination);
-            }
+            name::is_good(name.value, &name.place, r);
+            let combination = combination::Combination::read(name, value, r);
+            job.combinations.push(combination);
         }
         for (id, value) in tables(&mut fields, "material", r) {
-            if name::is_good(id.value, &id.place, r) {
-                job.materials.extend(material::Material::read(id, value, r));
-            }
+            name::is_good(id.value, &id.place, r);
+            job.materials.extend(material::Material::read(id, value, r));
         }
         let members = tables(&mut fields, "member", r);
-        if members.is_empty() && !fields.has("member") {
+        let is_a_table = |member: &Value<'_>| member.get_ref().is_table();
+        if members.is_empty() && table.get("member").is_none_or(is_a_table) {
             let help = "add one: `[member.tie]`";
-            r.problems.missing(&(0..0), "a job needs a member", help);
+            r.problems
+                .missing("", &(0..0), "a job needs a member", help);
         }
         for (name, value) in members {
-            if name::is_for_a_part(name.value, &name.place, r) {
-                job.members.extend(member::Member::read(name, value, r));
-            }
+            name::is_for_a_part(name.value, &name.place, r);
+            job.members.extend(member::Member::read(name, value, r));
         }
         fields.finish(r);
         job

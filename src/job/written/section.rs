@@ -94,7 +94,8 @@ pub(super) fn section<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Se
     let Some((kind, section)) = chosen else {
         if !has_others {
             let help = "write its kind and dimensions, such as `{ round = \"30 mm\" }`";
-            r.problems.missing(&place, "a section needs its kind", help);
+            r.problems
+                .missing("", &place, "a section needs its kind", help);
         }
         return None;
     };
@@ -121,7 +122,7 @@ pub(super) fn dimension<'t, Q: Measure>(
         let along = value::along(value::quantity::<Q>)(value, r)?;
         let (start, end) = (along.start.si(), along.end.si());
         if start < 0.0 || end < 0.0 || start == 0.0 && end == 0.0 {
-            value::too_small(key, false, &value.span(), r);
+            value::too_small(key, false, Q::DIMENSION, &value.span(), r);
             return None;
         }
         Some(along)
@@ -219,7 +220,7 @@ fn thread<'t>(
             "minor" => Some(StiffnessArea::Minor),
             other => {
                 let message = format!("no area of a thread is called `{other}`");
-                let help = remedy(other, ["tensile", "nominal", "minor"], "there are");
+                let help = remedy(other, ["tensile", "nominal", "minor"], "write one of");
                 r.problems.say(&value.span(), message, help);
                 None
             }

@@ -8,7 +8,7 @@ use super::{Reader, value};
 use crate::catalogue::Section;
 use crate::catalogue::section::Along;
 use crate::model::Place;
-use crate::quantity::{Area, Expansion, ForcePerLength, Length, MassPerLength};
+use crate::quantity::{Area, Dimension, Expansion, ForcePerLength, Length, MassPerLength};
 use toml::de::DeValue;
 
 pub(crate) const KEYS: Keys = Keys {
@@ -251,7 +251,7 @@ fn alone(fields: &Fields<'_>, by: &str, allowed: &[&str], r: &mut Reader<'_>) {
 fn net<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Along<Area>> {
     let area = dimension::<Area>("net")(value, r)?;
     if area.start <= Area::default() || area.end <= Area::default() {
-        value::too_small("net", false, &value.span(), r);
+        value::too_small("net", false, Dimension::Area, &value.span(), r);
         return None;
     }
     Some(area)

@@ -1,8 +1,13 @@
 //! Stations: places along a member.
 
-use super::fields::Value;
+use super::fields::{Value, kind_of};
 use super::{Reader, value};
 use crate::quantity::{self, Length};
+use toml::de::DeValue;
+
+/// The forms of a station, for messages.
+const STATIONS: &str = "write \"start\", \"end\", \"<segment>.start\", \"<segment>.end\", or a \
+                        distance from the member's start such as \"1.25 m\"";
 
 /// A place along a member as written.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -19,7 +24,15 @@ pub(crate) enum Station<'t> {
 
 /// A station; a name that no segment has is found later.
 pub(crate) fn station<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Station<'t>> {
-    let text = value::text(value, r)?;
+    let DeValue::String(text) = value.get_ref() else {
+        let message = format!(
+            "a station is expected here, not {}",
+            kind_of(value.get_ref())
+        );
+        r.problems.say(&value.span(), message, STATIONS);
+        return None;
+    };
+    let text = text.as_ref();
     if let Some(station) = named(text) {
         return Some(station);
     }
@@ -31,9 +44,7 @@ pub(crate) fn station<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<St
             let help = match text.to_ascii_lowercase().as_str() {
                 "start" | "begin" | "beginning" | "star" => "write \"start\"".to_owned(),
                 "end" | "ende" | "en" => "write \"end\"".to_owned(),
-                _ => "write \"start\", \"end\", \"<segment>.start\", \"<segment>.end\", or a \
-                      distance from the member's start such as \"1.25 m\""
-                    .to_owned(),
+                _ => STATIONS.to_owned(),
             };
             r.problems.say(&value.span(), message, help);
             None

@@ -75,7 +75,7 @@ fn kind<'t>(fields: &mut Fields<'t>, r: &mut Reader<'t>) -> Option<SupportKind> 
     let Some(kind) = kinds.next() else {
         let message = "a support needs `fixed`, `spring` or `stop`";
         let help = "add `fixed = true`, `spring = \"35 kN/mm\"` or `stop = \"2.5 mm\"`";
-        r.problems.missing(&fields.place, message, help);
+        r.problems.missing("", &fields.place, message, help);
         return None;
     };
     if let Some(second) = kinds.next() {
@@ -123,7 +123,7 @@ fn side<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Side> {
             let message = format!(
                 "a stop blocks movement toward the \"end\" or the \"start\", not `{other}`"
             );
-            let help = remedy(other, ["end", "start"], "write");
+            let help = remedy(other, ["end", "start"], "write one of");
             r.problems.say(&value.span(), message, help);
             None
         }

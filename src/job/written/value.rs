@@ -89,15 +89,22 @@ fn bounded<'t, Q: Measure>(
     if least > 0.0 || zero && least >= 0.0 {
         return Some(r.noted(&literal, value));
     }
-    too_small(key, zero, &value.span(), r);
+    too_small(key, zero, Q::DIMENSION, &value.span(), r);
     None
 }
 
 /// Reports a value that must be larger.
-pub(crate) fn too_small(key: &str, zero: bool, place: &Place, r: &mut Reader<'_>) {
+pub(crate) fn too_small(
+    key: &str,
+    zero: bool,
+    dimension: Dimension,
+    place: &Place,
+    r: &mut Reader<'_>,
+) {
     let least = if zero { "0 or more" } else { "more than 0" };
-    r.problems
-        .say(place, format!("`{key}` must be {least}"), "");
+    let message = format!("`{key}` must be {least}");
+    let help = format!("write it as in \"{}\"", dimension.example());
+    r.problems.say(place, message, help);
 }
 
 /// A change of temperature, with its sign.

@@ -27,7 +27,7 @@ mod share;
 mod temperature;
 mod tolerance;
 
-pub use share::{MovementBound, StressLimit, read_movement_bound, read_stress_limit};
+pub use share::{MovementBound, Strength, StressLimit, read_movement_bound, read_stress_limit};
 
 use super::exact::Exact;
 use super::unit::Powers;

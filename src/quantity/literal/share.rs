@@ -3,9 +3,18 @@
 use super::cursor::Cursor;
 use super::number::{Number, number};
 use super::{Literal, LiteralError, read, refuse};
-use crate::catalogue::Strength;
 use crate::quantity::unit::{self, Pound};
 use crate::quantity::{Length, Stress};
+
+/// A strength of a material that a limit may be a share of.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+#[allow(missing_docs)]
+pub enum Strength {
+    Yield,
+    Ultimate,
+    Proof,
+    Crushing,
+}
 
 /// The limit of a stress as written.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -48,8 +57,7 @@ const MOVEMENT_BOUND: &str =
 /// Reads the limit of a stress: `"165 MPa"`, `"0.6 yield"`, `"yield / 1.67"`, `"2/3 yield"`.
 ///
 /// ```
-/// use lengthwise::catalogue::Strength;
-/// use lengthwise::quantity::{StressLimit, read_stress_limit};
+/// use lengthwise::quantity::{Strength, StressLimit, read_stress_limit};
 /// let share = StressLimit::Share { factor: 0.6, strength: Strength::Yield };
 /// assert_eq!(read_stress_limit("0.6 yield")?, share);
 /// # Ok::<(), lengthwise::quantity::LiteralError>(())

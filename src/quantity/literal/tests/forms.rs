@@ -5,7 +5,7 @@
 //! g = 9.80665 m/s², CGPM 1901; 0 degC = 273.15 K), so they are compared without a tolerance.
 
 use super::si;
-use crate::catalogue::Strength;
+use crate::quantity::Strength;
 use crate::quantity::{
     Angle, Area, Density, Expansion, Force, ForcePerLength, Length, Literal, Mass, MassPerLength,
     Measure, MovementBound, Ratio, Stress, StressLimit, TemperatureInterval,
