@@ -9,7 +9,7 @@ use crate::result::{
     Caution, CombinationResult, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Residuals,
     Verdict,
 };
-use crate::solve::{self, SolveError, Threshold};
+use crate::solve::{self, SolveError, Stiffness, Threshold};
 
 /// How many errors a result holds; the rest are counted.
 const ERRORS_KEPT: usize = 1000;
@@ -83,8 +83,16 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         ..Style::default()
     };
     let mut solved = Solved::default();
+    let plain = model
+        .combinations
+        .iter()
+        .find(|combination| combination.modulus.is_empty());
+    let stiffness = plain.map(|plain| {
+        let of = |member| Stiffness::of(model, member, plain);
+        model.members.iter().map(of).collect::<Vec<_>>()
+    });
     for index in 0..model.combinations.len() {
-        solved.combination(model, index, style);
+        solved.combination(model, index, stiffness.as_deref(), style);
     }
     let line_of = |place: &crate::model::Place| source.line_and_column(place).0;
     let lines: Vec<usize> = model
@@ -180,7 +188,14 @@ struct Solved {
 }
 
 impl Solved {
-    fn combination(&mut self, model: &Model, index: usize, style: Style) {
+    /// `stiffness` is that of the members in combinations without factors on moduli.
+    fn combination(
+        &mut self,
+        model: &Model,
+        index: usize,
+        stiffness: Option<&[Stiffness]>,
+        style: Style,
+    ) {
         let combination = &model.combinations[index];
         let (mut members, mut zeros) = (
             Vec::with_capacity(model.members.len()),
@@ -188,12 +203,18 @@ impl Solved {
         );
         let mut residuals = Residuals::default();
         let problems = self.problems.len();
-        for member in &model.members {
+        for (at, member) in model.members.iter().enumerate() {
             let place = &member.place;
-            match solve::member(model, member, combination) {
+            let solution = match stiffness {
+                Some(stiffness) if combination.modulus.is_empty() => {
+                    solve::member_of(model, member, combination, &stiffness[at])
+                }
+                _ => solve::member(model, member, combination),
+            };
+            match solution {
                 Ok(solution) => {
                     let own = proof::member(model, member, combination, &solution.member);
-                    if own.largest() > Residuals::LIMIT {
+                    if !own.prove() {
                         self.problems
                             .push(unproven(member.name.as_ref(), own, combination, place));
                     }

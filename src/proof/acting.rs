@@ -3,7 +3,8 @@
 use crate::catalogue::Shape;
 use crate::model::{Combination, Layer, Member, Model, Segment, SegmentKind};
 use crate::quantity::{
-    Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress, TemperatureInterval, from_si,
+    Area, Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress, TemperatureInterval,
+    from_si,
 };
 
 /// The factored actions, by station, piece, layer and support.
@@ -125,7 +126,7 @@ impl<'m> Acting<'m> {
                         _ if times == 0.0 => {}
                         (Some(mass), _) => add(mass.value, times),
                         (None, Some(density)) => {
-                            let area = layer.section.area_at(self.fraction(piece, s)) * layer.count;
+                            let area = area_at(layer, self.fraction(piece, s));
                             add((density * area).value, times);
                         }
                         (None, None) => {}
@@ -171,7 +172,7 @@ impl<'m> Acting<'m> {
                 let mut local = Local::default();
                 let (mut thermal, mut imposed) = (Force::default(), Force::default());
                 for (which, layer) in layers.iter().enumerate() {
-                    let share = self.modulus(layer) * layer.section.area_at(t) * layer.count;
+                    let share = self.modulus(layer) * area_at(layer, t);
                     let expansion = self.model.materials[layer.material]
                         .expansion
                         .unwrap_or_default();
@@ -210,5 +211,15 @@ impl<'m> Acting<'m> {
                 layer.area.coefficients().iter().all(|&area| area == first)
             }
         })
+    }
+}
+
+/// The area of all pieces of a layer at a fraction of its segment: of a taper from its dimensions
+/// there, and not from the curve that the solver integrates.
+fn area_at(layer: &Layer, fraction: f64) -> Area {
+    if layer.area.degree() == 0 {
+        layer.area.start()
+    } else {
+        layer.section.area_at(fraction) * layer.count
     }
 }

@@ -22,8 +22,8 @@ use crate::model::{Combination, Member, Model, Name, SegmentKind, Side, SupportK
 use crate::quantity::{Force, Length};
 use crate::result::MemberResult;
 use chain::{Chain, Hold, Link, NoSolution, Solved, States};
-use deformation::PieceDeformation;
-use loading::Loading;
+use deformation::{PieceDeformation, PieceStiffness};
+use loading::{Layers, Loading};
 
 /// A solved member, with what counts as zero in it.
 #[derive(Debug, Clone)]
@@ -83,6 +83,27 @@ pub enum SolveError {
     },
 }
 
+/// A member's stiffness: what does not change from one combination to the next while these have no
+/// factors on moduli.
+pub struct Stiffness {
+    layers: Layers,
+    /// One for each piece; `None` for a gap.
+    pieces: Vec<Option<PieceStiffness>>,
+}
+
+impl Stiffness {
+    /// The stiffness of a member in a combination.
+    pub fn of(model: &Model, member: &Member, combination: &Combination) -> Self {
+        let layers = Layers::of(model, member, combination);
+        let piece = |(index, piece): (usize, &crate::model::Piece)| match layers.of_piece(index) {
+            [] => None,
+            layers => Some(PieceStiffness::of(piece.length, layers)),
+        };
+        let pieces = member.pieces.iter().enumerate().map(piece).collect();
+        Stiffness { layers, pieces }
+    }
+}
+
 /// Solves one member under one combination.
 ///
 /// # Errors
@@ -93,21 +114,38 @@ pub fn member(
     member: &Member,
     combination: &Combination,
 ) -> Result<Solution, SolveError> {
-    let loading = Loading::of(model, member, combination);
-    let prepared = Prepared::of(member, &loading)?;
+    member_of(
+        model,
+        member,
+        combination,
+        &Stiffness::of(model, member, combination),
+    )
+}
+
+/// [`member`], with its stiffness at hand.
+///
+/// # Errors
+/// As [`member`].
+pub fn member_of(
+    model: &Model,
+    member: &Member,
+    combination: &Combination,
+    stiffness: &Stiffness,
+) -> Result<Solution, SolveError> {
+    let loading = Loading::of(model, member, combination, &stiffness.layers);
+    let prepared = Prepared::of(member, &loading, stiffness)?;
     let (solved, states) = prepared
         .chain
         .settle()
         .map_err(|reason| explain(member, reason))?;
     let mut result = recover::member(model, member, &loading, &prepared, &solved, &states)?;
     result.restraint = restraint::share(member, &loading, &prepared, &solved);
-    let free = solved.free.iter().map(|&(first, last)| {
-        (
-            member.stations[first].name.clone(),
-            member.stations[last].name.clone(),
-        )
-    });
-    let free = free.collect();
+    let name = |station: usize| member.stations[station].name.clone();
+    let free = solved
+        .free
+        .iter()
+        .map(|&(first, last)| (name(first), name(last)))
+        .collect();
     Ok(Solution {
         member: result,
         zero: prepared.chain.zero,
@@ -123,7 +161,7 @@ struct Prepared {
 }
 
 impl Prepared {
-    fn of(member: &Member, loading: &Loading) -> Result<Self, SolveError> {
+    fn of(member: &Member, loading: &Loading, stiffness: &Stiffness) -> Result<Self, SolveError> {
         let mut pieces = Vec::with_capacity(member.pieces.len());
         let mut links = Vec::with_capacity(member.pieces.len());
         for (index, piece) in member.pieces.iter().enumerate() {
@@ -132,11 +170,12 @@ impl Prepared {
                 member: member.name.clone(),
                 segment: segment.name.clone(),
             };
-            let (deformation, link) = match &segment.kind {
-                SegmentKind::Gap(gap) => (None, joint(gap)),
-                _ => {
-                    let layers = loading.layers_of(index);
-                    let piece = PieceDeformation::of(piece.length, layers, loading.lines[index])
+            let (deformation, link) = match (&segment.kind, &stiffness.pieces[index]) {
+                (SegmentKind::Gap(gap), _) => (None, joint(gap)),
+                (_, None) => return Err(pointed(quotient::Unbounded)),
+                (_, Some(made)) => {
+                    let layers = loading.layers.of_piece(index);
+                    let piece = PieceDeformation::of(made, layers, loading.lines[index])
                         .map_err(pointed)?;
                     let link = link(&piece).map_err(pointed)?;
                     (Some(piece), link)
@@ -174,16 +213,11 @@ fn joint(gap: &crate::model::Gap) -> Link {
     }
 }
 
-/// A piece as a link. A point at its end takes no force, so its flexibility does not matter.
+/// A piece as a link.
 fn link(piece: &PieceDeformation) -> Result<Link, quotient::Unbounded> {
-    let flexibility = if piece.runs_to_a_point() {
-        Default::default()
-    } else {
-        piece.flexibility()?
-    };
     let free = piece.stretch(&piece.force_of_line())? + piece.thermal + piece.imposed;
     Ok(Link {
-        flexibility,
+        flexibility: piece.flexibility,
         free,
         load: piece.load(),
         from_end: piece.from_end,

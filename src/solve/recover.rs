@@ -220,7 +220,7 @@ fn segment(
         for (which, layer) in segment.layers().iter().enumerate() {
             let stresses = Stresses {
                 deformation,
-                layers: loading.layers_of(piece),
+                layers: loading.layers.of_piece(piece),
                 which,
                 force: along,
             };

@@ -23,7 +23,7 @@ pub(super) fn share(
             .iter()
             .any(|strain| strain.value != 0.0)
     };
-    if !loading.layers.iter().any(|layer| acts(&layer.thermal)) {
+    if !loading.layers.all.iter().any(|layer| acts(&layer.thermal)) {
         return None;
     }
     let pieces = || prepared.pieces.iter().flatten();
