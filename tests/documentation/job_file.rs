@@ -282,3 +282,36 @@ fn the_units_on_the_page_are_read() {
         }
     }
 }
+
+#[test]
+fn the_literals_on_the_page_are_read() {
+    fn reads<Q: Measure>(text: &str) -> bool {
+        quantity::read::<Q>(text).is_ok()
+    }
+    let readers: [fn(&str) -> bool; 10] = [
+        reads::<Length>,
+        reads::<Force>,
+        reads::<ForcePerLength>,
+        reads::<Stress>,
+        reads::<Density>,
+        reads::<Expansion>,
+        |text| quantity::read_change(text).is_ok(),
+        |text| quantity::read_reading(text).is_ok(),
+        |text| quantity::read_stress_limit(text).is_ok(),
+        |text| quantity::read_movement_bound(text).is_ok(),
+    ];
+    let page = page();
+    let mut literals = 0;
+    for row in &page.tables("literals")[0].rows {
+        for written in code(row[1])
+            .into_iter()
+            .filter(|code| code.ends_with(['"', '\'']))
+        {
+            let line: toml::Table = format!("value = {written}").parse().unwrap();
+            let text = line["value"].as_str().unwrap();
+            assert!(readers.iter().any(|reads| reads(text)), "{written}");
+            literals += 1;
+        }
+    }
+    assert!(literals > 25);
+}
