@@ -1,6 +1,7 @@
 //! `docs/job-file.md`: every key, both ways, every snippet, every refusal.
 
 use super::page::{Page, code};
+use lengthwise::catalogue::section::Thread;
 use lengthwise::quantity::{
     self, Angle, Area, Density, Expansion, Force, ForcePerLength, Length, MassPerLength, Measure,
     Ratio, Stress,
@@ -314,4 +315,22 @@ fn the_literals_on_the_page_are_read() {
         }
     }
     assert!(literals > 25);
+}
+
+#[test]
+fn the_threads_on_the_page_are_those_of_their_series() {
+    let page = page();
+    let tables = page.tables("keys");
+    let section = tables.iter().find(|table| table.name == "section").unwrap();
+    let row = section
+        .rows
+        .iter()
+        .find(|row| row[0] == "`thread`")
+        .unwrap();
+    let threads = code(row[1]);
+    assert!(threads.len() > 3);
+    for thread in threads {
+        let thread = thread.trim_matches('"');
+        assert!(Thread::parse(thread).is_ok(), "{thread}");
+    }
 }
