@@ -1,8 +1,8 @@
 //! From a model and one combination to forces, displacements and stresses.
 //!
-//! A member is loaded ([`loading`]), its pieces are told how they deform ([`deformation`]: PL/AE and
-//! αΔTL), it is condensed to a [`chain`], the states of its stops and joints are found
-//! ([`contact`]), the chain is solved, and its segments are recovered ([`recover`]). No I/O, no
+//! A member is loaded (`loading`), its pieces are told how they deform (`deformation`: PL/AE and
+//! αΔTL), it is condensed to a `chain`, the states of its stops and joints are found
+//! (`contact`), the chain is solved, and its segments are recovered (`recover`). No I/O, no
 //! global state, one thread: the same input gives the same bits.
 
 mod chain;

@@ -1,6 +1,7 @@
 //! `docs/job-file.md`: every key, both ways, every snippet, every refusal.
 
 use super::page::{Page, code};
+use lengthwise::catalogue::section::Thread;
 use lengthwise::quantity::{
     self, Angle, Area, Density, Expansion, Force, ForcePerLength, Length, MassPerLength, Measure,
     Ratio, Stress,
@@ -280,5 +281,56 @@ fn the_units_on_the_page_are_read() {
         for unit in code(row[1]) {
             assert!(is_read(unit), "{unit} of {}", row[0]);
         }
+    }
+}
+
+#[test]
+fn the_literals_on_the_page_are_read() {
+    fn reads<Q: Measure>(text: &str) -> bool {
+        quantity::read::<Q>(text).is_ok()
+    }
+    let readers: [fn(&str) -> bool; 10] = [
+        reads::<Length>,
+        reads::<Force>,
+        reads::<ForcePerLength>,
+        reads::<Stress>,
+        reads::<Density>,
+        reads::<Expansion>,
+        |text| quantity::read_change(text).is_ok(),
+        |text| quantity::read_reading(text).is_ok(),
+        |text| quantity::read_stress_limit(text).is_ok(),
+        |text| quantity::read_movement_bound(text).is_ok(),
+    ];
+    let page = page();
+    let mut literals = 0;
+    for row in &page.tables("literals")[0].rows {
+        for written in code(row[1])
+            .into_iter()
+            .filter(|code| code.ends_with(['"', '\'']))
+        {
+            let line: toml::Table = format!("value = {written}").parse().unwrap();
+            let text = line["value"].as_str().unwrap();
+            assert!(readers.iter().any(|reads| reads(text)), "{written}");
+            literals += 1;
+        }
+    }
+    assert!(literals > 25);
+}
+
+#[test]
+fn the_threads_on_the_page_are_those_of_their_series() {
+    let page = page();
+    let tables = page.tables("keys");
+    let section = tables.iter().find(|table| table.name == "section").unwrap();
+    let row = section
+        .rows
+        .iter()
+        .find(|row| row[0] == "`thread`")
+        .unwrap();
+    let threads = code(row[1]);
+    assert!(threads.len() > 3);
+    for thread in threads {
+        let thread = thread.trim_matches('"');
+        assert!(Thread::parse(thread).is_ok(), "{thread}");
     }
 }
