@@ -24,6 +24,7 @@ use crate::result::MemberResult;
 use chain::{Chain, Hold, Link, NoSolution, Solved, States};
 use deformation::{PieceDeformation, PieceStiffness};
 use loading::{Layers, Loading};
+use recover::Recovered;
 
 /// A solved member, with what counts as zero in it.
 #[derive(Debug, Clone)]
@@ -132,13 +133,21 @@ pub fn member_of(
     combination: &Combination,
     stiffness: &Stiffness,
 ) -> Result<Solution, SolveError> {
-    let loading = Loading::of(model, member, combination, &stiffness.layers);
-    let prepared = Prepared::of(member, &loading, stiffness)?;
+    let mut loading = Loading::of(model, member, combination, &stiffness.layers);
+    let prepared = Prepared::of(member, &mut loading, stiffness)?;
     let (solved, states) = prepared
         .chain
         .settle()
         .map_err(|reason| explain(member, reason))?;
-    let mut result = recover::member(model, member, &loading, &prepared, &solved, &states)?;
+    let recovered = Recovered {
+        model,
+        member,
+        loading: &loading,
+        prepared: &prepared,
+        solved: &solved,
+        states: &states,
+    };
+    let mut result = recovered.result()?;
     result.restraint = restraint::share(member, &loading, &prepared, &solved);
     let name = |station: usize| member.stations[station].name.clone();
     let free = solved
@@ -161,7 +170,11 @@ struct Prepared {
 }
 
 impl Prepared {
-    fn of(member: &Member, loading: &Loading, stiffness: &Stiffness) -> Result<Self, SolveError> {
+    fn of(
+        member: &Member,
+        loading: &mut Loading,
+        stiffness: &Stiffness,
+    ) -> Result<Self, SolveError> {
         let mut pieces = Vec::with_capacity(member.pieces.len());
         let mut links = Vec::with_capacity(member.pieces.len());
         for (index, piece) in member.pieces.iter().enumerate() {
@@ -189,7 +202,7 @@ impl Prepared {
         Ok(Prepared {
             pieces,
             chain: Chain {
-                loads: loading.forces.clone(),
+                loads: std::mem::take(&mut loading.forces),
                 links,
                 holds,
                 zero,
@@ -227,9 +240,7 @@ fn link(piece: &PieceDeformation) -> Result<Link, quotient::Unbounded> {
 
 /// The supports in order of station, each with its face where movement and clearance put it.
 fn holds(member: &Member, loading: &Loading) -> Vec<Hold> {
-    let mut order: Vec<usize> = (0..member.supports.len()).collect();
-    order.sort_by_key(|&support| member.supports[support].station);
-    let hold = |&support: &usize| {
+    let hold = |support: usize| {
         let movement = loading.movements[support];
         let station = member.supports[support].station;
         match member.supports[support].kind {
@@ -266,7 +277,9 @@ fn holds(member: &Member, loading: &Loading) -> Vec<Hold> {
             }
         }
     };
-    order.iter().map(hold).collect()
+    let mut holds: Vec<Hold> = (0..member.supports.len()).map(hold).collect();
+    holds.sort_by_key(|hold| hold.station);
+    holds
 }
 
 /// What counts as zero, from the sizes of what comes together on the member.

@@ -151,7 +151,7 @@ impl<'a> Run<'a> {
             let name = called(source, self.form);
             let bytes = source.read(input);
             let mut job = match &bytes {
-                Ok(bytes) => guarded(&name, bytes, check),
+                Ok(bytes) => guarded(&name, bytes, check, self.form),
                 Err(reason) => fault(&name, reason),
             };
             if let Source::Found(_, folder) = source {
@@ -250,19 +250,24 @@ fn called(source: &Source, form: Form) -> String {
     }
 }
 
-/// Checks one job; a fault of the program ends that job alone.
-fn guarded(name: &str, bytes: &[u8], check: Checker) -> JobRun {
-    let run = catch_unwind(AssertUnwindSafe(|| check(name, bytes)));
-    let finite = run.map(|run| all_finite(&run.result).map(|()| run));
-    match finite {
-        Ok(Ok(run)) => run,
-        Ok(Err(number)) => fault(
-            name,
-            &format!("a fault of this program, please report it: {number}"),
-        ),
-        Err(_) => fault(
+/// Checks one job; a fault of the program ends that job alone. What machines read is looked through
+/// once more for numbers that are not finite, which JSON would write as null.
+fn guarded(name: &str, bytes: &[u8], check: Checker, form: Form) -> JobRun {
+    let Ok(run) = catch_unwind(AssertUnwindSafe(|| check(name, bytes))) else {
+        return fault(
             name,
             "a fault of this program stopped the check, please report it",
+        );
+    };
+    let finite = match form {
+        Form::Json | Form::Csv(_) => all_finite(&run.result),
+        Form::Whole | Form::Brief => Ok(()),
+    };
+    match finite {
+        Ok(()) => run,
+        Err(number) => fault(
+            name,
+            &format!("a fault of this program, please report it: {number}"),
         ),
     }
 }
