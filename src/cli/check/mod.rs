@@ -151,7 +151,7 @@ impl<'a> Run<'a> {
             let name = called(source, self.form);
             let bytes = source.read(input);
             let mut job = match &bytes {
-                Ok(bytes) => guarded(&name, bytes, check, self.form),
+                Ok(bytes) => guarded(&name, bytes, check),
                 Err(reason) => fault(&name, reason),
             };
             if let Source::Found(_, folder) = source {
@@ -250,20 +250,16 @@ fn called(source: &Source, form: Form) -> String {
     }
 }
 
-/// Checks one job; a fault of the program ends that job alone. What machines read is looked through
-/// once more for numbers that are not finite, which JSON would write as null.
-fn guarded(name: &str, bytes: &[u8], check: Checker, form: Form) -> JobRun {
+/// Checks one job; a fault of the program ends that job alone, and a number that is not finite
+/// leaves it in no format.
+fn guarded(name: &str, bytes: &[u8], check: Checker) -> JobRun {
     let Ok(run) = catch_unwind(AssertUnwindSafe(|| check(name, bytes))) else {
         return fault(
             name,
             "a fault of this program stopped the check, please report it",
         );
     };
-    let finite = match form {
-        Form::Json | Form::Csv(_) => all_finite(&run.result),
-        Form::Whole | Form::Brief => Ok(()),
-    };
-    match finite {
+    match all_finite(&run.result) {
         Ok(()) => run,
         Err(number) => fault(
             name,
