@@ -87,7 +87,13 @@ impl<'t> Laying<'_, '_, 't> {
     fn unknown(&mut self, name: &Written<&str>, combinations: &Combinations, nor: &str) {
         let message = format!("`{}` is no combination{nor}", name.value);
         let families = combinations.families.iter().map(|(name, ..)| &**name);
-        let help = remedy(name.value, families, "the combinations are");
+        let purposes: &[&str] = if nor.is_empty() {
+            &[]
+        } else {
+            &["service", "strength"]
+        };
+        let names = families.chain(purposes.iter().copied());
+        let help = remedy(name.value, names, "write one of");
         let problems = &mut self.meaning.r.problems;
         problems.unknown("combination", &name.place, message, help);
     }
