@@ -90,9 +90,9 @@ load = [{ weight = 1 }, { temperature-change = "+5 K" }]
 limit = { tension = "0.5 yield" }
 "#;
     let told = [
-        "7:16 `n` is no unit",
+        "7:17 `n` is no known unit",
         "10:20 weight needs the density of `resin`, which is not given",
-        "10:46 a temperature needs the expansion of `resin`, which is not given",
+        "10:48 a temperature needs the expansion of `resin`, which is not given",
         "11:21 this is a share of the yield strength of `resin`, which is not given",
     ];
     let said = said(job);

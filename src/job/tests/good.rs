@@ -2,9 +2,7 @@
 
 use super::tie;
 use crate::job::read;
-use crate::model::{
-    AreaUsed, LimitKind, Model, Purpose, Reads, SegmentKind, ShareFactor, Side, SupportKind, Target,
-};
+use crate::model::{AreaUsed, LimitKind, Model, Purpose, Reads, ShareFactor};
 use approx::assert_relative_eq;
 
 /// The model of a job that must be without faults.
