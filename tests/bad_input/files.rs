@@ -44,7 +44,7 @@ fn a_folder_without_rights_is_an_error() {
     fs::create_dir(&closed).unwrap();
     fs::write(closed.join("job.toml"), tie("")).unwrap();
     fs::write(folder.path().join("open.toml"), tie("")).unwrap();
-    fs::set_permissions(&closed, fs::Permissions::from_mode(0)).unwrap();
+    fs::set_permissions(&closed, fs::Permissions::from_mode(0o000)).unwrap();
     let rights_count = fs::read_dir(&closed).is_err();
     let output = program(&["check", text(folder.path()), "--brief"]);
     fs::set_permissions(&closed, fs::Permissions::from_mode(0o755)).unwrap();
