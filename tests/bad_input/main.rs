@@ -5,6 +5,7 @@
 
 mod files;
 mod hostile;
+mod make_ups;
 mod members;
 mod order;
 mod outputs;
