@@ -6,6 +6,7 @@
 #![allow(clippy::unwrap_used)] // of what the tests themselves read
 
 use lengthwise::fuzzing;
+use lengthwise::result::JobStatus;
 use std::collections::BTreeMap;
 use std::fs;
 use std::ops::Range;
@@ -281,13 +282,18 @@ fn damaged_jobs_end_in_errors_or_in_proven_results() {
     let jobs = jobs();
     assert!(jobs.len() >= 40, "only {} jobs to damage", jobs.len());
     let of_each: u64 = std::env::var("MUTANTS").map_or(OF_EACH, |many| many.parse().unwrap());
-    let mut tried = 0;
+    let (mut tried, mut looked_at, mut solved) = (0, 0, 0);
     let mut failures: BTreeMap<String, (usize, String)> = BTreeMap::new();
     for (number, (name, text)) in jobs.iter().enumerate() {
         let mut draw = Draw(number as u64);
         for _ in 0..of_each {
             let mutant = damaged(text, &mut draw);
             tried += 1;
+            if tried % 10 == 0 {
+                let result = lengthwise::check_bytes("job.toml", &mutant).result;
+                looked_at += 1;
+                solved += usize::from(result.status != JobStatus::Error);
+            }
             if let Some(why) = broken(&mutant) {
                 let shown = format!("{name}\n{}", String::from_utf8_lossy(&mutant));
                 failures.entry(why).or_insert((0, shown)).0 += 1;
@@ -295,6 +301,12 @@ fn damaged_jobs_end_in_errors_or_in_proven_results() {
         }
     }
     assert!(tried >= 20_000, "only {tried} were tried");
+    // Damage that no job survives would try the reader alone, and damage that all survive nothing.
+    let of_a_hundred = 100 * solved / looked_at;
+    assert!(
+        (10..=60).contains(&of_a_hundred),
+        "{of_a_hundred} % are solved"
+    );
     let told: Vec<String> = failures
         .into_iter()
         .take(12)

@@ -24,7 +24,7 @@ use toml::de::DeTable;
 /// A job file may have as many bytes; that of a member of 100,000 segments has a tenth.
 pub const MOST_BYTES: usize = 1 << 26;
 
-/// In a larger text only the first fault of the syntax is looked for: one that is nothing but
+/// In a larger text only one fault of the syntax is looked for: one that is nothing but
 /// faults would fill the memory with them.
 const LARGE: usize = 1 << 22;
 
@@ -37,7 +37,7 @@ pub fn read(text: &str) -> Result<Model, Vec<Problem>> {
         DeTable::parse_recoverable(text)
     } else {
         let table = DeTable::parse(text);
-        let table = table.map_err(|error| vec![syntax::first_of_large(&error, text)])?;
+        let table = table.map_err(|error| vec![syntax::of_large(&error, text)])?;
         (table, Vec::new())
     };
     let mut reader = written::Reader::new(text);
@@ -49,10 +49,7 @@ pub fn read(text: &str) -> Result<Model, Vec<Problem>> {
     {
         return Ok(model);
     }
-    let syntax = errors
-        .iter()
-        .map(|error| syntax::problem(error, text))
-        .collect();
+    let syntax = syntax::problems(&errors, text);
     Err(reader.problems.with_syntax(syntax, text))
 }
 

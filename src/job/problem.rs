@@ -36,8 +36,7 @@ const SENTENCE: usize = 800;
 
 /// A sentence that fits on a screen.
 fn legible(sentence: String) -> String {
-    let has_control = sentence.bytes().any(|byte| !(b' '..0x7f).contains(&byte))
-        && sentence.chars().any(char::is_control);
+    let has_control = sentence.chars().any(char::is_control);
     if sentence.len() <= NAME && !has_control {
         return sentence;
     }

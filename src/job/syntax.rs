@@ -2,6 +2,7 @@
 
 use super::Problem;
 use crate::model::Place;
+use std::cell::OnceCell;
 
 const QUOTES: &str = "write texts and values with a unit in quotes, such as \"2.85 m\"";
 const LINE: &str = "write `key = value`, one on each line";
@@ -9,10 +10,12 @@ const HEADER: &str = "write a header as `[member.H4]`, one of a list as `[[membe
 const CLOSE: &str = "close every [ with ] and every { with }, with commas between";
 const UNQUOTED: &str = "this stands without quotes";
 const BACKSLASH: &str = "a backslash begins a sign that is none";
-const ESCAPES: &str = "write two backslashes for one, or the text in single quotes: '3\\4'";
+const ESCAPES: &str = "write two backslashes for one, or put the text in single quotes";
 const NO_NUMBER: &str = "this is no number";
 const NUMBER: &str =
     "write a bare number as `1.5` or `1.5e3`; a value with a unit stands in quotes";
+const NO_DATE: &str = "this is no date";
+const DATE: &str = "write a date as 2026-11-30, and any other text in quotes";
 const DEEP: &str = "lists, tables or keys are nested too deep here";
 const SHALLOW: &str = "no value of a job is nested more than six deep";
 
@@ -36,11 +39,6 @@ const WORDS: &[(&str, &str, &str)] = &[
         "invalid literal string",
         "this text is not closed",
         "close the quotes on the same line",
-    ),
-    (
-        "invalid multi-line",
-        "this text of several lines is not closed",
-        "close it with the three quotes that it began with",
     ),
     ("missing escaped value", BACKSLASH, ESCAPES),
     ("too few unicode value digits", BACKSLASH, ESCAPES),
@@ -119,7 +117,8 @@ const WORDS: &[(&str, &str, &str)] = &[
         "a number has one `0x`, `0o` or `0b` too many",
         NUMBER,
     ),
-    ("invalid date-time", "this is no date and no number", QUOTES),
+    ("invalid date", NO_DATE, DATE),
+    ("invalid time", NO_DATE, DATE),
     ("invalid integer", NO_NUMBER, NUMBER),
     ("invalid float", NO_NUMBER, NUMBER),
     ("invalid mantissa", NO_NUMBER, NUMBER),
@@ -142,33 +141,123 @@ const WORDS: &[(&str, &str, &str)] = &[
     ("cannot recurse further", DEEP, SHALLOW),
 ];
 
-/// A fault of the syntax as a problem of the job.
-pub(super) fn problem(error: &toml::de::Error, text: &str) -> Problem {
-    let place = error.span().unwrap_or_else(|| dotted(text));
-    let start = floor(text, place.start);
-    let place = start..floor(text, place.end).max(start);
-    let what = error.message();
-    if what.starts_with("duplicate key") {
-        let key = text.get(place.clone()).unwrap_or_default();
-        let message = format!("`{key}` is written twice");
-        return Problem::new(&place, message, Some("keep one of them".to_owned()));
-    }
-    let (message, help) = match WORDS.iter().find(|(begins, ..)| what.starts_with(begins)) {
-        Some((_, message, help)) => ((*message).to_owned(), *help),
-        None => {
-            let help = if unquoted(text, start) { QUOTES } else { LINE };
-            (format!("the text is no TOML here: {what}"), help)
+/// The faults of the syntax as problems of the job. What follows in a line after its first fault is
+/// not told, since one missing mark makes several; but for values without quotes, of which each
+/// stands for itself.
+pub(super) fn problems(errors: &[toml::de::Error], text: &str) -> Vec<Problem> {
+    let deep = OnceCell::new();
+    let mut problems: Vec<Problem> = errors
+        .iter()
+        .map(|error| problem(error, text, &deep))
+        .collect();
+    problems.sort_by_key(|problem| (problem.place.start, problem.message.ends_with(TWICE)));
+    let mut kept: Vec<Problem> = Vec::with_capacity(problems.len());
+    let mut line_end = 0; // of the last that is kept
+    for next in problems {
+        match kept.last_mut() {
+            Some(last) if next.place.start <= line_end => {
+                if last.message.ends_with(TWICE) {
+                    *last = next; // a header at fault is no second one
+                } else if next.message == UNQUOTED {
+                    kept.push(next);
+                }
+            }
+            _ => {
+                let rest = &text[next.place.start..];
+                line_end = next.place.start + rest.find('\n').unwrap_or(rest.len());
+                kept.push(next);
+            }
         }
-    };
-    Problem::new(&place, message, Some(help.to_owned()))
+    }
+    kept
 }
 
+/// A fault of the syntax as a problem of the job.
+fn problem(error: &toml::de::Error, text: &str, deep: &OnceCell<Place>) -> Problem {
+    let deep = || deep.get_or_init(|| dotted(text)).clone();
+    let place = error.span().unwrap_or_else(deep);
+    let start = floor(text, place.start);
+    let place = start..floor(text, place.end).max(start);
+    let at_fault = text.get(place.clone()).unwrap_or_default();
+    let is_header = line_before(text, start).trim_start().starts_with('[');
+    let what = error.message();
+    if what.starts_with("duplicate key") {
+        let help = if is_header {
+            "keep one header; in a list each table has its own in double brackets, as in \
+             `[[member.H4.segment]]`"
+        } else {
+            "keep one of them"
+        };
+        return Problem::new(
+            &place,
+            format!("`{at_fault}`{TWICE}"),
+            Some(help.to_owned()),
+        );
+    }
+    if let Some(quotes) = what.starts_with("invalid multi-line").then(|| quotes(what)) {
+        // The parser notices at the end of the text, far from where it began.
+        let place = text[..start]
+            .rfind(quotes)
+            .map_or(place, |at| at..at + quotes.len());
+        let (message, help) = NOT_CLOSED;
+        return Problem::new(&place, message.to_owned(), Some(help.to_owned()));
+    }
+    let (message, help) = match at_fault.chars().next() {
+        None if what.starts_with("string values") => ("the value is missing here", LINE),
+        Some('“' | '”' | '„' | '‘' | '’' | '«' | '»') => (
+            "these are typographic quotes",
+            "write straight ones, such as \"2.85 m\"",
+        ),
+        Some(':') if what.starts_with("invalid unquoted key") => ("here is a colon", LINE),
+        Some(c) if c.is_control() && !c.is_whitespace() => {
+            ("here is a control character", "take it out")
+        }
+        _ if is_header && what.starts_with("unquoted keys") => ("a name is missing here", HEADER),
+        _ => match WORDS.iter().find(|(begins, ..)| what.starts_with(begins)) {
+            Some((_, message, help)) => (*message, *help),
+            None => {
+                let help = if unquoted(text, start) { QUOTES } else { LINE };
+                let message = format!("the text is no TOML here: {what}");
+                return Problem::new(&place, message, Some(help.to_owned()));
+            }
+        },
+    };
+    Problem::new(&place, message.to_owned(), Some(help.to_owned()))
+}
+
+/// How a message about a second one ends.
+const TWICE: &str = " is written twice";
+
+/// The message and the remedy for a text of several lines without an end.
+const NOT_CLOSED: (&str, &str) = (
+    "this text of several lines is not closed",
+    "close it with the three quotes that it began with",
+);
+
+/// The quotes that open a text of several lines of which the parser speaks.
+fn quotes(what: &str) -> &'static str {
+    if what.contains("literal") {
+        "'''"
+    } else {
+        "\"\"\""
+    }
+}
+
+/// The line in which a byte stands, up to it; of a long line only the last part.
+fn line_before(text: &str, at: usize) -> &str {
+    let from = floor(text, at.saturating_sub(LINE_LOOKED_AT));
+    text[from..at].rsplit('\n').next().unwrap_or("")
+}
+
+/// As many bytes of a line are looked at, so that many faults of a long line cost no more.
+const LINE_LOOKED_AT: usize = 200;
+
 /// The only fault that is told of the syntax of a large text.
-pub(super) fn first_of_large(error: &toml::de::Error, text: &str) -> Problem {
-    let mut problem = problem(error, text);
+pub(super) fn of_large(error: &toml::de::Error, text: &str) -> Problem {
+    let mut problem = problem(error, text, &OnceCell::new());
     let help = problem.help.unwrap_or_default();
     problem.help = Some(format!(
-        "{help}; in a file as large as this only the first fault of the syntax is told"
+        "{help}; in a file as large as this only one fault of the syntax is told"
     ));
     problem
 }
@@ -188,7 +277,7 @@ fn dotted(text: &str) -> Place {
 
 /// Whether the place lies in a value without quotes.
 fn unquoted(text: &str, at: usize) -> bool {
-    let line = text[..at].rsplit('\n').next().unwrap_or("");
+    let line = line_before(text, at);
     let here = text[at..].chars().next();
     line.split_once('=').is_some_and(|(_, value)| {
         let first = value.trim_start().chars().next().or(here);

@@ -231,7 +231,7 @@ fn multiply_out(
         match &written.value {
             Factors::One(factor) => factors[index] = *factor,
             Factors::Each(list) => {
-                let choice = |&factor: &f64| (factor, format!("/{}={factor}", case.value));
+                let choice = |&factor: &f64| (factor, chosen(case.value, factor));
                 lists.push((index, list.iter().map(choice).collect()));
             }
         }
@@ -239,7 +239,7 @@ fn multiply_out(
     let shown = shown(cases, |index| named[index]);
     let modulus = modulus(combination, meaning);
     let mut choice = vec![0; lists.len()];
-    let mut text = String::new();
+    let mut text = String::with_capacity(64);
     loop {
         let name = if lists.is_empty() {
             family.clone()
@@ -275,6 +275,16 @@ fn multiply_out(
         if !turned {
             return;
         }
+    }
+}
+
+/// What a choice adds to the name of its combination: `/live=0`, the factor as its shortest decimal.
+fn chosen(case: &str, factor: f64) -> String {
+    // Most factors are small whole numbers, which are written sooner as such.
+    if factor.fract() == 0.0 && factor.abs() < 1e6 {
+        format!("/{case}={}", factor as i64)
+    } else {
+        format!("/{case}={factor}")
     }
 }
 

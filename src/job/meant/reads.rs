@@ -87,7 +87,12 @@ impl<'t> Laying<'_, '_, 't> {
     fn unknown(&mut self, name: &Written<&str>, combinations: &Combinations, nor: &str) {
         let message = format!("`{}` is no combination{nor}", name.value);
         let families = combinations.families.iter().map(|(name, ..)| &**name);
-        let help = remedy(name.value, families, "the combinations are");
+        let is_none = |purpose: &&str| families.clone().all(|family| family != *purpose);
+        let purposes = ["service", "strength"].into_iter().filter(is_none);
+        // A purpose is taken by `in` alone.
+        let purposes = purposes.take(if nor.is_empty() { 0 } else { 2 });
+        let names = families.clone().chain(purposes);
+        let help = remedy(name.value, names, "write one of");
         let problems = &mut self.meaning.r.problems;
         problems.unknown("combination", &name.place, message, help);
     }

@@ -106,9 +106,7 @@ start = "fixed"
 segment = [{ name = "rod", length = "2 m", section = { round = "20 mm" }, material = "steel-s355" }]
 
 "#,
-        r#"1:1 a key is missing here | write `key = value`, one on each line
-1:3 here is one `=` too many | write `key = value`, one on each line
-1:5 something stands where the line should end | write `key = value`, one on each line"#,
+        "1:1 a key is missing here | write `key = value`, one on each line",
     ),
     (
         "no `=`",
@@ -128,7 +126,7 @@ start = "fixed"
 segment = [{ name = "rod", length = "2 m", section = { round = "20 mm" }, material = "steel-s355" }]
 [member.tie]
 "#,
-        "4:9 `tie` is written twice | keep one of them",
+        "4:9 `tie` is written twice | keep one header; in a list each table has its own in double brackets, as in `[[member.H4.segment]]`",
     ),
     (
         "a name in a line that cannot be read is not missed",

@@ -240,8 +240,8 @@ segment = [{ name = "rod", length = "2 m", section = { round = "20 mm" }, materi
 load = [{ at = "end", force = "1e400 kN" }, { weight = nan }, { weight = 1e400 }]
 "#,
         r#"4:32 `1e400` is too large or too small | a number is 0, or its size lies between 1e-150 and 1e150
-4:56 this is no finite number | write a number that a double can hold, such as `1.5`
-4:74 this is no finite number | write a number that a double can hold, such as `1.5`"#,
+4:56 this is no finite number | write a finite number, such as `1.5`
+4:74 this is no finite number | write a finite number, such as `1.5`"#,
     ),
     (
         "a gap takes nothing",

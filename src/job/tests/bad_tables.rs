@@ -128,7 +128,7 @@ segment = [{ name = "rod", length = "2 m", section = { round = "20 mm" }, materi
 limit = { elongation = "3 mm", since = "erection" }
 [combination.service]
 "#,
-        "4:40 `erection` is no combination | the combinations are `service`",
+        "4:40 `erection` is no combination | write one of `service`",
     ),
     (
         "since a list",
@@ -296,5 +296,16 @@ limit = { tension = "0.6 yield" }
 modulus = "200 GPa"
 yield-by-thickness = [["16 mm", "3 MPa"]]"#,
         "4:21 `a` gives no yield strength for a thickness of 20 mm, that of `rod`; its last row is 16 mm | write the limit as a stress, or a material of the job's own with a row for it",
+    ),
+    (
+        "names of combinations that addresses need",
+        r#"[member.tie]
+start = "fixed"
+segment = [{ name = "rod", length = "2 m", section = { round = "20 mm" }, material = "steel-s355" }]
+[combination.max]
+[combination."a:b"]
+"#,
+        r#"4:14 the name `max` is taken: addresses of results need it | write another name
+5:14 the name `a:b` holds `:`, which addresses need | write a name without `.` `:` `/` `=` and without blanks at its ends"#,
     ),
 ];

@@ -39,8 +39,66 @@ fn a_wrong_value_breeds_no_second_fault() {
         // A member that is like one that is not there may have all that it lacks.
         "[member.m]\nlike = \"n\"\nload = [{ at = \"rod.end\", force = \"1 kN\" }]\n".to_owned(),
     ];
+    let told = told
+        .into_iter()
+        .chain(LOST.iter().map(|job| (*job).to_owned()));
     for job in told {
         assert_eq!(said(&job).lines().count(), 1, "{job}\n{}", said(&job));
+    }
+}
+
+/// Without its tables nobody can say that a case, a combination, a material or a member is not
+/// there.
+const LOST: &[&str] = &[
+    r#"case = 3
+combination.service.factors = { dead = 1.0 }
+[member.m]
+segment = [{ length = "2 m", section = { round = "20 mm" }, material = "steel-s355" }]
+load = [{ at = "end", force = "1 kN", case = "dead" }]
+"#,
+    r#"combination = 3
+[member.m]
+segment = [{ length = "2 m", section = { round = "20 mm" }, material = "steel-s355" }]
+limit = { elongation = "1 mm", in = ["lifted"], since = "erected" }
+"#,
+    r#"material = 3
+[member.m]
+segment = [{ length = "2 m", section = { round = "20 mm" }, material = "rod" }]
+"#,
+    r#"material.rod = 3
+[member.m]
+segment = [{ length = "2 m", section = { round = "20 mm" }, material = "rod" }]
+"#,
+    r#"[member]
+a = 3
+b = { like = "a" }
+"#,
+];
+
+#[test]
+fn what_materials_lack_is_told_of_a_member_with_faults_too() {
+    let job = r#"[material.resin]
+modulus = "3 GPa"
+[member.m]
+start = "fixed"
+runs = "up"
+segment = [
+  { length = "2 n", section = { round = "20 mm" }, material = "steel-s355" },
+  { length = "1 m", section = { round = "20 mm" }, material = "resin" },
+]
+load = [{ weight = 1 }, { temperature-change = "+5 K" }]
+limit = { tension = "0.5 yield" }
+"#;
+    let told = [
+        "7:17 `n` is no known unit",
+        "10:20 weight needs the density of `resin`, which is not given",
+        "10:48 a temperature needs the expansion of `resin`, which is not given",
+        "11:21 this is a share of the yield strength of `resin`, which is not given",
+    ];
+    let said = said(job);
+    assert_eq!(said.lines().count(), told.len(), "{said}");
+    for (line, told) in said.lines().zip(told) {
+        assert!(line.starts_with(told), "{said}");
     }
 }
 

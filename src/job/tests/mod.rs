@@ -11,6 +11,7 @@ mod fuzz;
 mod good;
 mod good_combinations;
 mod good_limits;
+mod good_members;
 
 use super::{Source, read};
 use std::fmt::Write;

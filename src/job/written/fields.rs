@@ -90,10 +90,7 @@ impl<'t> Fields<'t> {
                         known.table,
                         kind_of(other)
                     ),
-                    format!(
-                        "write its keys in {{ }} or under a header; {}",
-                        listed(known.keys)
-                    ),
+                    format!("{}; {}", shape(known.table), listed(known.keys)),
                 );
                 None
             }
@@ -291,6 +288,18 @@ pub(crate) fn article(word: &str) -> &'static str {
         "an"
     } else {
         "a"
+    }
+}
+
+/// How a table is written.
+fn shape(table: &str) -> &'static str {
+    match table {
+        "section" => "write it as in `{ round = \"30 mm\" }`",
+        "limit of a displacement" => "write it as in `{ at = \"end\", limit = \"2 mm\" }`",
+        "limit of a gap" => "write it as in `{ min = \"3 mm\" }`",
+        "load" => "write it as in `{ at = \"end\", force = \"62 kN\" }`",
+        "support" => "write it as in `{ at = \"end\", spring = \"35 kN/mm\" }`",
+        _ => "write its keys in { } or under a header",
     }
 }
 

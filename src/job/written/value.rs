@@ -53,7 +53,7 @@ pub(crate) fn number<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<f64
     let finite = number.filter(|number: &f64| number.is_finite());
     if finite.is_none() {
         let message = "this is no finite number";
-        let help = "write a number that a double can hold, such as `1.5`";
+        let help = "write a finite number, such as `1.5`";
         r.problems.say(&value.span(), message, help);
     }
     finite
