@@ -54,9 +54,17 @@ pub(super) struct Piece {
 
 impl Piece {
     pub(super) fn of(acting: &Acting, piece: usize, (start, end): (Force, Force)) -> Self {
-        let line = acting
-            .has_line(piece)
-            .then(|| [0.0, 0.5, 1.0].map(|s| acting.line(piece, s)));
+        let uniform = acting.is_uniform(piece);
+        let line = acting.has_line(piece).then(|| {
+            let (start, end) = (acting.line(piece, 0.0), acting.line(piece, 1.0));
+            // Over a constant area the weight is constant, and the rest of a line load linear.
+            let middle = if uniform {
+                (start + end) * 0.5
+            } else {
+                acting.line(piece, 0.5)
+            };
+            [start, middle, end]
+        });
         let segment = &acting.member.segments[acting.member.pieces[piece].segment];
         Piece {
             length: acting.member.pieces[piece].length,
@@ -64,7 +72,7 @@ impl Piece {
             end,
             line,
             ends: [0.0, 1.0].map(|s| acting.local(piece, s)),
-            uniform: acting.is_uniform(piece),
+            uniform,
             joint: matches!(segment.kind, SegmentKind::Gap(_)),
         }
     }

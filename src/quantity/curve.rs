@@ -1,5 +1,6 @@
 //! A quantity that varies along a piece of a member as a polynomial.
 
+use std::cmp::Ordering;
 use std::ops::{Add, Mul, Sub};
 
 /// The highest degree that is needed: the derivative's numerator of a layer's stress on a net area,
@@ -217,8 +218,11 @@ where
 {
     type Output = Self;
     fn add(self, other: Self) -> Self {
-        let degree = self.degree.max(other.degree);
-        let (mut sum, other) = (self.raised(degree), other.raised(degree));
+        let (mut sum, other) = match self.degree.cmp(&other.degree) {
+            Ordering::Less => (self.raised(other.degree), other),
+            Ordering::Equal => (self, other),
+            Ordering::Greater => (self, other.raised(self.degree)),
+        };
         for (to, &more) in sum.coefficients.iter_mut().zip(other.coefficients()) {
             *to = *to + more;
         }

@@ -119,11 +119,14 @@ where
 
     /// The largest and the least value with their places; of equal ones the first.
     pub(super) fn extremes(&self) -> Extremes<<A as Div<B>>::Output> {
-        let value = |at: f64| Extreme {
-            value: self.at(at),
-            at,
+        let start = Extreme {
+            value: self.numerator.start() / self.denominator.start(),
+            at: 0.0,
         };
-        let (mut most, mut least) = (value(0.0), value(0.0));
+        if self.numerator.degree() == 0 && self.denominator.degree() == 0 {
+            return (start, start);
+        }
+        let (mut most, mut least) = (start, start);
         let mut look = |seen: Extreme<<A as Div<B>>::Output>| {
             if seen.value > most.value {
                 most = seen;
@@ -134,10 +137,14 @@ where
         };
         if !self.is_monotone() {
             for at in sign_changes(&self.slope()) {
-                look(value(at));
+                let value = self.at(at);
+                look(Extreme { value, at });
             }
         }
-        look(value(1.0));
+        look(Extreme {
+            value: self.numerator.end() / self.denominator.end(),
+            at: 1.0,
+        });
         (most, least)
     }
 
