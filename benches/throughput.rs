@@ -16,13 +16,15 @@ fn job(index: usize) -> String {
         r#"[job]
 title = "Pontoon hanger {index}"
 reference = "NH-{index:04} rev A"
+prepared-by = "K. Brandvik"
+note = "Pontoon 2, north row; loads from the deck sheet NL-07, temperatures from the harbour log"
 units = "SI"
 datum = "10 degC"
 
 [case.dead]
 weight = 1.0
 [case.live]
-[case.warm]
+[case.warm]                      # the log's warmest day over the datum
 temperature-change = "+28 K"
 
 [combination.service]
@@ -54,6 +56,7 @@ length = "160 mm"
 section = {{ thread = "M27" }}
 material = "steel-s355"
 
+# The deck's share of this hanger, from sheet NL-07.
 [[member.hanger.load]]
 name = "deck"
 at = "end"
@@ -65,9 +68,14 @@ at = "shank.end"
 stop = "9 mm"
 side = "end"
 
-[member.hanger.limit]
+# Held so that the deck's joint does not open beyond its seal.
+[[member.hanger.limit]]
 tension = "yield / 1.1"
+source = "design basis NB-01, section 4.2"
+
+[[member.hanger.limit]]
 elongation = "12 mm"
+source = "joint schedule NJ-03"
 displacement = [{{ at = "shank.end", limit = "8 mm" }}]
 "#
     )

@@ -9,7 +9,7 @@ use crate::result::{
     Caution, CombinationResult, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Residuals,
     Verdict,
 };
-use crate::solve::{self, SolveError, Threshold};
+use crate::solve::{self, SolveError, Stiffness, Threshold};
 
 /// How many errors a result holds; the rest are counted.
 const ERRORS_KEPT: usize = 1000;
@@ -83,15 +83,22 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         ..Style::default()
     };
     let mut solved = Solved::default();
+    let plain = model
+        .combinations
+        .iter()
+        .find(|combination| combination.modulus.is_empty());
+    let stiffness = plain.map(|plain| {
+        let of = |member| Stiffness::of(model, member, plain);
+        model.members.iter().map(of).collect::<Vec<_>>()
+    });
     for index in 0..model.combinations.len() {
-        solved.combination(model, index, style);
+        solved.combination(model, index, stiffness.as_deref(), style);
     }
     let line_of = |place: &crate::model::Place| source.line_and_column(place).0;
-    let lines: Vec<usize> = model
-        .limits
-        .iter()
-        .map(|limit| line_of(&limit.place))
-        .collect();
+    let lines = lines_of(
+        &source.text,
+        model.limits.iter().map(|limit| limit.place.start),
+    );
     let since = |index: usize| solved.indices.binary_search(&index).ok();
     let checks: Vec<_> = solved
         .indices
@@ -168,6 +175,25 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
     }
 }
 
+/// The line of each place. Places mostly come in the order of the text, so that it is counted
+/// through once.
+fn lines_of(text: &str, places: impl Iterator<Item = usize>) -> Vec<usize> {
+    let (mut at, mut line) = (0, 1);
+    let line_at = |place: usize| {
+        let place = place.min(text.len());
+        if place < at {
+            (at, line) = (0, 1);
+        }
+        line += text.as_bytes()[at..place]
+            .iter()
+            .filter(|&&byte| byte == b'\n')
+            .count();
+        at = place;
+        line
+    };
+    places.map(line_at).collect()
+}
+
 /// What the combinations came to; one that cannot be solved is a problem and has no result.
 #[derive(Default)]
 struct Solved {
@@ -180,7 +206,14 @@ struct Solved {
 }
 
 impl Solved {
-    fn combination(&mut self, model: &Model, index: usize, style: Style) {
+    /// `stiffness` is that of the members in combinations without factors on moduli.
+    fn combination(
+        &mut self,
+        model: &Model,
+        index: usize,
+        stiffness: Option<&[Stiffness]>,
+        style: Style,
+    ) {
         let combination = &model.combinations[index];
         let (mut members, mut zeros) = (
             Vec::with_capacity(model.members.len()),
@@ -188,12 +221,18 @@ impl Solved {
         );
         let mut residuals = Residuals::default();
         let problems = self.problems.len();
-        for member in &model.members {
+        for (at, member) in model.members.iter().enumerate() {
             let place = &member.place;
-            match solve::member(model, member, combination) {
+            let solution = match stiffness {
+                Some(stiffness) if combination.modulus.is_empty() => {
+                    solve::member_of(model, member, combination, &stiffness[at])
+                }
+                _ => solve::member(model, member, combination),
+            };
+            match solution {
                 Ok(solution) => {
                     let own = proof::member(model, member, combination, &solution.member);
-                    if own.largest() > Residuals::LIMIT {
+                    if !own.prove() {
                         self.problems
                             .push(unproven(member.name.as_ref(), own, combination, place));
                     }
@@ -301,11 +340,9 @@ fn unproven(
 /// Where tolerances are written, that the nominal values were used.
 fn tolerances(model: &Model) -> Option<Remark> {
     let first = model.tolerances.first()?;
-    let count = model.tolerances.len();
-    let text = if count == 1 {
-        "one value bears a tolerance: its nominal value was used".to_owned()
-    } else {
-        format!("{count} values bear tolerances: their nominal values were used")
+    let text = match model.tolerances.len() {
+        1 => "one value bears a tolerance: its nominal value was used".to_owned(),
+        count => format!("{count} values bear tolerances: their nominal values were used"),
     };
     Some(Remark {
         about: "job".into(),

@@ -10,37 +10,35 @@ pub fn envelope(combinations: &[CombinationResult]) -> Vec<Envelope> {
     };
     let mut rows = Vec::new();
     for (index, member) in first.members.iter().enumerate() {
-        let mut add = |quantity: String, unit: Unit, of: &dyn Fn(&MemberResult) -> Option<f64>| {
-            rows.push(range(
-                format!("{}.{quantity}", member.name),
-                unit,
-                index,
-                combinations,
-                of,
-            ));
-        };
-        add("elongation".into(), Unit::Metre, &|m| {
-            Some(m.elongation.value)
-        });
-        add("force_max".into(), Unit::Newton, &|m| {
-            Some(m.force_max.value)
-        });
-        add("force_min".into(), Unit::Newton, &|m| {
-            Some(m.force_min.value)
-        });
+        let mut add =
+            |part: &str, quantity: &str, unit: Unit, of: &dyn Fn(&MemberResult) -> Option<f64>| {
+                let mut address =
+                    String::with_capacity(member.name.len() + part.len() + quantity.len() + 2);
+                for word in [&member.name, part] {
+                    if !word.is_empty() {
+                        address.push_str(word);
+                        address.push('.');
+                    }
+                }
+                address.push_str(quantity);
+                rows.push(range(address, unit, index, combinations, of));
+            };
+        add("", "elongation", Unit::Metre, &|m| Some(m.elongation.value));
+        add("", "force_max", Unit::Newton, &|m| Some(m.force_max.value));
+        add("", "force_min", Unit::Newton, &|m| Some(m.force_min.value));
         for (at, segment) in member.segments.iter().enumerate() {
             if segment.gap.is_some() {
-                add(format!("{}.gap", segment.name), Unit::Metre, &|m| {
+                add(&segment.name, "gap", Unit::Metre, &|m| {
                     m.segments[at].gap.map(|gap| gap.value)
                 });
             }
         }
         for (at, support) in member.supports.iter().enumerate() {
-            add(format!("{}.reaction", support.name), Unit::Newton, &|m| {
+            add(&support.name, "reaction", Unit::Newton, &|m| {
                 m.supports[at].reaction.map(|reaction| reaction.value)
             });
             if support.gap.is_some() {
-                add(format!("{}.gap", support.name), Unit::Metre, &|m| {
+                add(&support.name, "gap", Unit::Metre, &|m| {
                     m.supports[at].gap.map(|gap| gap.value)
                 });
             }

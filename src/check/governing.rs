@@ -9,12 +9,22 @@ use std::collections::HashMap;
 pub fn governing(combinations: &[CombinationResult]) -> Vec<Governing> {
     let mut order: Vec<(&CheckResult, usize)> = Vec::new();
     let mut known: HashMap<(&str, &str), usize> = HashMap::new();
+    // The checks of a combination come in one order, so the next row is mostly the one looked for.
+    let mut next = 0;
     for (index, combination) in combinations.iter().enumerate() {
         for check in &combination.checks {
-            let at = *known.entry((&check.check, &check.on)).or_insert_with(|| {
-                order.push((check, index));
-                order.len() - 1
-            });
+            let expected = order
+                .get(next)
+                .is_some_and(|(row, _)| row.on == check.on && row.check == check.check);
+            let at = if expected {
+                next
+            } else {
+                *known.entry((&check.check, &check.on)).or_insert_with(|| {
+                    order.push((check, index));
+                    order.len() - 1
+                })
+            };
+            next = if at + 1 == order.len() { 0 } else { at + 1 };
             let (worst, _) = order[at];
             if rank(check.status, check.utilisation) > rank(worst.status, worst.utilisation) {
                 order[at] = (check, index);

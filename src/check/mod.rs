@@ -1,7 +1,7 @@
 //! Demands against limits: one file a kind of check.
 //!
 //! A check reads finished results and a [`Limit`]; it computes no mechanics. Utilisation is demand
-//! over limit by size. A new kind is one new file and one line in [`judge`].
+//! over limit by size. A new kind is one new file and one line in `judge`.
 
 mod bears;
 mod caution;

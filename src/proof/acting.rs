@@ -3,7 +3,8 @@
 use crate::catalogue::Shape;
 use crate::model::{Combination, Layer, Member, Model, Segment, SegmentKind};
 use crate::quantity::{
-    Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress, TemperatureInterval, from_si,
+    Area, Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress, TemperatureInterval,
+    from_si,
 };
 
 /// The factored actions, by station, piece, layer and support.
@@ -20,6 +21,8 @@ pub(super) struct Acting<'m> {
     layers: Vec<OnLayer>,
     first_layer: Vec<usize>,
     pub(super) movements: Vec<Length>,
+    /// Standard gravity along the axis, + toward the end.
+    gravity: f64,
 }
 
 #[derive(Clone, Copy, Default)]
@@ -31,7 +34,7 @@ struct OnLayer {
 }
 
 /// Everything of a piece at one place along it.
-#[derive(Clone, Copy, Default)]
+#[derive(Debug, Clone, Copy, Default)]
 pub(super) struct Local {
     /// EA.
     pub(super) rigidity: Force,
@@ -60,6 +63,7 @@ impl<'m> Acting<'m> {
             layers: vec![OnLayer::default(); count],
             first_layer,
             movements: vec![Length::default(); member.supports.len()],
+            gravity: -member.rise() * STANDARD_GRAVITY,
         };
         let factor = |case: usize| combination.factors[case];
         for force in &member.actions.forces {
@@ -110,7 +114,7 @@ impl<'m> Acting<'m> {
         let mut line = start * (1.0 - s) + end * s;
         let index = self.member.pieces[piece].segment;
         let segment = &self.member.segments[index];
-        let along = -self.member.rise() * STANDARD_GRAVITY;
+        let along = self.gravity;
         let mut add =
             |per_length: f64, times: f64| line += from_si::<_, _>(per_length * along * times);
         match &segment.kind {
@@ -122,7 +126,7 @@ impl<'m> Acting<'m> {
                         _ if times == 0.0 => {}
                         (Some(mass), _) => add(mass.value, times),
                         (None, Some(density)) => {
-                            let area = layer.section.area_at(self.fraction(piece, s)) * layer.count;
+                            let area = area_at(layer, self.fraction(piece, s));
                             add((density * area).value, times);
                         }
                         (None, None) => {}
@@ -168,7 +172,7 @@ impl<'m> Acting<'m> {
                 let mut local = Local::default();
                 let (mut thermal, mut imposed) = (Force::default(), Force::default());
                 for (which, layer) in layers.iter().enumerate() {
-                    let share = self.modulus(layer) * layer.section.area_at(t) * layer.count;
+                    let share = self.modulus(layer) * area_at(layer, t);
                     let expansion = self.model.materials[layer.material]
                         .expansion
                         .unwrap_or_default();
@@ -207,5 +211,15 @@ impl<'m> Acting<'m> {
                 layer.area.coefficients().iter().all(|&area| area == first)
             }
         })
+    }
+}
+
+/// The area of all pieces of a layer at a fraction of its segment: of a taper from its dimensions
+/// there, and not from the curve that the solver integrates.
+fn area_at(layer: &Layer, fraction: f64) -> Area {
+    if layer.area.degree() == 0 {
+        layer.area.start()
+    } else {
+        layer.section.area_at(fraction) * layer.count
     }
 }

@@ -14,7 +14,7 @@ use crate::model::{Combination, Member, Model, SegmentKind, Side, SupportKind};
 use crate::quantity::{Energy, Force, Length};
 use crate::result::{MemberResult, Residuals, SegmentResult, SupportResult};
 use acting::Acting;
-use piece::Integrated;
+use piece::{Integrated, Piece};
 use residual::{Residual, Size};
 
 /// The share of a member's largest force below which N somewhere may be nothing but the rounding of
@@ -33,17 +33,34 @@ pub fn member(
     combination: &Combination,
     result: &MemberResult,
 ) -> Residuals {
+    let acting = Acting::on(model, member, combination);
+    let doubt = result.force_max.abs().max(result.force_min.abs()) * DOUBT;
+    let along: Vec<Piece> = (0..member.pieces.len())
+        .map(|piece| {
+            let (start, end) = (
+                result.stations[piece].force_after,
+                result.stations[piece + 1].force_before,
+            );
+            Piece::of(
+                &acting,
+                piece,
+                (start.unwrap_or_default(), end.unwrap_or_default()),
+            )
+        })
+        .collect();
+    let pieces: Vec<Integrated> = along
+        .iter()
+        .enumerate()
+        .map(|(index, piece)| piece.integrate(&acting, index, doubt))
+        .collect();
     let mut proof = Proof {
-        acting: Acting::on(model, member, combination),
+        acting,
         result,
+        along,
         reactions: reactions_by_station(member, result),
         equilibrium: Residual::default(),
         compatibility: Residual::default(),
     };
-    let doubt = result.force_max.abs().max(result.force_min.abs()) * DOUBT;
-    let pieces: Vec<Integrated> = (0..member.pieces.len())
-        .map(|piece| proof.integrate(piece, doubt))
-        .collect();
     proof.stations();
     proof.whole(&pieces);
     proof.pieces(&pieces);
@@ -51,11 +68,12 @@ pub fn member(
     for (index, support) in result.supports.iter().enumerate() {
         proof.support(index, support);
     }
-    let energy = proof.energy(&pieces);
+    let mut energy = Residual::default();
+    energy.take(proof.energy(&pieces));
     Residuals {
         equilibrium: proof.equilibrium.largest(),
         compatibility: proof.compatibility.largest(),
-        energy,
+        energy: energy.largest(),
     }
 }
 
@@ -72,6 +90,7 @@ fn reactions_by_station(member: &Member, result: &MemberResult) -> Vec<(Force, F
 struct Proof<'p> {
     acting: Acting<'p>,
     result: &'p MemberResult,
+    along: Vec<Piece>,
     /// The reactions at each station, and the sum of their sizes.
     reactions: Vec<(Force, Force)>,
     equilibrium: Residual,
@@ -90,12 +109,6 @@ impl Proof<'_> {
 
     fn displacement(&self, station: usize) -> Length {
         self.result.stations[station].displacement
-    }
-
-    fn integrate(&self, piece: usize, doubt: Force) -> Integrated {
-        let (_, start) = self.forces_at(piece);
-        let (end, _) = self.forces_at(piece + 1);
-        Integrated::over(&self.acting, piece, (start, end), doubt)
     }
 
     /// N after − N before + load + reactions = 0 at every station.
@@ -251,8 +264,7 @@ impl Proof<'_> {
         let at = |piece: usize| {
             let length = self.acting.member.pieces[piece].length;
             let s = ((x - stations[piece].x) / length).value.clamp(0.0, 1.0);
-            let ((_, start), (end, _)) = (self.forces_at(piece), self.forces_at(piece + 1));
-            piece::force_at(&self.acting, piece, s, start, end)
+            self.along[piece].force_at(s)
         };
         let (here, before) = (at(after), at(after.saturating_sub(1)));
         if (before - named).abs() < (here - named).abs() {

@@ -73,6 +73,13 @@ impl Residuals {
         self.equilibrium.max(self.compatibility).max(self.energy)
     }
 
+    /// Whether a result with these closes; one that is not a number does not.
+    pub fn prove(&self) -> bool {
+        [self.equilibrium, self.compatibility, self.energy]
+            .iter()
+            .all(|&left| left <= Self::LIMIT)
+    }
+
     /// The larger of each.
     pub fn worse(self, other: Self) -> Self {
         Residuals {

@@ -4,11 +4,41 @@ use super::loading::LayerLoading;
 use super::quotient::{Quotient, Unbounded};
 use crate::quantity::{Curve, Flexibility, Force, ForcePerLength, Length, Ratio};
 
+/// A piece of a segment before anything acts on it.
+#[derive(Clone, Copy)]
+pub(super) struct PieceStiffness {
+    length: Length,
+    /// EA = Σ E A over the layers.
+    rigidity: Curve<Force>,
+    /// `∫ dx / EA`: L/AE, for any taper; 0 for a piece that runs to a point, which no force reaches.
+    flexibility: Flexibility,
+}
+
+impl PieceStiffness {
+    pub(super) fn of(length: Length, layers: &[LayerLoading]) -> Self {
+        let rigidity = layers[1..]
+            .iter()
+            .fold(layers[0].rigidity(), |sum, layer| sum + layer.rigidity());
+        let one: Curve<Ratio> = Curve::constant(crate::quantity::from_si(1.0));
+        let flexibility = Quotient::new(one, rigidity).map_or_else(
+            |_| Flexibility::default(),
+            |quotient| length * quotient.integral(),
+        );
+        PieceStiffness {
+            length,
+            rigidity,
+            flexibility,
+        }
+    }
+}
+
 /// A piece of a segment in one combination, ready to be stretched.
 pub(super) struct PieceDeformation {
     length: Length,
     /// EA = Σ E A over the layers.
     pub(super) rigidity: Curve<Force>,
+    /// As in [`PieceStiffness`].
+    pub(super) flexibility: Flexibility,
     /// Line load along it, + toward the end.
     line: Curve<ForcePerLength>,
     /// Whether N is carried from the end of the piece instead of its start: from where it is
@@ -37,13 +67,15 @@ impl Elongation {
 impl PieceDeformation {
     /// Fails where the piece runs to a point whose free strain is not bounded there.
     pub(super) fn of(
-        length: Length,
+        made: &PieceStiffness,
         layers: &[LayerLoading],
         line: Curve<ForcePerLength>,
     ) -> Result<Self, Unbounded> {
-        let rigidity = layers[1..]
-            .iter()
-            .fold(layers[0].rigidity(), |sum, layer| sum + layer.rigidity());
+        let PieceStiffness {
+            length,
+            rigidity,
+            flexibility,
+        } = *made;
         let mean = |strain: &dyn Fn(&LayerLoading) -> Curve<Ratio>| -> Result<Ratio, Unbounded> {
             match layers {
                 [only] => Ok(strain(only).mean()),
@@ -56,6 +88,7 @@ impl PieceDeformation {
             thermal: length * mean(&|layer| layer.thermal)?,
             imposed: length * mean(&|layer| Curve::constant(layer.imposed))?,
             rigidity,
+            flexibility,
             line,
         })
     }
@@ -68,12 +101,6 @@ impl PieceDeformation {
     /// All of the line load.
     pub(super) fn load(&self) -> Force {
         self.line.mean() * self.length
-    }
-
-    /// `∫ dx / EA`: L/AE, for any taper.
-    pub(super) fn flexibility(&self) -> Result<Flexibility, Unbounded> {
-        let one: Curve<Ratio> = Curve::constant(crate::quantity::from_si(1.0));
-        Ok(self.length * Quotient::new(one, self.rigidity)?.integral())
     }
 
     /// N along the piece between the forces at its ends, which differ by its line load:

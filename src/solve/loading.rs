@@ -7,6 +7,7 @@ use crate::quantity::{
     TemperatureInterval, from_si,
 };
 use std::ops::Range;
+use std::rc::Rc;
 
 /// All actions of a combination on one member, factored and added up.
 pub(super) struct Loading {
@@ -14,10 +15,8 @@ pub(super) struct Loading {
     pub(super) forces: Vec<Force>,
     /// Line load along each piece, self-weight included, + toward the end.
     pub(super) lines: Vec<Curve<ForcePerLength>>,
-    /// The layers of all pieces, piece by piece; a part known by its stiffness has one.
-    pub(super) layers: Vec<LayerLoading>,
-    /// Where each piece's layers stand in `layers`; empty for a gap.
-    pub(super) of_piece: Vec<Range<usize>>,
+    /// The layers of all pieces with their free strains.
+    pub(super) layers: Layers,
     /// Movement of what each support is fixed to.
     pub(super) movements: Vec<Length>,
 }
@@ -36,6 +35,57 @@ pub(super) struct LayerLoading {
     pub(super) imposed: Ratio,
 }
 
+/// The layers of all pieces, piece by piece; a part known by its stiffness has one, a gap none.
+#[derive(Clone)]
+pub(super) struct Layers {
+    pub(super) all: Vec<LayerLoading>,
+    of_piece: Rc<[Range<usize>]>,
+}
+
+impl Layers {
+    /// The layers with their stiffness in this combination, nothing acting on them.
+    pub(super) fn of(model: &Model, member: &Member, combination: &Combination) -> Self {
+        let no_strain = Curve::constant(Ratio::default());
+        let mut all = Vec::with_capacity(member.pieces.len());
+        let mut of_piece = Vec::with_capacity(member.pieces.len());
+        for piece in &member.pieces {
+            let first = all.len();
+            let segment = &member.segments[piece.segment];
+            match &segment.kind {
+                SegmentKind::Solid { layers, .. } => {
+                    all.extend(layers.iter().map(|layer| LayerLoading {
+                        modulus: model.materials[layer.material].modulus
+                            * combination.modulus_factor(layer.material),
+                        area: layer.area.part(piece.from, piece.to),
+                        thermal: no_strain,
+                        imposed: Ratio::default(),
+                    }));
+                }
+                SegmentKind::Stiffness(part) => {
+                    let unit: Stress = from_si(1.0);
+                    all.push(LayerLoading {
+                        modulus: unit,
+                        area: Curve::constant(part.stiffness * segment.length / unit),
+                        thermal: no_strain,
+                        imposed: Ratio::default(),
+                    });
+                }
+                SegmentKind::Gap(_) => {}
+            }
+            of_piece.push(first..all.len());
+        }
+        Layers {
+            all,
+            of_piece: of_piece.into(),
+        }
+    }
+
+    /// The layers of a piece; none for a gap.
+    pub(super) fn of_piece(&self, piece: usize) -> &[LayerLoading] {
+        &self.all[self.of_piece[piece].clone()]
+    }
+}
+
 impl LayerLoading {
     /// EA.
     pub(super) fn rigidity(&self) -> Curve<Force> {
@@ -49,22 +99,19 @@ impl LayerLoading {
 }
 
 impl Loading {
-    /// Adds up what `combination` puts on `member`; `with_temperature` off leaves the changes of
-    /// temperature out, for the share of full restraint.
+    /// Adds up what `combination` puts on `member`, whose unloaded layers are `made`.
     pub(super) fn of(
         model: &Model,
         member: &Member,
         combination: &Combination,
-        with_temperature: bool,
+        made: &Layers,
     ) -> Self {
         let mut loading = Loading {
             forces: vec![Force::default(); member.stations.len()],
             lines: vec![Curve::constant(ForcePerLength::default()); member.pieces.len()],
-            layers: Vec::with_capacity(member.pieces.len()),
-            of_piece: Vec::with_capacity(member.pieces.len()),
+            layers: made.clone(),
             movements: vec![Length::default(); member.supports.len()],
         };
-        loading.lay_out(model, member, combination);
         let factor = |case: usize| combination.factors[case];
         let actions = &member.actions;
         for action in &actions.forces {
@@ -80,54 +127,24 @@ impl Loading {
                 loading.add_weight(model, member, action.segment, action.layer, times);
             }
         }
-        if with_temperature {
-            for action in &actions.temperatures {
-                let change = Curve::linear(action.start, action.end) * factor(action.case);
+        for action in &actions.temperatures {
+            let times = factor(action.case);
+            if times != 0.0 {
+                let change = Curve::linear(action.start, action.end) * times;
                 loading.add_temperature(model, member, action.segment, action.layer, &change);
             }
         }
         for action in &actions.strains {
             let strain = action.strain * factor(action.case);
             for piece in pieces_of(member, action.segment) {
-                let at = loading.of_piece[piece].start + action.layer;
-                loading.layers[at].imposed += strain;
+                let at = loading.layers.of_piece[piece].start + action.layer;
+                loading.layers.all[at].imposed += strain;
             }
         }
         for action in &actions.movements {
             loading.movements[action.support] += action.movement * factor(action.case);
         }
         loading
-    }
-
-    /// Gives every piece its layers with their stiffness in this combination.
-    fn lay_out(&mut self, model: &Model, member: &Member, combination: &Combination) {
-        let no_strain = Curve::constant(Ratio::default());
-        for piece in &member.pieces {
-            let first = self.layers.len();
-            let segment = &member.segments[piece.segment];
-            match &segment.kind {
-                SegmentKind::Solid { layers, .. } => {
-                    self.layers.extend(layers.iter().map(|layer| LayerLoading {
-                        modulus: model.materials[layer.material].modulus
-                            * combination.modulus_factor(layer.material),
-                        area: layer.area.part(piece.from, piece.to),
-                        thermal: no_strain,
-                        imposed: Ratio::default(),
-                    }));
-                }
-                SegmentKind::Stiffness(part) => {
-                    let unit: Stress = from_si(1.0);
-                    self.layers.push(LayerLoading {
-                        modulus: unit,
-                        area: Curve::constant(part.stiffness * segment.length / unit),
-                        thermal: no_strain,
-                        imposed: Ratio::default(),
-                    });
-                }
-                SegmentKind::Gap(_) => {}
-            }
-            self.of_piece.push(first..self.layers.len());
-        }
     }
 
     /// ρ g A (or the mass per length times g) along the axis.
@@ -142,7 +159,7 @@ impl Loading {
         // On a member that rises, weight acts toward the start.
         let along = -member.rise() * STANDARD_GRAVITY * times;
         for piece in pieces_of(member, segment) {
-            let at = self.of_piece[piece].start + layer;
+            let at = self.layers.of_piece[piece].start + layer;
             let per_length = |mass: crate::quantity::MassPerLength| -> ForcePerLength {
                 from_si(mass.value * along)
             };
@@ -151,9 +168,9 @@ impl Loading {
                     let layer = &layers[layer];
                     match (layer.mass, model.materials[layer.material].density) {
                         (Some(mass), _) => Curve::constant(per_length(mass)),
-                        (None, Some(density)) => {
-                            self.layers[at].area.map(|area| per_length(density * area))
-                        }
+                        (None, Some(density)) => self.layers.all[at]
+                            .area
+                            .map(|area| per_length(density * area)),
                         (None, None) => continue,
                     }
                 }
@@ -182,18 +199,13 @@ impl Loading {
         };
         let Some(expansion) = expansion else { return };
         for piece in pieces_of(member, segment) {
-            let at = self.of_piece[piece].start + layer;
+            let at = self.layers.of_piece[piece].start + layer;
             let cut = &member.pieces[piece];
             let strain = change
                 .part(cut.from, cut.to)
                 .map(|change| expansion * change);
-            self.layers[at].thermal = self.layers[at].thermal + strain;
+            self.layers.all[at].thermal = self.layers.all[at].thermal + strain;
         }
-    }
-
-    /// The layers of a piece; none for a gap.
-    pub(super) fn layers_of(&self, piece: usize) -> &[LayerLoading] {
-        &self.layers[self.of_piece[piece].clone()]
     }
 }
 

@@ -1,8 +1,8 @@
 //! From a model and one combination to forces, displacements and stresses.
 //!
-//! A member is loaded ([`loading`]), its pieces are told how they deform ([`deformation`]: PL/AE and
-//! αΔTL), it is condensed to a [`chain`], the states of its stops and joints are found
-//! ([`contact`]), the chain is solved, and its segments are recovered ([`recover`]). No I/O, no
+//! A member is loaded (`loading`), its pieces are told how they deform (`deformation`: PL/AE and
+//! αΔTL), it is condensed to a `chain`, the states of its stops and joints are found
+//! (`contact`), the chain is solved, and its segments are recovered (`recover`). No I/O, no
 //! global state, one thread: the same input gives the same bits.
 
 mod chain;
@@ -22,8 +22,9 @@ use crate::model::{Combination, Member, Model, Name, SegmentKind, Side, SupportK
 use crate::quantity::{Force, Length};
 use crate::result::MemberResult;
 use chain::{Chain, Hold, Link, NoSolution, Solved, States};
-use deformation::PieceDeformation;
-use loading::Loading;
+use deformation::{PieceDeformation, PieceStiffness};
+use loading::{Layers, Loading};
+use recover::Recovered;
 
 /// A solved member, with what counts as zero in it.
 #[derive(Debug, Clone)]
@@ -83,6 +84,27 @@ pub enum SolveError {
     },
 }
 
+/// A member's stiffness: what does not change from one combination to the next while these have no
+/// factors on moduli.
+pub struct Stiffness {
+    layers: Layers,
+    /// One for each piece; `None` for a gap.
+    pieces: Vec<Option<PieceStiffness>>,
+}
+
+impl Stiffness {
+    /// The stiffness of a member in a combination.
+    pub fn of(model: &Model, member: &Member, combination: &Combination) -> Self {
+        let layers = Layers::of(model, member, combination);
+        let piece = |(index, piece): (usize, &crate::model::Piece)| match layers.of_piece(index) {
+            [] => None,
+            layers => Some(PieceStiffness::of(piece.length, layers)),
+        };
+        let pieces = member.pieces.iter().enumerate().map(piece).collect();
+        Stiffness { layers, pieces }
+    }
+}
+
 /// Solves one member under one combination.
 ///
 /// # Errors
@@ -93,21 +115,46 @@ pub fn member(
     member: &Member,
     combination: &Combination,
 ) -> Result<Solution, SolveError> {
-    let loading = Loading::of(model, member, combination, true);
-    let prepared = Prepared::of(member, &loading)?;
+    member_of(
+        model,
+        member,
+        combination,
+        &Stiffness::of(model, member, combination),
+    )
+}
+
+/// [`member`], with its stiffness at hand.
+///
+/// # Errors
+/// As [`member`].
+pub fn member_of(
+    model: &Model,
+    member: &Member,
+    combination: &Combination,
+    stiffness: &Stiffness,
+) -> Result<Solution, SolveError> {
+    let mut loading = Loading::of(model, member, combination, &stiffness.layers);
+    let prepared = Prepared::of(member, &mut loading, stiffness)?;
     let (solved, states) = prepared
         .chain
         .settle()
         .map_err(|reason| explain(member, reason))?;
-    let mut result = recover::member(model, member, &loading, &prepared, &solved, &states)?;
-    result.restraint = restraint::share(model, member, combination, &loading, &prepared, &solved);
-    let free = solved.free.iter().map(|&(first, last)| {
-        (
-            member.stations[first].name.clone(),
-            member.stations[last].name.clone(),
-        )
-    });
-    let free = free.collect();
+    let recovered = Recovered {
+        model,
+        member,
+        loading: &loading,
+        prepared: &prepared,
+        solved: &solved,
+        states: &states,
+    };
+    let mut result = recovered.result()?;
+    result.restraint = restraint::share(member, &loading, &prepared, &solved);
+    let name = |station: usize| member.stations[station].name.clone();
+    let free = solved
+        .free
+        .iter()
+        .map(|&(first, last)| (name(first), name(last)))
+        .collect();
     Ok(Solution {
         member: result,
         zero: prepared.chain.zero,
@@ -123,7 +170,11 @@ struct Prepared {
 }
 
 impl Prepared {
-    fn of(member: &Member, loading: &Loading) -> Result<Self, SolveError> {
+    fn of(
+        member: &Member,
+        loading: &mut Loading,
+        stiffness: &Stiffness,
+    ) -> Result<Self, SolveError> {
         let mut pieces = Vec::with_capacity(member.pieces.len());
         let mut links = Vec::with_capacity(member.pieces.len());
         for (index, piece) in member.pieces.iter().enumerate() {
@@ -132,11 +183,12 @@ impl Prepared {
                 member: member.name.clone(),
                 segment: segment.name.clone(),
             };
-            let (deformation, link) = match &segment.kind {
-                SegmentKind::Gap(gap) => (None, joint(gap)),
-                _ => {
-                    let layers = loading.layers_of(index);
-                    let piece = PieceDeformation::of(piece.length, layers, loading.lines[index])
+            let (deformation, link) = match (&segment.kind, &stiffness.pieces[index]) {
+                (SegmentKind::Gap(gap), _) => (None, joint(gap)),
+                (_, None) => return Err(pointed(quotient::Unbounded)),
+                (_, Some(made)) => {
+                    let layers = loading.layers.of_piece(index);
+                    let piece = PieceDeformation::of(made, layers, loading.lines[index])
                         .map_err(pointed)?;
                     let link = link(&piece).map_err(pointed)?;
                     (Some(piece), link)
@@ -150,7 +202,7 @@ impl Prepared {
         Ok(Prepared {
             pieces,
             chain: Chain {
-                loads: loading.forces.clone(),
+                loads: std::mem::take(&mut loading.forces),
                 links,
                 holds,
                 zero,
@@ -174,16 +226,11 @@ fn joint(gap: &crate::model::Gap) -> Link {
     }
 }
 
-/// A piece as a link. A point at its end takes no force, so its flexibility does not matter.
+/// A piece as a link.
 fn link(piece: &PieceDeformation) -> Result<Link, quotient::Unbounded> {
-    let flexibility = if piece.runs_to_a_point() {
-        Default::default()
-    } else {
-        piece.flexibility()?
-    };
     let free = piece.stretch(&piece.force_of_line())? + piece.thermal + piece.imposed;
     Ok(Link {
-        flexibility,
+        flexibility: piece.flexibility,
         free,
         load: piece.load(),
         from_end: piece.from_end,
@@ -193,9 +240,7 @@ fn link(piece: &PieceDeformation) -> Result<Link, quotient::Unbounded> {
 
 /// The supports in order of station, each with its face where movement and clearance put it.
 fn holds(member: &Member, loading: &Loading) -> Vec<Hold> {
-    let mut order: Vec<usize> = (0..member.supports.len()).collect();
-    order.sort_by_key(|&support| member.supports[support].station);
-    let hold = |&support: &usize| {
+    let hold = |support: usize| {
         let movement = loading.movements[support];
         let station = member.supports[support].station;
         match member.supports[support].kind {
@@ -232,7 +277,9 @@ fn holds(member: &Member, loading: &Loading) -> Vec<Hold> {
             }
         }
     };
-    order.iter().map(hold).collect()
+    let mut holds: Vec<Hold> = (0..member.supports.len()).map(hold).collect();
+    holds.sort_by_key(|hold| hold.station);
+    holds
 }
 
 /// What counts as zero, from the sizes of what comes together on the member.

@@ -76,6 +76,13 @@ where
 {
     /// Fails where the denominator vanishes at an end and the numerator does not as well.
     pub(super) fn new(numerator: Curve<A>, denominator: Curve<B>) -> Result<Self, Unbounded> {
+        let zero = B::default();
+        if denominator.start() != zero && denominator.end() != zero {
+            return Ok(Quotient {
+                numerator,
+                denominator,
+            });
+        }
         let (numerator, denominator) = cancelled(numerator, denominator)?;
         let (numerator, denominator) = cancelled(numerator.reversed(), denominator.reversed())?;
         Ok(Quotient {
@@ -112,28 +119,35 @@ where
 
     /// The largest and the least value with their places; of equal ones the first.
     pub(super) fn extremes(&self) -> Extremes<<A as Div<B>>::Output> {
-        let start = Extreme {
-            value: self.at(0.0),
-            at: 0.0,
+        let value = |at: f64| Extreme {
+            value: self.at(at),
+            at,
         };
-        let (mut most, mut least) = (start, start);
-        if self.numerator.degree() == 0 && self.denominator.degree() == 0 {
-            return (most, least);
-        }
-        let mut look = |at: f64| {
-            let value = self.at(at);
-            if value > most.value {
-                most = Extreme { value, at };
+        let (mut most, mut least) = (value(0.0), value(0.0));
+        let mut look = |seen: Extreme<<A as Div<B>>::Output>| {
+            if seen.value > most.value {
+                most = seen;
             }
-            if value < least.value {
-                least = Extreme { value, at };
+            if seen.value < least.value {
+                least = seen;
             }
         };
-        for at in sign_changes(&self.slope()) {
-            look(at);
+        if !self.is_monotone() {
+            for at in sign_changes(&self.slope()) {
+                look(value(at));
+            }
         }
-        look(1.0);
+        look(value(1.0));
         (most, least)
+    }
+
+    /// Whether the value surely rises or falls all along: over a constant, where the numerator's
+    /// coefficients do. The usual case, and quick to see.
+    fn is_monotone(&self) -> bool {
+        let rises = |pair: &[A]| pair[1] >= pair[0];
+        let falls = |pair: &[A]| pair[1] <= pair[0];
+        let mut pairs = self.numerator.coefficients().windows(2);
+        self.denominator.degree() == 0 && (pairs.clone().all(rises) || pairs.all(falls))
     }
 
     /// The numerator of the derivative, P′Q − PQ′, in numbers scaled to about 1.

@@ -118,7 +118,8 @@ impl<'a> Run<'a> {
         width: usize,
         colour: bool,
     ) -> Self {
-        let names = sources.jobs.iter().map(|source| source.name().width());
+        let jobs = sources.jobs.iter();
+        let names = jobs.map(|source| called(source, plan.form).width());
         Run {
             form: plan.form,
             one_job: sources.is_one_job(),
@@ -147,7 +148,7 @@ impl<'a> Run<'a> {
         // Whether a folder holds a job, once a file of it has been looked at.
         let mut holds_job: Vec<Option<bool>> = vec![None; sources.folders.len()];
         for source in &sources.jobs {
-            let name = source.name();
+            let name = called(source, self.form);
             let bytes = source.read(input);
             let mut job = match &bytes {
                 Ok(bytes) => guarded(&name, bytes, check),
@@ -234,28 +235,35 @@ impl<'a> Run<'a> {
                 json::write(self.out, &document)
             }
             Form::Whole | Form::Brief => {
-                if !self.one_job {
-                    writeln!(self.out)?;
-                }
+                writeln!(self.out)?;
                 text::write_counts(self.out, &self.counts, &self.layout)
             }
         }
     }
 }
 
-/// Checks one job; a fault of the program ends that job alone.
+/// What results and errors call a job: by its path, and for a reader standard input by these words.
+fn called(source: &Source, form: Form) -> String {
+    match (source, form) {
+        (Source::Standard, Form::Whole | Form::Brief) => "standard input".to_owned(),
+        _ => source.name(),
+    }
+}
+
+/// Checks one job; a fault of the program ends that job alone, and a number that is not finite
+/// leaves it in no format.
 fn guarded(name: &str, bytes: &[u8], check: Checker) -> JobRun {
-    let run = catch_unwind(AssertUnwindSafe(|| check(name, bytes)));
-    let finite = run.map(|run| all_finite(&run.result).map(|()| run));
-    match finite {
-        Ok(Ok(run)) => run,
-        Ok(Err(number)) => fault(
-            name,
-            &format!("a fault of this program, please report it: {number}"),
-        ),
-        Err(_) => fault(
+    let Ok(run) = catch_unwind(AssertUnwindSafe(|| check(name, bytes))) else {
+        return fault(
             name,
             "a fault of this program stopped the check, please report it",
+        );
+    };
+    match all_finite(&run.result) {
+        Ok(()) => run,
+        Err(number) => fault(
+            name,
+            &format!("a fault of this program, please report it: {number}"),
         ),
     }
 }

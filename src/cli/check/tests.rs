@@ -86,15 +86,15 @@ fn text(path: &Path) -> &str {
     path.to_str().unwrap()
 }
 
-/// The first words of the lines of a brief, and the files' own names.
+/// The verdicts of a brief, and the files' own names.
 fn lines(ended: &Ended) -> Vec<(String, String)> {
     let lines = ended.out.lines().take_while(|line| !line.is_empty());
     lines
         .map(|line| {
             let mut words = line.split_whitespace();
             let verdict = words.next().unwrap().to_owned();
-            let file = words.next().unwrap().rsplit('/').next().unwrap();
-            (verdict, file.to_owned())
+            let file = words.find(|word| word.ends_with(".toml")).unwrap();
+            (verdict, file.rsplit('/').next().unwrap().to_owned())
         })
         .collect()
 }

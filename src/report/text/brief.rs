@@ -4,6 +4,7 @@ use super::words::{paint, printable, status};
 use super::{Layout, checks, heading, ratio, write_foot};
 use crate::result::{JobResult, JobStatus};
 use std::io::{self, Write};
+use unicode_width::UnicodeWidthStr;
 
 /// Writes the head of a job's report and its governing checks.
 ///
@@ -12,11 +13,11 @@ use std::io::{self, Write};
 pub fn write_brief(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
     heading::write(out, job, layout)?;
     checks::write_governing(out, job, layout)?;
-    write_foot(out, layout)
+    write_foot(out, job, layout)
 }
 
-/// Writes one line: the verdict, the file padded to `file_width` columns, and the check that
-/// governs with its utilisation.
+/// Writes one line: the verdict, the utilisation of the check that governs, the file padded to
+/// `file_width` columns, and that check; for a job in error its first error.
 ///
 /// # Errors
 /// Those of `out`.
@@ -27,24 +28,32 @@ pub fn write_line(
     layout: &Layout,
 ) -> io::Result<()> {
     let word = status(job.status);
+    let governing = match job.status {
+        JobStatus::Error => None,
+        _ => job.governing_check(),
+    };
+    let used = governing.and_then(|check| check.utilisation);
+    let used = ratio(&layout.style(job), used);
     let file = printable(&job.file);
     write!(out, "{}", paint(word, layout.colour))?;
-    write!(out, "{:1$}", "", "unchecked".len() - word.len() + 2)?;
-    let style = layout.style(job);
-    match (job.status, job.governing_check()) {
-        (JobStatus::Error, _) => {
-            let first = job.errors.first();
-            let message = first.map_or("", |error| error.message.as_str());
-            writeln!(out, "{file:file_width$}  {}", printable(message))
+    write!(out, "{:1$}", "", "unchecked".len() - word.len())?;
+    write!(out, "  {used:>0$}  {file}", layout.digits + 2)?;
+    let remark = match (job.status, governing, job.errors.as_slice()) {
+        (JobStatus::Error, _, [error]) => error.message.clone(),
+        (JobStatus::Error, _, [error, ..]) => {
+            format!("{} errors, the first: {}", job.errors_total, error.message)
         }
-        (_, Some(check)) => writeln!(
-            out,
-            "{file:file_width$}  {} {} on {}, combination {}",
-            ratio(&style, check.utilisation),
-            check.check,
+        (_, Some(check), _) => format!(
+            "{} on {}, combination {}",
+            checks::governing_name(job, check),
             check.on,
-            check.combination,
+            check.combination
         ),
-        (_, None) => writeln!(out, "{file}"),
+        _ => String::new(),
+    };
+    if !remark.is_empty() {
+        let gap = file_width.saturating_sub(file.width()) + 2;
+        write!(out, "{:gap$}{}", "", printable(&remark))?;
     }
+    writeln!(out)
 }

@@ -1,11 +1,13 @@
 //! Tables of checks, and the warnings at the head of a report.
 
-use super::table::{Column, Table};
-use super::words::{paint, printable, title, verdict, wrapped};
-use super::{Layout, number, ratio, with_unit};
+use super::column::Column;
+use super::table::Table;
+use super::words::{counted, paint, title, verdict, wrapped};
+use super::{Layout, largest, number, ratio, settled, with_unit};
 use crate::model::{AreaUsed, Name};
 use crate::quantity::{Dimension, Length, Measure, Style, from_si};
 use crate::result::{CheckResult, Governing, JobResult, Unit, Verdict};
+use std::collections::BTreeMap;
 use std::io::{self, Write};
 
 /// A stress this close under its limit is named at the head of the report.
@@ -13,7 +15,7 @@ const NEAR: f64 = 0.95;
 
 /// What a row of either kind of check says.
 struct Row<'a> {
-    check: &'a Name,
+    check: String,
     on: &'a Name,
     combination: Option<&'a Name>,
     at: Option<f64>,
@@ -23,14 +25,13 @@ struct Row<'a> {
     unit: Unit,
     utilisation: Option<f64>,
     status: Verdict,
-    source: Option<&'a Name>,
     line: usize,
 }
 
-impl<'a> From<&'a CheckResult> for Row<'a> {
-    fn from(check: &'a CheckResult) -> Self {
+impl<'a> Row<'a> {
+    fn of(check: &'a CheckResult) -> Self {
         Row {
-            check: &check.check,
+            check: named(check),
             on: &check.on,
             combination: None,
             at: check.at,
@@ -40,16 +41,13 @@ impl<'a> From<&'a CheckResult> for Row<'a> {
             unit: check.unit,
             utilisation: check.utilisation,
             status: check.status,
-            source: check.source.as_ref(),
             line: check.line,
         }
     }
-}
 
-impl<'a> From<&'a Governing> for Row<'a> {
-    fn from(check: &'a Governing) -> Self {
+    fn governing(job: &JobResult, check: &'a Governing) -> Self {
         Row {
-            check: &check.check,
+            check: governing_name(job, check),
             on: &check.on,
             combination: Some(&check.combination),
             at: check.at,
@@ -59,9 +57,36 @@ impl<'a> From<&'a Governing> for Row<'a> {
             unit: check.unit,
             utilisation: check.utilisation,
             status: check.status,
-            source: check.source.as_ref(),
             line: check.line,
         }
+    }
+}
+
+/// The check's name, and of a gap which of its two limits it is held against: `gap min`.
+fn named(check: &CheckResult) -> String {
+    let is = |bound: &&str| {
+        let value = check.details.get(*bound).and_then(|value| value.as_f64());
+        value == Some(check.limit)
+    };
+    match ["min", "max"].iter().find(|bound| is(bound)) {
+        Some(bound) => format!("{} {bound}", check.check),
+        None => check.check.to_string(),
+    }
+}
+
+/// The same of a governing check.
+pub(super) fn governing_name(job: &JobResult, governing: &Governing) -> String {
+    let of = |check: &&CheckResult| {
+        check.check == governing.check
+            && check.on == governing.on
+            && check.line == governing.line
+            && check.limit == governing.limit
+    };
+    let mut combinations = job.combinations.iter();
+    let combination = combinations.find(|each| each.name == governing.combination);
+    match combination.and_then(|each| each.checks.iter().find(of)) {
+        Some(check) => named(check),
+        None => governing.check.to_string(),
     }
 }
 
@@ -117,7 +142,8 @@ fn is_warned_of(check: &Governing) -> bool {
         && (check.status == Verdict::Fail || check.utilisation.is_some_and(|used| used >= NEAR))
 }
 
-/// Writes the largest utilisation of every check over all combinations.
+/// Writes the largest utilisation of every check over all combinations, what is to be said of those
+/// that fail, and where the limits come from.
 pub(super) fn write_governing(
     out: &mut dyn Write,
     job: &JobResult,
@@ -128,8 +154,84 @@ pub(super) fn write_governing(
     }
     writeln!(out)?;
     title(out, "Governing checks", '-', layout.width)?;
-    let rows: Vec<Row> = job.governing.iter().map(Row::from).collect();
-    write_rows(out, &rows, &layout.style(job), layout)
+    let rows = job.governing.iter();
+    let rows: Vec<Row> = rows.map(|check| Row::governing(job, check)).collect();
+    write_rows(out, &rows, &layout.style(job), layout)?;
+    write_failing(out, job, layout)?;
+    write_sources(out, job, layout)
+}
+
+/// Writes for every check that fails anywhere the value, the limit, and the line that set it.
+fn write_failing(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
+    let failing = |check: &&Governing| check.status == Verdict::Fail;
+    let mut failing = job.governing.iter().filter(failing).peekable();
+    if failing.peek().is_none() {
+        return Ok(());
+    }
+    writeln!(out)?;
+    title(out, "Failing checks", '-', layout.width)?;
+    for check in failing {
+        let failed = |other: &&CheckResult| {
+            other.status == Verdict::Fail && other.check == check.check && other.on == check.on
+        };
+        let combinations = job.combinations.iter();
+        let times = combinations.filter(|each| each.checks.iter().any(|check| failed(&check)));
+        let text = failure(job, check, times.count(), layout);
+        wrapped(out, "- ", &text, layout.width)?;
+    }
+    Ok(())
+}
+
+/// `tension on stay.eye at 120 mm is 340 MPa in combination strength; the limit of 275 MPa is set in
+/// line 48: brief 3.1`.
+fn failure(job: &JobResult, check: &Governing, times: usize, layout: &Layout) -> String {
+    let style = &layout.style(job);
+    let mut text = format!("{} on {}", governing_name(job, check), check.on);
+    if let Some(at) = check.at {
+        text += &format!(" at {}", with_unit::<Length>(style, from_si(at)));
+    }
+    let shown = |si| match dimension(check.unit) {
+        Some(dimension) => style.quantity(dimension, si),
+        None => value(style, check.unit, si),
+    };
+    let limit = match check.unit {
+        Unit::None => String::new(),
+        _ => format!(" of {}", shown(check.limit)),
+    };
+    text += &format!(
+        " is {} in combination {}",
+        shown(check.demand),
+        check.combination
+    );
+    if times > 1 {
+        text += &format!(", the worst of {} that fail", counted(times, "combination"));
+    }
+    text += &format!("; the limit{limit} is set in line {}", check.line);
+    if let Some(source) = &check.source {
+        text += &format!(": {source}");
+    }
+    text
+}
+
+/// Writes what the job says of where its limits come from, by the lines that set them.
+fn write_sources(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
+    let checks = job.combinations.iter().flat_map(|each| &each.checks);
+    let sources: BTreeMap<usize, &Name> = checks
+        .filter_map(|check| Some((check.line, check.source.as_ref()?)))
+        .collect();
+    if sources.is_empty() {
+        return Ok(());
+    }
+    writeln!(out)?;
+    title(out, "Sources of the limits", '-', layout.width)?;
+    let lead = |line: usize| format!("line {line}");
+    let widest = sources.keys().map(|&line| lead(line).len()).max();
+    let widest = widest.unwrap_or(0);
+    for (line, source) in sources {
+        let lead = format!("{:widest$}  ", lead(line));
+        wrapped(out, &lead, source, layout.width)?;
+    }
+    Ok(())
 }
 
 /// Writes the checks of one combination.
@@ -140,7 +242,7 @@ pub(super) fn write_checks(
     layout: &Layout,
 ) -> io::Result<()> {
     title(out, "Checks", '-', layout.width)?;
-    let rows: Vec<Row> = checks.iter().map(Row::from).collect();
+    let rows: Vec<Row> = checks.iter().map(Row::of).collect();
     write_rows(out, &rows, style, layout)
 }
 
@@ -157,29 +259,33 @@ fn write_rows(out: &mut dyn Write, rows: &[Row], style: &Style, layout: &Layout)
         Some(AreaUsed::Net) => "net",
         None => "",
     });
-    let demand = rows.iter().map(|row| value(style, row.unit, row.demand));
+    // What rounding leaves is told by the largest value of the same unit in the table.
+    let scale = |unit: Unit| {
+        let same = rows.iter().filter(move |row| row.unit == unit);
+        largest(same.flat_map(|row| [row.demand, row.limit]))
+    };
+    let demand = rows
+        .iter()
+        .map(|row| value(style, row.unit, settled(row.demand, scale(row.unit))));
     let limit = rows.iter().map(|row| value(style, row.unit, row.limit));
     let used = rows.iter().map(|row| ratio(style, row.utilisation));
-    let source = rows
-        .iter()
-        .map(|row| printable(row.source.map_or("", |name| name)));
+    let at = Column::number("at", Some(style.unit(Length::DIMENSION)), at);
     Table::of([
-        Column::text("check", rows.iter().map(|row| row.check)),
-        Column::text("on", rows.iter().map(|row| row.on)),
+        Column::words("check", rows.iter().map(|row| &row.check)),
+        Column::names("on", rows.iter().map(|row| row.on)),
     ])
     .block([
-        Column::text("combination", combination),
         Column::number("demand", None, demand),
         Column::number("limit", None, limit),
-        Column::text("unit", rows.iter().map(|row| unit(style, row.unit))),
+        Column::words("unit", rows.iter().map(|row| unit(style, row.unit))),
         Column::number("utilisation", None, used),
         Column::verdicts(rows.iter().map(|row| verdict(row.status))),
     ])
     .block([
-        Column::number("at", Some(style.unit(Length::DIMENSION)), at),
-        Column::text("area", area),
+        Column::combinations(combination),
+        at.without_idle_decimals(),
+        Column::words("area", area),
         Column::number("line", None, rows.iter().map(|row| row.line.to_string())),
-        Column::text("source", source),
     ])
     .write(out, layout)
 }

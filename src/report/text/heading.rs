@@ -1,25 +1,27 @@
 //! The head of a report: what the job says of itself, its verdict, warnings, materials.
 
-use super::table::{Column, Table};
-use super::words::{counted, paint, printable, status, title, wrapped};
+use super::column::Column;
+use super::table::Table;
+use super::words::{counted, paint, status, title, wrapped};
 use super::{Layout, checks, number, optional, with_unit};
 use crate::quantity::{
     Density, Dimension, Expansion, Measure, Stress, ThermodynamicTemperature, from_si,
 };
 use crate::result::{CheckResult, JobResult, JobStatus, Verdict};
 use std::io::{self, Write};
+use unicode_width::UnicodeWidthStr;
 
 /// Columns of the labels at the head.
 pub(super) const LABEL: usize = 13;
 
 /// Writes title, verdict, what the job says of itself, and the warnings.
 pub(super) fn write(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
-    title(
-        out,
-        job.title.as_deref().unwrap_or("Untitled job"),
-        '=',
-        layout.width,
-    )?;
+    let untitled = match job.status {
+        JobStatus::Error if job.combinations.is_empty() => "Job without a result",
+        _ => "Untitled job",
+    };
+    let heading = job.title.as_deref().unwrap_or(untitled);
+    title(out, heading, '=', layout.width)?;
     let word = status(job.status);
     writeln!(
         out,
@@ -28,17 +30,13 @@ pub(super) fn write(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io
         paint(word, layout.colour),
         reason(job)
     )?;
-    let file = match job.file.as_str() {
-        "-" => "standard input",
-        path => path,
-    };
     let style = layout.style(job);
     let datum = job
         .datum
         .map(|kelvin| with_unit::<ThermodynamicTemperature>(&style, from_si(kelvin)));
     let labelled = [
         ("reference", job.reference.as_deref()),
-        ("file", Some(file)),
+        ("file", Some(job.file.as_str())),
         ("datum", datum.as_deref()),
         ("prepared by", job.prepared_by.as_deref()),
         ("checked by", job.checked_by.as_deref()),
@@ -107,26 +105,36 @@ pub(super) fn write_materials(
     let modulus = materials
         .iter()
         .map(|material| number::<Stress>(&style, from_si(material.modulus)));
-    let like = materials
-        .iter()
-        .map(|material| material.like.as_deref().unwrap_or(""));
-    let source = materials.iter().map(|material| {
-        let source = material.source.as_deref();
-        printable(source.unwrap_or(""))
-    });
-    Table::of([Column::text(
-        "material",
-        materials.iter().map(|material| &material.id),
-    )])
-    .block([
-        Column::number("modulus", unit(Stress::DIMENSION), modulus),
-        Column::number("expansion", unit(Expansion::DIMENSION), expansion),
-        Column::number("density", unit(Density::DIMENSION), density),
-        stress("yield", |material| material.yield_strength),
-        stress("ultimate", |material| material.ultimate),
-        stress("proof", |material| material.proof),
-        stress("crushing", |material| material.crushing),
-    ])
-    .block([Column::text("like", like), Column::text("source", source)])
-    .write(out, layout)
+    let names = materials.iter().map(|material| &material.id);
+    Table::of([Column::names("material", names)])
+        .block([
+            Column::number("modulus", unit(Stress::DIMENSION), modulus),
+            Column::number("expansion", unit(Expansion::DIMENSION), expansion),
+            Column::number("density", unit(Density::DIMENSION), density),
+            stress("yield", |material| material.yield_strength),
+            stress("ultimate", |material| material.ultimate),
+            stress("proof", |material| material.proof),
+            stress("crushing", |material| material.crushing),
+        ])
+        .write(out, layout)?;
+    writeln!(out)?;
+    write_material_sources(out, job, layout)
+}
+
+/// Writes where the values of each material come from.
+fn write_material_sources(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
+    title(out, "Sources of the materials", '-', layout.width)?;
+    let widths = job.materials.iter().map(|material| material.id.width());
+    let widest = widths.max().unwrap_or(0);
+    for material in &job.materials {
+        let source = material.source.as_deref().unwrap_or("no source given");
+        let text = match &material.like {
+            Some(like) => format!("{source} (like {like})"),
+            None => source.to_owned(),
+        };
+        let id = &material.id;
+        let lead = format!("{id}{:1$}", "", widest - id.width() + 2);
+        wrapped(out, &lead, &text, layout.width)?;
+    }
+    Ok(())
 }

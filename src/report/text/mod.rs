@@ -2,8 +2,10 @@
 
 mod brief;
 mod checks;
+mod column;
 mod heading;
 mod member;
+mod segments;
 mod table;
 mod words;
 
@@ -39,10 +41,16 @@ impl Layout {
     }
 }
 
-/// What plus and minus mean in every report.
+/// What plus and minus mean in every report, and what its words stand for.
 const SIGNS: &str = "N and stress are + in tension, elongation + for growth, displacements and \
      forces + toward the member's end. A reaction is the force that the support puts on the \
-     member. A gap is the clearance that remains: + open, 0 bearing.";
+     member. A gap is the clearance that remains: + open, 0 bearing. Places (at) are distances \
+     from the member's start. Utilisation is demand over limit by size; for a least gap (gap min) \
+     it is what has closed over what may close.";
+
+/// What rounding leaves of numbers that cancel: a number smaller than this share of the largest of
+/// its kind beside it is shown as 0. JSON and CSV keep it.
+const NOISE: f64 = 1e-12;
 
 /// What a result is for.
 const CLOSING: &str = "For use by a qualified engineer: the governing code and a licensed engineer \
@@ -60,7 +68,7 @@ pub fn write_job(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::R
         write_combination(out, job, combination, layout)?;
     }
     write_remarks(out, job, layout)?;
-    write_foot(out, layout)
+    write_foot(out, job, layout)
 }
 
 /// Writes how much was looked at and what came of it.
@@ -134,12 +142,16 @@ fn combination_title(combination: &CombinationResult) -> String {
 }
 
 fn residuals(residuals: &Residuals) -> String {
+    let shown = |residual: f64| match residual {
+        0.0 => "0".to_owned(),
+        _ => format!("{residual:.1e}"),
+    };
     format!(
-        "Relative residuals: equilibrium {:.1e}, compatibility {:.1e}, energy {:.1e} (more than \
+        "Proof, by relative residuals: equilibrium {}, compatibility {}, energy {} (more than \
          {:.0e} is an error).",
-        residuals.equilibrium,
-        residuals.compatibility,
-        residuals.energy,
+        shown(residuals.equilibrium),
+        shown(residuals.compatibility),
+        shown(residuals.energy),
         Residuals::LIMIT,
     )
 }
@@ -168,10 +180,25 @@ fn write_remarks(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::R
     Ok(())
 }
 
-fn write_foot(out: &mut dyn Write, layout: &Layout) -> io::Result<()> {
+/// What its numbers mean and what they are for; nothing below a report that has none.
+fn write_foot(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
+    if job.combinations.is_empty() {
+        return Ok(());
+    }
     writeln!(out)?;
     wrapped(out, "Signs: ", SIGNS, layout.width)?;
     wrapped(out, "", CLOSING, layout.width)
+}
+
+/// A number, or 0 where it is nothing but rounding beside the largest of its kind.
+fn settled(si: f64, largest: f64) -> f64 {
+    if si.abs() < NOISE * largest { 0.0 } else { si }
+}
+
+/// The largest size among numbers; 0 where there is none.
+fn largest(numbers: impl IntoIterator<Item = f64>) -> f64 {
+    let sizes = numbers.into_iter().map(f64::abs);
+    sizes.fold(0.0, f64::max)
 }
 
 /// The number of a quantity in the report's unit.

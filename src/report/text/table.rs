@@ -1,113 +1,21 @@
-//! Tables of the text report: numbers right-aligned and never broken, two blanks between columns,
-//! one rule under the headings.
+//! Tables of the text report: two blanks between columns, one rule under the headings, numbers
+//! with their points below one another and never broken.
 //!
-//! A table that is wider than the page first breaks its texts, and then goes on in a second table
-//! below, under the same identity columns.
+//! A table that is wider than the page goes on in a second one below, under the same identity
+//! columns. Only what is still too wide then has its names broken, where names may be; and if not
+//! even that helps, the line is longer than the page.
 
 use super::Layout;
-use super::words::{broken, paint, printable, split_at_column};
+use super::column::{Column, Kind};
+use super::words::{paint, split_at_column};
 use comfy_table::{
     Cell, CellAlignment, ColumnConstraint, LineStyle, Table as Grid, TableStyle, Width,
 };
 use std::io::{self, Write};
-use unicode_width::UnicodeWidthStr;
 
 /// Blanks between two columns.
 const BETWEEN: usize = 2;
-/// A column of texts is not made narrower than this.
-const NARROWEST_TEXT: usize = 10;
 const STYLE: TableStyle = TableStyle::new().header_separator(LineStyle::none().fill('-'));
-
-#[derive(Debug, Clone, Copy, PartialEq, Eq)]
-enum Kind {
-    Text,
-    Number,
-    Verdict,
-}
-
-/// One column: its heading, its unit, a cell for each row.
-#[derive(Debug, Clone)]
-pub(super) struct Column {
-    heading: String,
-    cells: Vec<String>,
-    kind: Kind,
-}
-
-impl Column {
-    /// Words, which may be broken over several lines.
-    pub(super) fn text<T: AsRef<str>>(heading: &str, cells: impl IntoIterator<Item = T>) -> Self {
-        let cells = cells
-            .into_iter()
-            .map(|cell| printable(cell.as_ref()).into_owned());
-        Column {
-            heading: heading.to_owned(),
-            cells: cells.collect(),
-            kind: Kind::Text,
-        }
-    }
-
-    /// Numbers of one unit (none for a ratio), which are never broken.
-    pub(super) fn number(
-        heading: &str,
-        unit: Option<&str>,
-        cells: impl IntoIterator<Item = String>,
-    ) -> Self {
-        let heading = match unit {
-            Some(unit) => format!("{heading}\n[{unit}]"),
-            None => heading.to_owned(),
-        };
-        Column {
-            heading,
-            cells: cells.into_iter().collect(),
-            kind: Kind::Number,
-        }
-    }
-
-    /// Verdict words, which are coloured where the page is.
-    pub(super) fn verdicts(cells: impl IntoIterator<Item = &'static str>) -> Self {
-        Column {
-            heading: "verdict".to_owned(),
-            cells: cells.into_iter().map(str::to_owned).collect(),
-            kind: Kind::Verdict,
-        }
-    }
-
-    /// The same numbers under another heading.
-    pub(super) fn headed(mut self, heading: &str, unit: &str) -> Self {
-        self.heading = format!("{heading}\n[{unit}]");
-        self
-    }
-
-    /// Whether no row has anything to say in it.
-    pub(super) fn is_empty(&self) -> bool {
-        self.cells.iter().all(String::is_empty)
-    }
-
-    /// Whether it shows the same as another, row by row.
-    pub(super) fn shows_as(&self, other: &Column) -> bool {
-        self.cells == other.cells
-    }
-
-    fn heading_width(&self) -> usize {
-        let lines = self.heading.lines();
-        lines.map(UnicodeWidthStr::width).max().unwrap_or(0)
-    }
-
-    fn natural_width(&self) -> usize {
-        let cells = self.cells.iter().map(|cell| cell.width());
-        cells.max().unwrap_or(0).max(self.heading_width())
-    }
-
-    fn least_width(&self) -> usize {
-        match self.kind {
-            Kind::Text => self
-                .natural_width()
-                .min(NARROWEST_TEXT)
-                .max(self.heading_width()),
-            Kind::Number | Kind::Verdict => self.natural_width(),
-        }
-    }
-}
 
 /// A table: what names its rows, and blocks of columns that belong together.
 #[derive(Debug, Default)]
@@ -154,7 +62,7 @@ impl Table {
         let mut part = identity.clone();
         for block in self.blocks.iter().filter(|block| !block.is_empty()) {
             let together: Vec<&Column> = part.iter().copied().chain(block).collect();
-            if least_total(&together) <= page {
+            if total(&together, Column::whole_width) <= page {
                 part = together;
                 continue;
             }
@@ -163,7 +71,7 @@ impl Table {
             }
             for column in block {
                 part.push(column);
-                if least_total(&part) > page && part.len() > identity.len() + 1 {
+                if part.len() > identity.len() + 1 && total(&part, Column::fair_width) > page {
                     part.pop();
                     parts.push(std::mem::replace(&mut part, identity.clone()));
                     part.push(column);
@@ -175,30 +83,31 @@ impl Table {
     }
 }
 
-fn least_total(columns: &[&Column]) -> usize {
-    total(columns.iter().map(|column| column.least_width()))
+/// The width of columns side by side.
+fn total(columns: &[&Column], width: fn(&Column) -> usize) -> usize {
+    sum(columns.iter().map(|column| width(column)))
 }
 
-fn total(widths: impl ExactSizeIterator<Item = usize>) -> usize {
+fn sum(widths: impl ExactSizeIterator<Item = usize>) -> usize {
     let gaps = BETWEEN * widths.len().saturating_sub(1);
     widths.sum::<usize>() + gaps
 }
 
-/// Widths with which the columns fit the page: the widest texts give way first.
+/// Widths with which the columns fit the page: the widest names give way first, to a few lines
+/// each, and to more only where that is not enough.
 fn widths(columns: &[&Column], page: usize) -> Vec<usize> {
-    let mut widths: Vec<usize> = columns
-        .iter()
-        .map(|column| column.natural_width())
-        .collect();
-    while total(widths.iter().copied()) > page {
-        let widest = columns
-            .iter()
-            .zip(&mut widths)
-            .filter(|(column, width)| **width > column.least_width())
-            .max_by_key(|(_, width)| **width);
-        match widest {
-            Some((_, width)) => *width -= 1,
-            None => break,
+    let mut widths: Vec<usize> = columns.iter().map(|column| column.whole_width()).collect();
+    for floor in [Column::fair_width, Column::least_width] {
+        let floors: Vec<usize> = columns.iter().map(|column| floor(column)).collect();
+        while sum(widths.iter().copied()) > page {
+            let giving = widths
+                .iter_mut()
+                .zip(&floors)
+                .filter(|(width, floor)| **width > **floor);
+            match giving.max_by_key(|(width, _)| **width) {
+                Some((width, _)) => *width -= 1,
+                None => break,
+            }
         }
     }
     widths
@@ -216,11 +125,8 @@ fn write_part(out: &mut dyn Write, columns: &[&Column], layout: &Layout) -> io::
     }));
     let rows = columns.first().map_or(0, |column| column.cells.len());
     for row in 0..rows {
-        let cells = columns.iter().zip(&widths).map(|(column, width)| {
-            let cell = column.cells.get(row).map_or("", String::as_str);
-            Cell::new(broken(cell, *width))
-        });
-        grid.add_row(cells);
+        let cells = columns.iter().zip(&widths);
+        grid.add_row(cells.map(|(column, width)| Cell::new(column.cell(row, *width))));
     }
     for ((index, column), width) in columns.iter().enumerate().zip(&widths) {
         let padding = if index + 1 < columns.len() {
@@ -239,7 +145,7 @@ fn write_part(out: &mut dyn Write, columns: &[&Column], layout: &Layout) -> io::
             drawn.set_cell_alignment(CellAlignment::Right);
         }
     }
-    let whole = total(widths.iter().copied());
+    let whole = sum(widths.iter().copied());
     grid.set_width(narrow(whole));
     let verdicts = columns
         .iter()
@@ -270,6 +176,7 @@ fn narrow(width: usize) -> u16 {
 #[cfg(test)]
 mod tests {
     use super::*;
+    use unicode_width::UnicodeWidthStr;
 
     fn page(width: usize) -> Layout {
         Layout {
@@ -287,7 +194,7 @@ mod tests {
 
     fn two_blocks() -> Table {
         let numbers = |from: usize| (from..from + 2).map(|number| format!("{number}.50"));
-        Table::of([Column::text("member", ["H4", "Ø 20 東"])])
+        Table::of([Column::names("member", ["H4", "Ø 20 東"])])
             .block([
                 Column::number("force", Some("kN"), numbers(1)),
                 Column::number("stress", Some("MPa"), numbers(10)),
@@ -331,16 +238,16 @@ H4        1.50   10.50  100.50
     }
 
     #[test]
-    fn long_names_are_broken_and_the_page_is_kept() {
-        let names = [
-            "service/live=0/wind=1/snow=0.5",
-            "a very long name of a combination",
-        ];
-        let table = Table::of([Column::text("combination", names)]).block([Column::number(
+    fn names_are_broken_only_where_the_page_asks_for_it() {
+        let names = ["service/live=0/wind=1/snow=0.5", "strength"];
+        let forces = ["1.0", "2.0"].map(str::to_owned);
+        let table = Table::of([Column::combinations(names)]).block([Column::number(
             "force",
             Some("kN"),
-            ["1.0", "2.0"].map(str::to_owned),
+            forces,
         )]);
+        let lines = |width| drawn(&table, &page(width)).lines().count();
+        assert_eq!([lines(80), lines(24), lines(19)], [5, 6, 8]);
         let text = drawn(&table, &page(24));
         assert!(text.lines().all(|line| line.width() <= 24), "{text}");
         assert!(
@@ -351,10 +258,22 @@ H4        1.50   10.50  100.50
     }
 
     #[test]
+    fn a_part_that_cannot_be_broken_makes_the_line_longer() {
+        let table = Table::of([Column::combinations(["construction-stage-4/wind=0.25"])]).block([
+            Column::number("force", Some("kN"), ["-1234.5678".to_owned()]),
+        ]);
+        let text = drawn(&table, &page(12));
+        assert!(
+            text.ends_with("construction-stage-4/  -1234.5678\nwind=0.25\n"),
+            "{text}"
+        );
+    }
+
+    #[test]
     fn only_the_verdict_column_is_coloured() {
-        let table = Table::of([Column::text("check", ["fail", "gap"])]).block([
+        let table = Table::of([Column::words("check", ["fail", "gap"])]).block([
             Column::verdicts(["pass", "fail"]),
-            Column::text("source", ["a pass", "to fail"]),
+            Column::names("source", ["a pass", "to fail"]),
         ]);
         let colour = Layout {
             colour: true,

@@ -1,7 +1,7 @@
 //! The text report of results made by hand.
 
 use super::*;
-use crate::quantity::Units;
+use crate::quantity::{Units, from_si};
 use crate::report::sample;
 use unicode_width::UnicodeWidthStr;
 
@@ -38,8 +38,15 @@ fn the_report_keeps_the_page_and_leaves_no_blanks_at_line_ends() {
             assert!(line.width() <= 80, "too wide: {line}");
             assert_eq!(line, line.trim_end());
         }
-        assert!(text.ends_with("a licensed engineer\ndecide.\n"));
-        assert!(text.contains("Signs: N and stress are + in tension"));
+        let has_results = !job.combinations.is_empty();
+        assert_eq!(
+            text.ends_with("a licensed engineer\ndecide.\n"),
+            has_results
+        );
+        assert_eq!(
+            text.contains("Signs: N and stress are + in tension"),
+            has_results
+        );
     }
 }
 
@@ -86,7 +93,7 @@ fn segments_say_make_up_forces_and_stresses_with_their_layers() {
 tier 1          2850               84.25   81.00    95.00  1250
 tier 1.grout          grout       -40.00  -41.00
 tier 1.bars           rod-steel   -40.00  -41.00
-joint          150.0               84.25   81.00";
+joint            150               84.25   81.00";
     assert!(text.contains(expected), "{text}");
     let elongation = "
               elongation         from  from misfit  elongation
@@ -107,8 +114,8 @@ fn supports_say_reaction_gap_and_whether_they_bear() {
 support  at     kind         [kN]   [mm]  bears
 -----------------------------------------------
 base     start  spring      41.00
-kerb     start  stop            0  2.300  no
-cap      start  stop    undecided      0  yes";
+kerb     start  stop         0     2.300  no
+cap      start  stop    undecided  0      yes";
     assert_eq!(
         block(&text, "support  at     kind         [kN]   [mm]"),
         expected
@@ -116,16 +123,104 @@ cap      start  stop    undecided      0  yes";
 }
 
 #[test]
-fn checks_say_demand_limit_utilisation_verdict_source_and_line() {
+fn checks_say_demand_limit_utilisation_verdict_place_and_line() {
     let text = whole(&sample::failing(), &PAGE);
+    for row in [
+        "tension     hanger.lower thread  342.0    300.0    MPa         1.140  fail\n",
+        "bears       post.cap                 yes      yes                     pass\n",
+        "tension     hanger.lower thread  strength/live=1.5  2850  net     44\n",
+    ] {
+        assert!(text.contains(row), "{row}{text}");
+    }
+}
+
+#[test]
+fn a_failing_check_points_at_the_value_and_at_the_line_of_the_limit() {
+    let text = whole(&sample::failing(), &PAGE);
+    let expected = "\
+- tension on hanger.lower thread at 2850 mm is 342.0 MPa in combination
+  strength/live=1.5; the limit of 300.0 MPa is set in line 44: contract, clause
+  4.2";
+    assert_eq!(block(&text, "- tension"), expected);
+
+    // The worst of several, and the one that no number tells.
+    let mut job = sample::failing();
+    let mut other = job.combinations[0].clone();
+    other.name = "strength/live=1".into();
+    job.combinations.push(other);
+    job.governing[3].status = crate::result::Verdict::Fail;
+    job.governing[3].demand = 0.0;
+    let text = whole(&job, &PAGE).replace("\n  ", " ");
+    assert!(text.contains(", the worst of 2 combinations that fail; the limit of 300.0 MPa"));
     assert!(
-        text.contains("tension     hanger.lower thread   342.0  300.0  MPa         1.140  fail\n")
+        text.contains("- bears on post.cap is no in combination strength/live=1.5; the limit is set in line 61\n"),
+        "{text}"
+    );
+    assert!(!whole(&sample::unchecked(), &PAGE).contains("Failing checks"));
+}
+
+#[test]
+fn limits_and_materials_say_where_they_come_from_below_their_tables() {
+    let text = whole(&sample::failing(), &PAGE);
+    assert_eq!(block(&text, "line 44"), "line 44  contract, clause 4.2");
+    let expected = "\
+rod-steel  mill certificate 4471 (like steel-s355)
+grout      no source given";
+    assert_eq!(block(&text, "rod-steel  mill"), expected);
+}
+
+#[test]
+fn a_gap_says_which_of_its_limits_it_is_held_against() {
+    let mut job = sample::failing();
+    let check = &mut job.combinations[0].checks[2];
+    check.check = "gap".into();
+    check.details.insert("min".into(), 0.002.into());
+    check.details.insert("max".into(), 0.006.into());
+    let row = "gap max  hanger                 2.160    6.000  mm          0.360  pass\n";
+    assert!(whole(&job, &PAGE).contains(row), "{}", whole(&job, &PAGE));
+}
+
+#[test]
+fn what_rounding_leaves_is_0_beside_the_largest_of_its_kind() {
+    let mut job = sample::failing();
+    let member = &mut job.combinations[0].members[0];
+    member.totals.reactions = from_si(3e-9);
+    member.elongation_temperature = from_si(2e-18);
+    member.stations[2].displacement = from_si(-4e-18);
+    let text = whole(&job, &PAGE);
+    assert!(text.contains("\nApplied forces sum to 84.25 kN, reactions to 0 kN.\n"));
+    assert!(
+        text.contains("\nwhole member       2.160            0 "),
+        "{text}"
     );
     assert!(
-        text.contains("bears       post.cap                yes    yes                     pass\n")
+        text.contains("\nend        3000         0         81.00\n"),
+        "{text}"
     );
-    assert!(
-        text.contains("tension     hanger.lower thread  2850  net     44  contract, clause 4.2\n")
+
+    // What is small and yet no rounding stays.
+    job.combinations[0].members[0].stations[2].displacement = from_si(-4e-14);
+    assert!(whole(&job, &PAGE).contains("-4.000e-11"));
+}
+
+#[test]
+fn a_force_that_is_the_same_everywhere_is_said_once() {
+    let mut job = sample::failing();
+    let member = &mut job.combinations[0].members[0];
+    member.force_min = member.force_max;
+    assert!(whole(&job, &PAGE).contains("\nAxial force N: 84.25 kN throughout.\n"));
+}
+
+#[test]
+fn a_share_of_restraint_is_given_where_it_says_something() {
+    let said = |share| {
+        let mut job = sample::unchecked();
+        job.combinations[0].members[0].restraint = share;
+        whole(&job, &PAGE).contains("Share of full restraint")
+    };
+    assert_eq!(
+        [None, Some(0.0), Some(-0.02)].map(said),
+        [false, false, true]
     );
 }
 
@@ -134,7 +229,8 @@ fn a_combination_says_its_purpose_and_factors_and_proves_itself() {
     let text = whole(&sample::failing(), &PAGE);
     let title = "Combination strength/live=1.5, for strength: 1.35 dead - 0.5 frost + 1.5 live\n";
     assert!(text.contains(title), "{text}");
-    let proof = "Relative residuals: equilibrium 1.1e-16, compatibility 2.2e-16, energy 0.0e0\n";
+    let proof =
+        "Proof, by relative residuals: equilibrium 1.1e-16, compatibility 2.2e-16, energy\n0 (";
     assert!(text.contains(proof), "{text}");
     // In a job without cases the one combination has nothing to say of factors.
     assert!(whole(&sample::unchecked(), &PAGE).contains("\nCombination all\n"));
@@ -152,6 +248,7 @@ fn the_verdict_words_are_four() {
     let verdict = |job: &JobResult| block(&whole(job, &PAGE), "verdict");
     assert!(verdict(&sample::unchecked()).starts_with("verdict      unchecked: no limit"));
     assert!(verdict(&sample::unreadable()).starts_with("verdict      error: 2 errors"));
+    assert!(whole(&sample::unreadable(), &PAGE).starts_with("Job without a result\n===="));
     let mut passing = sample::failing();
     passing.status = crate::result::JobStatus::Pass;
     assert!(verdict(&passing).starts_with("verdict      pass: all 4 checks hold"));
@@ -193,16 +290,17 @@ fn a_brief_of_one_job_keeps_the_governing_checks_alone() {
 fn a_brief_of_many_has_a_line_a_job() {
     assert_eq!(
         line(&sample::failing()),
-        "fail       linkspan/hanger.toml    1.140 tension on hanger.lower thread, combination \
+        "fail        1.140  linkspan/hanger.toml    tension on hanger.lower thread, combination \
          strength/live=1.5\n"
     );
     assert_eq!(
         line(&sample::unchecked()),
-        "unchecked  linkspan/trial.toml\n"
+        "unchecked          linkspan/trial.toml\n"
     );
     assert_eq!(
         line(&sample::unreadable()),
-        "error      linkspan/broken.toml    the member `tie` has no segment\n"
+        "error              linkspan/broken.toml    2 errors, the first: the member `tie` has no \
+         segment\n"
     );
 }
 

@@ -5,6 +5,9 @@ use std::borrow::Cow;
 use std::io::{self, Write};
 use unicode_width::{UnicodeWidthChar, UnicodeWidthStr};
 
+/// Sentences have no more columns than this, however wide the page is.
+const READABLE: usize = 100;
+
 /// A verdict in the report's words.
 pub(super) fn verdict(verdict: Verdict) -> &'static str {
     match verdict {
@@ -53,23 +56,30 @@ pub(super) fn counted(count: usize, one: &str) -> String {
     format!("{count} {one}{ending}")
 }
 
-/// A title over a rule of the same width.
+/// A title over a rule as wide as its longest line.
 pub(super) fn title(out: &mut dyn Write, text: &str, rule: char, width: usize) -> io::Result<()> {
-    let text = printable(text);
-    wrapped(out, "", &text, width)?;
-    let length = text.width().min(width);
-    writeln!(out, "{}", rule.to_string().repeat(length))
+    let mut lines = Vec::new();
+    wrapped(&mut lines, "", text, width)?;
+    out.write_all(&lines)?;
+    let lines = String::from_utf8_lossy(&lines);
+    let longest = lines.lines().map(UnicodeWidthStr::width).max().unwrap_or(0);
+    writeln!(out, "{}", rule.to_string().repeat(longest))
 }
 
-/// A sentence broken at blanks into lines of at most `width` columns. The first line begins with
-/// `lead`, the others with as many blanks; a word longer than a line stands on one by itself.
+/// A sentence broken at blanks into lines of at most `width` columns, and no longer than is read
+/// with ease. The first line begins with `lead`, the others with as many blanks; a word longer than
+/// a line stands on one by itself, and a number stays with its unit.
 pub(super) fn wrapped(out: &mut dyn Write, lead: &str, text: &str, width: usize) -> io::Result<()> {
+    let width = width.min(READABLE);
     let indent = lead.width();
     let mut line = lead.to_owned();
     let mut used = indent;
     let mut begun = false;
-    for word in printable(text).split_whitespace() {
-        let length = word.width();
+    let text = printable(text);
+    let mut words = text.split_whitespace().peekable();
+    while let Some(word) = words.next() {
+        let unit = words.next_if(|next| is_number(word) && is_unit(next));
+        let length = word.width() + unit.map_or(0, |unit| 1 + unit.width());
         if begun && used + 1 + length > width {
             writeln!(out, "{}", line.trim_end())?;
             line = " ".repeat(indent);
@@ -81,37 +91,32 @@ pub(super) fn wrapped(out: &mut dyn Write, lead: &str, text: &str, width: usize)
             used += 1;
         }
         line.push_str(word);
+        if let Some(unit) = unit {
+            line.push(' ');
+            line.push_str(unit);
+        }
         used += length;
         begun = true;
     }
     writeln!(out, "{}", line.trim_end())
 }
 
-/// A text broken into lines of at most `width` columns: after a blank or a `/` where there is one,
-/// else within a word.
-pub(super) fn broken(text: &str, width: usize) -> Cow<'_, str> {
-    if text.width() <= width {
-        return Cow::Borrowed(text);
-    }
-    let mut lines = String::new();
-    let mut used = 0;
-    for word in text.split_inclusive([' ', '/']) {
-        if used > 0 && used + word.trim_end().width() > width {
-            lines.truncate(lines.trim_end().len());
-            lines.push('\n');
-            used = 0;
-        }
-        for character in word.chars() {
-            let wide = character.width().unwrap_or(0);
-            if used + wide > width && character != ' ' {
-                lines.push('\n');
-                used = 0;
-            }
-            lines.push(character);
-            used += wide;
-        }
-    }
-    Cow::Owned(lines)
+fn is_number(word: &str) -> bool {
+    let word = word.trim_start_matches(['(', '+', '-']);
+    let mut characters = word.chars();
+    characters
+        .next()
+        .is_some_and(|first| first.is_ascii_digit())
+        && characters.all(|character| matches!(character, '0'..='9' | '.' | 'e' | '-'))
+}
+
+/// Whether a word is a unit in which reports show quantities, a mark behind it aside.
+fn is_unit(word: &str) -> bool {
+    const UNITS: [&str; 18] = [
+        "mm", "mm2", "kN", "kN/mm", "MPa", "kg", "kg/m", "K", "degC", "in", "in2", "kip", "kip/in",
+        "ksi", "lb", "lb/ft", "degF", "ue",
+    ];
+    UNITS.contains(&word.trim_end_matches(['.', ',', ';', ':', ')']))
 }
 
 /// A line's part before a display column and from it on, if it reaches that far.
@@ -147,6 +152,21 @@ mod tests {
     #[test]
     fn a_long_word_stands_alone_and_is_not_cut() {
         assert_eq!(lines("", "a abcdefghijk b", 5), "a\nabcdefghijk\nb\n");
+    }
+
+    #[test]
+    fn a_number_stays_with_its_unit() {
+        assert_eq!(
+            lines("", "gap (2.50 mm), 3 pipes", 9),
+            "gap\n(2.50 mm),\n3 pipes\n"
+        );
+    }
+
+    #[test]
+    fn a_rule_is_as_wide_as_the_title_above_it() {
+        let mut out = Vec::new();
+        title(&mut out, "one two three", '=', 8).unwrap();
+        assert_eq!(String::from_utf8(out).unwrap(), "one two\nthree\n=======\n");
     }
 
     #[test]
