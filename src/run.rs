@@ -304,14 +304,22 @@ fn unsolved(error: &SolveError, combination: &Combination, place: &Place, style:
                 combination.name,
                 style.quantity(Dimension::Force, *newtons),
             ),
-            Some(
-                "hold it with a support that works in that direction, or balance the load"
-                    .to_owned(),
-            ),
+            "hold it with a support that works in that direction, or balance the load",
         ),
-        other => (format!("in `{}`: {other}", combination.name), None),
+        SolveError::Contradiction { .. } => (
+            format!("in `{}`: {error}", combination.name),
+            "give one of them, or what lies between, a stiffness, or mend the movements",
+        ),
+        SolveError::PointLoaded { .. } => (
+            format!("in `{}`: {error}", combination.name),
+            "end the taper at a small dimension instead, or take the load off the point",
+        ),
+        SolveError::OutOfRange { .. } => (
+            format!("in `{}`: {error}", combination.name),
+            "look for a value that is too large or too small by many powers of ten",
+        ),
     };
-    let mut problem = Problem::new(place, message, help);
+    let mut problem = Problem::new(place, message, Some(help.to_owned()));
     problem.combination = Some(combination.name.clone());
     problem
 }

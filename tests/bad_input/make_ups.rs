@@ -91,7 +91,7 @@ section = { tube = { outer = "30 mm", wall = "16 mm" } }"#,
 length = "2 m"
 material = "steel-s355"
 section = { thread = "M25" }"#,
-        r#"7:22 M25 has no coarse pitch in ISO 261 | write a thread such as "M24", "M24x2" or "3/4-10 UNC""#,
+        r#"7:22 M25 has no coarse pitch in ISO 261 | write M25x2, M25x1.5 or M25x1"#,
     ),
     (
         r#"[[member.b.segment]]

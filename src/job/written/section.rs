@@ -238,8 +238,7 @@ fn thread<'t>(
             Some(Section::Thread(thread))
         }
         Err(error) => {
-            let help = "write a thread such as \"M24\", \"M24x2\" or \"3/4-10 UNC\"";
-            r.problems.say(&value.span(), error.to_string(), help);
+            r.problems.say(&value.span(), error.message, error.help);
             None
         }
     }
