@@ -268,25 +268,28 @@ impl Solved {
         });
     }
 
-    /// Says once a member what nothing holds and nothing pushes.
+    /// Says what nothing holds and nothing pushes, each free part of a member once.
     fn note_free(&mut self, member: &str, combination: &str, free: &[(Name, Name)]) {
-        let about = format!("member.{member}");
-        if free.is_empty() || self.remarks.iter().any(|remark| remark.about == about) {
-            return;
+        for (from, to) in free {
+            let part = if from == to {
+                format!("at `{from}`")
+            } else {
+                format!("from `{from}` to `{to}`")
+            };
+            let about = format!("member.{member}");
+            let known = |remark: &Remark| remark.about == about && remark.text.contains(&part);
+            if self.remarks.iter().any(known) {
+                continue;
+            }
+            self.remarks.push(Remark {
+                about,
+                text: format!(
+                    "in `{combination}` nothing holds it along its axis {part} and nothing pushes it there: it is set to where the member's ends move least"
+                ),
+                place: None,
+                caution: false,
+            });
         }
-        let parts: Vec<String> = free
-            .iter()
-            .map(|(from, to)| format!("from `{from}` to `{to}`"))
-            .collect();
-        self.remarks.push(Remark {
-            about,
-            text: format!(
-                "in `{combination}` nothing holds it along its axis {} and nothing pushes it: its place there is the one that moves its ends least",
-                parts.join(" and "),
-            ),
-            place: None,
-            caution: false,
-        });
     }
 }
 
@@ -305,6 +308,17 @@ fn unsolved(error: &SolveError, combination: &Combination, place: &Place, style:
                 style.quantity(Dimension::Force, *newtons),
             ),
             "hold it with a support that works in that direction, or balance the load",
+        ),
+        SolveError::Contradiction {
+            member,
+            first,
+            last,
+        } if first == last => (
+            format!(
+                "in `{}` the movements of the supports of member `{member}` at `{first}` contradict each other",
+                combination.name
+            ),
+            "mend the movements, or give one of the supports a stiffness",
         ),
         SolveError::Contradiction { .. } => (
             format!("in `{}`: {error}", combination.name),

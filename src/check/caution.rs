@@ -2,9 +2,10 @@
 
 use crate::catalogue::{Section, Shape};
 use crate::model::{Layer, Limit, LimitKind, Member, Model, Place, Remark, ShareFactor};
-use crate::quantity::{Dimension, Force, Length, Stress, Style, ThermodynamicTemperature, from_si};
+use crate::quantity::{Dimension, Force, Length, Stress, Style};
 use crate::result::{CombinationResult, MemberResult};
 use crate::solve::Threshold;
+use std::collections::{BTreeMap, BTreeSet, HashSet};
 
 /// Slenderness L/r above which a member in compression is called slender (AISC 360-22, user note
 /// to E2).
@@ -32,6 +33,15 @@ pub struct Observed<'a> {
     pub zeros: &'a [Threshold],
 }
 
+/// A temperature that is off a material's range.
+struct Outside {
+    by: f64,
+    reading: f64,
+    segment: usize,
+    layer: usize,
+    combination: String,
+}
+
 /// All cautions that the results of a job call for, member by member.
 pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
     let style = Style {
@@ -54,12 +64,14 @@ pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
         remarks.extend(look.temperature());
         remarks.extend(look.across());
     }
-    remarks.extend(
-        model
-            .limits
-            .iter()
-            .filter_map(|limit| factored_share(model, limit)),
-    );
+    // One literal may limit many segments: it is said once.
+    let mut said = HashSet::new();
+    for limit in &model.limits {
+        if said.insert(limit.place.start) {
+            remarks.extend(factored_share(model, limit));
+            remarks.extend(counted_from_itself(model, limit));
+        }
+    }
     remarks
 }
 
@@ -232,46 +244,68 @@ impl Look<'_> {
         )
     }
 
-    /// A temperature outside the range for which a material's values hold.
-    fn temperature(&self) -> Option<Remark> {
-        let datum = self.member.datum?;
+    /// Temperatures outside the range for which a material's values hold: of each material the
+    /// worst, with its place.
+    fn temperature(&self) -> Vec<Remark> {
+        let mut worst: BTreeMap<usize, Outside> = BTreeMap::new();
+        let Some(datum) = self.member.datum else {
+            return Vec::new();
+        };
         for seen in self.observed {
             let factors = &self.model.combinations[seen.index].factors;
             for (which, segment) in self.member.segments.iter().enumerate() {
                 for (layer_index, layer) in segment.layers().iter().enumerate() {
-                    let material = &self.model.materials[layer.material];
-                    let Some((least, most)) = material.range else {
+                    let Some((least, most)) = self.model.materials[layer.material].range else {
                         continue;
                     };
                     let acting = self.member.actions.temperatures.iter();
                     let acting = acting.filter(|t| t.segment == which && t.layer == layer_index);
-                    let (mut start, mut end) = (0.0, 0.0);
-                    for change in acting {
-                        start += change.start.value * factors[change.case];
-                        end += change.end.value * factors[change.case];
-                    }
-                    for change in [start, end] {
-                        let reading = datum.value + change;
-                        if change != 0.0 && (reading < least.value || reading > most.value) {
-                            let show = |reading: ThermodynamicTemperature| {
-                                self.style.quantity(Dimension::Temperature, reading.value)
+                    let (start, end) = acting.fold((0.0, 0.0), |(start, end), change| {
+                        let factor = factors[change.case];
+                        (
+                            start + change.start.value * factor,
+                            end + change.end.value * factor,
+                        )
+                    });
+                    for reading in [datum.value + start, datum.value + end] {
+                        let by = (reading - most.value).max(least.value - reading);
+                        if by > 0.0 && worst.get(&layer.material).is_none_or(|known| by > known.by)
+                        {
+                            let combination = seen.result.name.to_string();
+                            let at = Outside {
+                                by,
+                                reading,
+                                segment: which,
+                                layer: layer_index,
+                                combination,
                             };
-                            let text = format!(
-                                "temperature of {} in `{}`, `{}` is outside the range of {} to {} for which the values of `{}` hold",
-                                show(from_si(reading)),
-                                segment.name,
-                                seen.result.name,
-                                show(least),
-                                show(most),
-                                material.id,
-                            );
-                            return self.caution(text, Some(layer.place.clone()));
+                            worst.insert(layer.material, at);
                         }
                     }
                 }
             }
         }
-        None
+        worst
+            .into_iter()
+            .filter_map(|(material, outside)| self.outside(material, &outside))
+            .collect()
+    }
+
+    fn outside(&self, material: usize, outside: &Outside) -> Option<Remark> {
+        let material = &self.model.materials[material];
+        let (least, most) = material.range?;
+        let show = |kelvin: f64| self.style.quantity(Dimension::Temperature, kelvin);
+        let segment = &self.member.segments[outside.segment];
+        let text = format!(
+            "temperature of {} in `{}`, `{}` is outside the range of {} to {} for which the values of `{}` hold",
+            show(outside.reading),
+            segment.name,
+            outside.combination,
+            show(least.value),
+            show(most.value),
+            material.id,
+        );
+        self.caution(text, Some(segment.layers()[outside.layer].place.clone()))
     }
 
     /// Loads across a sloping or level member, which the axial computation leaves out.
@@ -317,7 +351,9 @@ fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
     if share >= HOLDS_A_SAFETY_FACTOR {
         return None;
     }
-    let factored = |factors: &[f64]| factors.iter().any(|&factor| factor > 1.0);
+    let member = &model.members[limit.target.member()];
+    let acting = cases_on(member);
+    let factored = |factors: &[f64]| acting.iter().any(|&case| factors[case].abs() > 1.0);
     let (_, combination) = model
         .combinations
         .iter()
@@ -326,10 +362,53 @@ fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
             super::reads(limit, *index, combination) && factored(&combination.factors)
         })?;
     Some(Remark {
-        about: format!("limit.{}", super::word(&limit.kind)),
+        about: format!("member.{}", member.name),
         text: format!(
-            "this limit is {share:.3} of a strength and so may hold a safety factor already, and `{}` has factored loads: safety may be counted twice",
+            "the limit on {} is {share:.3} of a strength and so may hold a safety factor already, and `{}` has factored loads: safety may be counted twice",
+            super::word(&limit.kind),
             combination.name,
+        ),
+        place: Some(limit.place.clone()),
+        caution: true,
+    })
+}
+
+/// The cases that put anything on a member.
+fn cases_on(member: &Member) -> BTreeSet<usize> {
+    let actions = &member.actions;
+    let forces = actions.forces.iter().map(|action| action.case);
+    let lines = actions.lines.iter().map(|action| action.case);
+    let weights = actions.weights.iter().map(|action| action.case);
+    let temperatures = actions.temperatures.iter().map(|action| action.case);
+    let strains = actions.strains.iter().map(|action| action.case);
+    let movements = actions.movements.iter().map(|action| action.case);
+    forces
+        .chain(lines)
+        .chain(weights)
+        .chain(temperatures)
+        .chain(strains)
+        .chain(movements)
+        .collect()
+}
+
+/// A movement that no combination reads but the one that it is counted from.
+fn counted_from_itself(model: &Model, limit: &Limit) -> Option<Remark> {
+    let since = limit.since?;
+    let mut reading = model
+        .combinations
+        .iter()
+        .enumerate()
+        .filter(|(index, combination)| super::reads(limit, *index, combination));
+    if reading.any(|(index, _)| index != since) {
+        return None;
+    }
+    let member = &model.members[limit.target.member()];
+    Some(Remark {
+        about: format!("member.{}", member.name),
+        text: format!(
+            "no combination reads this limit on {} but `{}`, from which it is counted: nothing is checked by it",
+            super::word(&limit.kind),
+            model.combinations[since].name,
         ),
         place: Some(limit.place.clone()),
         caution: true,

@@ -48,7 +48,7 @@ pub(super) fn judge(case: &Case, min: Option<Length>, max: Option<Length>) -> Op
         let ratio = if max > Length::default() {
             Some((gap / max).value)
         } else {
-            None
+            (gap <= zero).then_some(0.0)
         };
         finding(max, ratio, gap <= max * (1.0 + ROUNDING) + zero)
     });

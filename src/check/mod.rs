@@ -168,12 +168,14 @@ impl Finding {
         zero: Quantity<D, SI<f64>, f64>,
         unit: Unit,
     ) -> Self {
+        // Rounding about zero has no sign to choose a side by.
+        let counts = demand.abs() > zero;
+        let demand = if counts { demand } else { from_si(0.0) };
         let bound = if demand.value < 0.0 {
             limit.lower
         } else {
             limit.upper
         };
-        let counts = demand.abs() > zero;
         let (utilisation, status) = utilisation(demand.value.abs(), bound.value.abs(), counts);
         Finding {
             at,

@@ -7,7 +7,7 @@ use super::{Layout, largest, number, ratio, settled, with_unit};
 use crate::model::{AreaUsed, Name};
 use crate::quantity::{Dimension, Length, Measure, Style, from_si};
 use crate::result::{CheckResult, Governing, JobResult, Unit, Verdict};
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 use std::io::{self, Write};
 
 /// A stress this close under its limit is named at the head of the report.
@@ -216,19 +216,32 @@ fn failure(job: &JobResult, check: &Governing, times: usize, layout: &Layout) ->
 /// Writes what the job says of where its limits come from, by the lines that set them.
 fn write_sources(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
     let checks = job.combinations.iter().flat_map(|each| &each.checks);
-    let sources: BTreeMap<usize, &Name> = checks
-        .filter_map(|check| Some((check.line, check.source.as_ref()?)))
-        .collect();
+    // Limits with sources of their own may share a line: each is named with what it limits.
+    let mut sources: BTreeMap<(usize, &Name), BTreeSet<&Name>> = BTreeMap::new();
+    for check in checks {
+        if let Some(source) = &check.source {
+            sources
+                .entry((check.line, source))
+                .or_default()
+                .insert(&check.check);
+        }
+    }
     if sources.is_empty() {
         return Ok(());
     }
     writeln!(out)?;
     title(out, "Sources of the limits", '-', layout.width)?;
-    let lead = |line: usize| format!("line {line}");
-    let widest = sources.keys().map(|&line| lead(line).len()).max();
+    let lead = |line: usize, checks: &BTreeSet<&Name>| {
+        let checks: Vec<&str> = checks.iter().map(|check| check.as_ref()).collect();
+        format!("line {line}, {}", checks.join(", "))
+    };
+    let widest = sources
+        .iter()
+        .map(|((line, _), checks)| lead(*line, checks).len())
+        .max();
     let widest = widest.unwrap_or(0);
-    for (line, source) in sources {
-        let lead = format!("{:widest$}  ", lead(line));
+    for ((line, source), checks) in sources {
+        let lead = format!("{:widest$}  ", lead(line, &checks));
         wrapped(out, &lead, source, layout.width)?;
     }
     Ok(())
