@@ -281,9 +281,13 @@ fn write_rows(out: &mut dyn Write, rows: &[Row], style: &Style, layout: &Layout)
         None => "",
     });
     // What rounding leaves is told by the largest value of the same unit in the table.
+    let scales = [Unit::Pascal, Unit::Newton, Unit::Metre, Unit::None].map(|unit| {
+        let same = rows.iter().filter(|row| row.unit == unit);
+        (unit, largest(same.flat_map(|row| [row.demand, row.limit])))
+    });
     let scale = |unit: Unit| {
-        let same = rows.iter().filter(move |row| row.unit == unit);
-        largest(same.flat_map(|row| [row.demand, row.limit]))
+        let own = scales.iter().find(|(known, _)| *known == unit);
+        own.map_or(0.0, |&(_, largest)| largest)
     };
     let demand = rows
         .iter()
