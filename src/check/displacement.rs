@@ -1,11 +1,11 @@
 //! Displacement of a station.
 
 use super::{Case, Finding, moved};
-use crate::model::{MovementLimit, Target};
+use crate::model::{Bounds, Target};
 use crate::quantity::Length;
 use crate::result::Unit;
 
-pub(super) fn judge(case: &Case, limit: &MovementLimit<Length>) -> Option<Finding> {
+pub(super) fn judge(case: &Case, limit: &Bounds<Length>) -> Option<Finding> {
     let Target::Station { station, .. } = case.limit.target else {
         return None;
     };

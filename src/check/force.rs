@@ -1,11 +1,11 @@
 //! Axial force anywhere in a member or a segment, against a rated load.
 
 use super::{Case, Finding};
-use crate::model::{MovementLimit, Target};
+use crate::model::{Bounds, Target};
 use crate::quantity::Force;
 use crate::result::Unit;
 
-pub(super) fn judge(case: &Case, limit: &MovementLimit<Force>) -> Option<Finding> {
+pub(super) fn judge(case: &Case, limit: &Bounds<Force>) -> Option<Finding> {
     let ((most, most_at), (least, least_at)) = match case.limit.target {
         Target::Member { .. } => {
             let m = case.member;

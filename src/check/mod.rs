@@ -18,7 +18,7 @@ pub use caution::{Observed, cautions};
 pub use envelope::envelope;
 pub use governing::governing;
 
-use crate::model::{Combination, Limit, LimitKind, Model, MovementLimit, Name, Reads};
+use crate::model::{Bounds, Combination, Limit, LimitKind, Model, Name, Reads};
 use crate::quantity::{Dimension, from_si};
 use crate::result::{CheckResult, CombinationResult, MemberResult, Unit, Verdict};
 use crate::solve::Threshold;
@@ -164,7 +164,7 @@ impl Finding {
     fn signed<D: uom::si::Dimension + ?Sized>(
         demand: Quantity<D, SI<f64>, f64>,
         at: Option<f64>,
-        limit: &MovementLimit<Quantity<D, SI<f64>, f64>>,
+        limit: &Bounds<Quantity<D, SI<f64>, f64>>,
         zero: Quantity<D, SI<f64>, f64>,
         unit: Unit,
     ) -> Self {

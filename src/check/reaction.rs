@@ -1,11 +1,11 @@
 //! Reaction of a support.
 
 use super::{Case, Finding};
-use crate::model::{MovementLimit, Target};
+use crate::model::{Bounds, Target};
 use crate::quantity::Force;
 use crate::result::Unit;
 
-pub(super) fn judge(case: &Case, limit: &MovementLimit<Force>) -> Option<Finding> {
+pub(super) fn judge(case: &Case, limit: &Bounds<Force>) -> Option<Finding> {
     let Target::Support { member, support } = case.limit.target else {
         return None;
     };

@@ -57,7 +57,7 @@ pub struct ShareFactor(pub f64);
 
 /// The lower and the upper bound of a signed demand: lower ≤ 0 ≤ upper.
 #[derive(Debug, Clone, Copy, PartialEq)]
-pub struct MovementLimit<Q> {
+pub struct Bounds<Q> {
     /// Not less than this.
     pub lower: Q,
     /// Not more than this.
@@ -86,13 +86,13 @@ pub enum LimitKind {
         share: Option<ShareFactor>,
     },
     /// Axial force anywhere. Target: `Member` or `Segment`.
-    Force(MovementLimit<Force>),
+    Force(Bounds<Force>),
     /// Change of length. Target: `Member` or `Segment`.
-    Elongation(MovementLimit<Length>),
+    Elongation(Bounds<Length>),
     /// Displacement. Target: `Station`.
-    Displacement(MovementLimit<Length>),
+    Displacement(Bounds<Length>),
     /// Reaction of a support. Target: `Support`.
-    Reaction(MovementLimit<Force>),
+    Reaction(Bounds<Force>),
     /// What stays open. Target: `Support` with a stop, or `Segment` that is a gap.
     Gap {
         /// Not less than this.

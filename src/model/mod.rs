@@ -11,7 +11,7 @@ mod member;
 
 pub use action::{Actions, FreeStrain, LineLoad, Movement, PointForce, Temperatures, Weight};
 pub use combination::{Case, Combination, Purpose};
-pub use limit::{AreaUsed, Limit, LimitKind, MovementLimit, Reads, ShareFactor, Target};
+pub use limit::{AreaUsed, Bounds, Limit, LimitKind, Reads, ShareFactor, Target};
 pub use member::{
     Gap, Layer, Member, Part, Piece, Segment, SegmentKind, Side, Station, Support, SupportKind,
 };

@@ -167,7 +167,11 @@ impl<'a> Run<'a> {
             }
             if self.form == Form::Json {
                 job.result.digest = bytes.ok().map(|bytes| json::digest(&bytes));
-            } else if !job.drawn_errors.is_empty() {
+            }
+            if !job.drawn_errors.is_empty() {
+                if self.counts.errors > 0 {
+                    self.tell(errors, "\n")?;
+                }
                 self.tell(errors, &job.drawn_errors)?;
             }
             self.counts.add(&job.result);

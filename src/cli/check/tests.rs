@@ -282,14 +282,14 @@ fn standard_input_is_a_job() {
 }
 
 #[test]
-fn errors_are_drawn_beside_text_and_stand_within_json() {
+fn errors_are_drawn_beside_the_results_and_stand_within_json_too() {
     let folder = folder(&[("a.toml", "broken"), ("b.toml", "passes")]);
     let as_text = check(&[text(folder.path())]);
     assert!(as_text.errors.starts_with("drawn errors of "));
     assert!(!as_text.out.contains("drawn errors"));
 
     let json = check(&[text(folder.path()), "--format", "json"]);
-    assert_eq!(json.errors, "");
+    assert_eq!(json.errors, as_text.errors);
     let document: Document = serde_json::from_str(&json.out).unwrap();
     assert_eq!(document.jobs[0].errors.len(), 2);
     // sha256sum of the bytes `[job]`, line feed, `# passes`, line feed.
@@ -300,6 +300,19 @@ fn errors_are_drawn_beside_text_and_stand_within_json() {
     );
     let elongation = document.jobs[1].combinations[0].members[0].elongation;
     assert_eq!(elongation.value.to_bits(), (0.1_f64 + 0.2).to_bits());
+}
+
+#[test]
+fn a_blank_line_parts_the_errors_of_two_jobs() {
+    let folder = folder(&[
+        ("a.toml", "broken"),
+        ("b.toml", "passes"),
+        ("c.toml", "broken"),
+    ]);
+    let ended = check(&[text(folder.path()), "--brief"]);
+    let lines: Vec<&str> = ended.errors.lines().collect();
+    assert_eq!(lines.len(), 3, "{}", ended.errors);
+    assert!(lines[0].ends_with("a.toml") && lines[1].is_empty() && lines[2].ends_with("c.toml"));
 }
 
 #[test]

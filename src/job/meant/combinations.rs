@@ -74,7 +74,16 @@ impl Combinations {
             let first = all.len();
             let family = name(&combination.name);
             let purpose = match &combination.purpose {
-                Entry::Given(purpose) => Some(purpose.value),
+                Entry::Given(purpose) => {
+                    let named = purpose_named(combination.name.value);
+                    if named.is_some_and(|named| named != purpose.value) {
+                        let name = combination.name.value;
+                        let message = format!("a combination called `{name}` has that purpose");
+                        let help = "call it otherwise, or leave its purpose out";
+                        meaning.r.problems.say(&purpose.place, message, help);
+                    }
+                    Some(purpose.value)
+                }
                 Entry::Absent => purpose_named(combination.name.value),
                 Entry::Wrong => return None,
             };

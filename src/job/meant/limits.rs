@@ -9,8 +9,7 @@ use crate::job::written::Entry;
 use crate::job::written::limit::{Bound, Limits};
 use crate::job::written::segment::{Kind, Segment};
 use crate::model::{
-    AreaUsed, Limit, LimitKind, Member, MovementLimit, Name, Place, Purpose, Reads, SegmentKind,
-    Target,
+    AreaUsed, Bounds, Limit, LimitKind, Member, Name, Place, Purpose, Reads, SegmentKind, Target,
 };
 use crate::quantity::{Force, Length, MovementBound, StressLimit};
 use std::collections::HashSet;
@@ -360,24 +359,24 @@ fn purpose_of(kind: &LimitKind) -> Purpose {
 fn signed<Q: Copy + Neg<Output = Q>, T: Copy>(
     bound: Bound<T>,
     value: impl Fn(T) -> Q,
-) -> MovementLimit<Q> {
+) -> Bounds<Q> {
     match bound {
-        Bound::Size(size) => MovementLimit {
+        Bound::Size(size) => Bounds {
             lower: -value(size),
             upper: value(size),
         },
-        Bound::Each(lower, upper) => MovementLimit {
+        Bound::Each(lower, upper) => Bounds {
             lower: value(lower),
             upper: value(upper),
         },
     }
 }
 
-fn force_limit(bound: Bound<Force>) -> MovementLimit<Force> {
+fn force_limit(bound: Bound<Force>) -> Bounds<Force> {
     signed(bound, |force| force)
 }
 
-fn movement_limit(bound: Bound<MovementBound>, length: Length) -> MovementLimit<Length> {
+fn movement_limit(bound: Bound<MovementBound>, length: Length) -> Bounds<Length> {
     signed(bound, |bound| match bound {
         MovementBound::Length(literal) => literal.nominal,
         MovementBound::Share { divisor } => length / divisor,

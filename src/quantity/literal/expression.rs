@@ -1,7 +1,7 @@
 //! The unit of a literal: names, powers, products and quotients.
 
 use super::cursor::{Cursor, Sign};
-use super::{LiteralError, expected, refuse};
+use super::{LiteralError, expected, refuse, share};
 use crate::quantity::Dimension;
 use crate::quantity::exact::Exact;
 use crate::quantity::unit::{self, Pound, Powers, Unit};
@@ -236,23 +236,16 @@ fn unknown(name: &str, at: Range<usize>, dimension: Dimension) -> LiteralError {
                 help,
             )
         }
-        "yield" | "ultimate" | "proof" | "crushing" => refuse(
-            at,
-            format!("a share of a strength (`{shown}`) is read only in the limit of a stress"),
-            expected(dimension),
-        ),
-        "length" => refuse(
-            at,
-            "a share of a length is read only in the limit of a movement, as `length / 500`",
-            expected(dimension),
-        ),
-        _ => refuse(
-            at,
-            format!("`{shown}` is no known unit"),
-            match unit::nearest(name) {
-                Some(near) => format!("did you mean `{near}`? Names of units keep their case"),
-                None => expected(dimension),
-            },
-        ),
+        _ => match share::out_of_place(&lower) {
+            Some(message) => refuse(at, message, expected(dimension)),
+            None => refuse(
+                at,
+                format!("`{shown}` is no known unit"),
+                match unit::nearest(name) {
+                    Some(near) => format!("did you mean `{near}`? Names of units keep their case"),
+                    None => expected(dimension),
+                },
+            ),
+        },
     }
 }

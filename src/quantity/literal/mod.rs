@@ -129,7 +129,8 @@ fn values(text: &str, dimension: Dimension) -> Result<Literal<f64>, LiteralError
     let start = cursor.at();
     let sign = cursor.sign();
     cursor.blanks();
-    let first = number::number(&mut cursor)?;
+    let first =
+        number::number(&mut cursor).map_err(|error| no_number(error, &cursor, dimension))?;
     cursor.blanks();
     let (size, unit) = counted(&mut cursor, dimension, &first)?;
     let signed = match sign {
@@ -226,6 +227,15 @@ fn expected(dimension: Dimension) -> String {
         dimension.name(),
         dimension.accepted()
     )
+}
+
+/// Why no number starts here; a share where only a value is read is told as such.
+#[cold]
+fn no_number(error: LiteralError, cursor: &Cursor<'_>, dimension: Dimension) -> LiteralError {
+    match share::out_of_place(share::word(*cursor)) {
+        Some(message) => refuse(error.at, message, expected(dimension)),
+        None => error,
+    }
 }
 
 /// Why the unit is not one of this dimension.

@@ -135,7 +135,7 @@ fn stress(text: &str) -> Result<StressLimit, LiteralError> {
 }
 
 /// The letters that come next.
-fn word<'t>(cursor: Cursor<'t>) -> &'t str {
+pub(super) fn word<'t>(cursor: Cursor<'t>) -> &'t str {
     let end = cursor.rest.find(|c: char| !c.is_alphabetic());
     cursor
         .rest
@@ -160,6 +160,19 @@ fn nearest(word: &str) -> Option<&'static str> {
         .iter()
         .map(|&(name, _)| name)
         .find(|name| lower == *name || unit::one_apart(&lower, name))
+}
+
+/// What is wrong with a share where only a value is read: `word` names what it would be a share of.
+pub(super) fn out_of_place(word: &str) -> Option<String> {
+    if word == "length" {
+        let message =
+            "a share of a length is read only in the limit of a movement, as `length / 500`";
+        return Some(message.to_owned());
+    }
+    known(word)?;
+    Some(format!(
+        "a share of a strength (`{word}`) is read only in the limit of a stress"
+    ))
 }
 
 /// Reads the name of a strength.

@@ -7,7 +7,7 @@ use super::{Layout, largest, number, ratio, settled, with_unit};
 use crate::model::{AreaUsed, Name};
 use crate::quantity::{Dimension, Length, Measure, Style, from_si};
 use crate::result::{CheckResult, Governing, JobResult, Unit, Verdict};
-use std::collections::{BTreeMap, BTreeSet};
+use std::collections::{BTreeMap, BTreeSet, HashMap};
 use std::io::{self, Write};
 
 /// A stress this close under its limit is named at the head of the report.
@@ -74,8 +74,12 @@ fn named(check: &CheckResult) -> String {
     }
 }
 
-/// The same of a governing check.
+/// The same of a governing check. Only that of a gap is looked for among the checks, so that the
+/// cost of a report stays in line with their number.
 pub(super) fn governing_name(job: &JobResult, governing: &Governing) -> String {
+    if &*governing.check != "gap" {
+        return governing.check.to_string();
+    }
     let of = |check: &&CheckResult| {
         check.check == governing.check
             && check.on == governing.on
@@ -170,16 +174,33 @@ fn write_failing(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::R
     }
     writeln!(out)?;
     title(out, "Failing checks", '-', layout.width)?;
+    let times = failures(job);
     for check in failing {
-        let failed = |other: &&CheckResult| {
-            other.status == Verdict::Fail && other.check == check.check && other.on == check.on
-        };
-        let combinations = job.combinations.iter();
-        let times = combinations.filter(|each| each.checks.iter().any(|check| failed(&check)));
-        let text = failure(job, check, times.count(), layout);
+        let times = times
+            .get(&(&*check.check, &*check.on))
+            .map_or(0, |&(_, times)| times);
+        let text = failure(job, check, times, layout);
         wrapped(out, "- ", &text, layout.width)?;
     }
     Ok(())
+}
+
+/// For each check on each thing that fails, the last combination in which it does, by its index, and
+/// in how many.
+fn failures(job: &JobResult) -> HashMap<(&str, &str), (usize, usize)> {
+    let mut failures = HashMap::new();
+    for (index, combination) in job.combinations.iter().enumerate() {
+        let checks = combination.checks.iter();
+        for check in checks.filter(|check| check.status == Verdict::Fail) {
+            let known = failures
+                .entry((&*check.check, &*check.on))
+                .or_insert((index, 1));
+            if known.0 != index {
+                *known = (index, known.1 + 1);
+            }
+        }
+    }
+    failures
 }
 
 /// `tension on stay.eye at 120 mm is 340 MPa in combination strength; the limit of 275 MPa is set in
@@ -273,9 +294,13 @@ fn write_rows(out: &mut dyn Write, rows: &[Row], style: &Style, layout: &Layout)
         None => "",
     });
     // What rounding leaves is told by the largest value of the same unit in the table.
+    let scales = [Unit::Pascal, Unit::Newton, Unit::Metre, Unit::None].map(|unit| {
+        let same = rows.iter().filter(|row| row.unit == unit);
+        (unit, largest(same.flat_map(|row| [row.demand, row.limit])))
+    });
     let scale = |unit: Unit| {
-        let same = rows.iter().filter(move |row| row.unit == unit);
-        largest(same.flat_map(|row| [row.demand, row.limit]))
+        let own = scales.iter().find(|(known, _)| *known == unit);
+        own.map_or(0.0, |&(_, largest)| largest)
     };
     let demand = rows
         .iter()

@@ -278,6 +278,18 @@ fn names_that_are_no_units() {
         "a share of a strength (`yield`) is read only in the limit of a stress",
         "345 MPa",
     );
+    refused::<Stress>(
+        "yield / 1.67",
+        "yield",
+        "a share of a strength (`yield`) is read only in the limit of a stress",
+        "345 MPa",
+    );
+    refused::<Force>(
+        "length / 500",
+        "length",
+        "a share of a length is read only in the limit of a movement, as `length / 500`",
+        "62 kN",
+    );
 }
 
 #[test]
