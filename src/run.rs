@@ -2,14 +2,14 @@
 
 use crate::check::{self, Observed};
 use crate::job::{self, Problem, Source};
-use crate::model::{Combination, Model, Name, Place, Remark};
+use crate::model::{Combination, Member, Model, Name, Place, Remark};
 use crate::proof;
 use crate::quantity::{Dimension, Style};
 use crate::result::{
     Caution, CombinationResult, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Residuals,
-    Verdict,
+    Verdict, YieldRow,
 };
-use crate::solve::{self, SolveError, Stiffness, Threshold};
+use crate::solve::{self, Solution, SolveError, Stiffness, Threshold};
 
 /// How many errors a result holds; the rest are counted.
 const ERRORS_KEPT: usize = 1000;
@@ -230,13 +230,14 @@ impl Solved {
                 _ => solve::member(model, member, combination),
             };
             match solution {
-                Ok(solution) => {
+                Ok(mut solution) => {
                     let own = proof::member(model, member, combination, &solution.member);
                     if !own.prove() {
                         self.problems
                             .push(unproven(member.name.as_ref(), own, combination, place));
                     }
                     residuals = residuals.worse(own);
+                    self.leave_undecided(member, &combination.name, &mut solution);
                     self.note_free(member.name.as_ref(), &combination.name, &solution.free);
                     members.push(solution.member);
                     zeros.push(solution.zero);
@@ -266,6 +267,38 @@ impl Solved {
             residuals,
             checks: Vec::new(),
         });
+    }
+
+    /// Takes back the reactions of rigid stops that share a force in a way that nothing decides,
+    /// once the proof has had their split of least size.
+    fn leave_undecided(&mut self, member: &Member, combination: &str, solution: &mut Solution) {
+        for &support in &solution.undecided {
+            solution.member.supports[support].reaction = None;
+        }
+        let names: Vec<String> = solution
+            .undecided
+            .iter()
+            .map(|&support| format!("`{}`", member.supports[support].name))
+            .collect();
+        if names.is_empty() {
+            return;
+        }
+        let about = format!("member.{}", member.name);
+        let shared = names.join(" and ");
+        if !self
+            .remarks
+            .iter()
+            .any(|remark| remark.about == about && remark.text.contains(&shared))
+        {
+            self.remarks.push(Remark {
+                about,
+                text: format!(
+                    "in `{combination}` nothing decides how the rigid stops {shared} share their force: give one of them a `stiffness`"
+                ),
+                place: None,
+                caution: false,
+            });
+        }
     }
 
     /// Says what nothing holds and nothing pushes, each free part of a member once.
@@ -380,10 +413,20 @@ fn material_entry(material: &crate::catalogue::Material) -> MaterialEntry {
         modulus: material.modulus.value,
         expansion: material.expansion.map(|value| value.value),
         density: material.density.map(|value| value.value),
-        yield_strength: material
-            .yield_strength
-            .first()
-            .map(|&(_, value)| value.value),
+        yield_strength: match material.yield_strength[..] {
+            [(None, strength)] => Some(strength.value),
+            _ => None,
+        },
+        yield_by_thickness: match material.yield_strength[..] {
+            [(None, _)] => Vec::new(),
+            ref rows => rows
+                .iter()
+                .map(|&(thickness, strength)| YieldRow {
+                    thickness: thickness.map(|t| t.value),
+                    yield_strength: strength.value,
+                })
+                .collect(),
+        },
         ultimate: material.ultimate.map(|value| value.value),
         proof: material.proof.map(|value| value.value),
         crushing: material.crushing.map(|value| value.value),

@@ -34,10 +34,10 @@ impl Outcome {
             [s.x.value, s.displacement.value, before, after]
         });
         let supports = member.supports.iter();
-        let reaction = |r: Option<Force>| r.expect("nothing is shared").value;
+        // Equal rigid stops share in a way that nothing decides: their reactions are none.
         Outcome {
             stations: stations.collect(),
-            reactions: supports.clone().map(|s| reaction(s.reaction)).collect(),
+            reactions: supports.clone().map(|s| force(s.reaction)).collect(),
             bears: supports
                 .map(|s| s.bears)
                 .chain(member.segments.iter().map(|s| s.bears))

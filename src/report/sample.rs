@@ -135,6 +135,7 @@ fn material(id: &str, modulus: f64, source: Option<&str>, like: Option<&str>) ->
         expansion: Some(12e-6),
         density: Some(7850.0),
         yield_strength: source.map(|_| 345e6),
+        yield_by_thickness: Vec::new(),
         ultimate: None,
         proof: None,
         crushing: None,

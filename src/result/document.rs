@@ -187,14 +187,27 @@ pub struct MaterialEntry {
     pub modulus: f64,
     pub expansion: Option<f64>,
     pub density: Option<f64>,
+    /// Null where it differs by thickness.
     #[serde(rename = "yield")]
     pub yield_strength: Option<f64>,
+    /// Empty where one strength holds for all thicknesses.
+    pub yield_by_thickness: Vec<YieldRow>,
     pub ultimate: Option<f64>,
     pub proof: Option<f64>,
     pub crushing: Option<f64>,
     pub family: Option<String>,
     pub source: Option<String>,
     pub like: Option<Name>,
+}
+
+/// The yield strength up to a thickness.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+pub struct YieldRow {
+    /// m; null for any beyond the rows before it.
+    pub thickness: Option<f64>,
+    /// Pa.
+    #[serde(rename = "yield")]
+    pub yield_strength: f64,
 }
 
 /// How much was looked at, and what came of it.

@@ -12,7 +12,7 @@ mod member;
 pub use check::{CheckResult, Envelope, Governing, Unit, Verdict};
 pub use document::{
     Caution, Counts, Document, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Tool,
-    UnitNames,
+    UnitNames, YieldRow,
 };
 pub use member::{
     LayerResult, MemberResult, MemberState, MemberTotals, SegmentResult, StationResult,

@@ -35,6 +35,9 @@ pub struct Solution {
     pub zero: Threshold,
     /// What nothing holds and nothing pushes, from station to station: set to where it moves least.
     pub free: Vec<(Name, Name)>,
+    /// Supports, by index, that share a force in a way that nothing decides: rigid stops with one
+    /// face. Their reactions are the split of least size.
+    pub undecided: Vec<usize>,
 }
 
 /// Why a member cannot be solved in a combination.
@@ -135,10 +138,13 @@ pub fn member_of(
 ) -> Result<Solution, SolveError> {
     let mut loading = Loading::of(model, member, combination, &stiffness.layers);
     let prepared = Prepared::of(member, &mut loading, stiffness)?;
-    let (solved, states) = prepared
+    let (mut solved, mut states) = prepared
         .chain
         .settle()
         .map_err(|reason| explain(member, reason))?;
+    let undecided = prepared
+        .chain
+        .share_between_equals(&mut solved, &mut states);
     let recovered = Recovered {
         model,
         member,
@@ -159,6 +165,7 @@ pub fn member_of(
         member: result,
         zero: prepared.chain.zero,
         free,
+        undecided,
     })
 }
 
@@ -318,6 +325,36 @@ impl Chain {
                 return Ok((solved, states));
             }
         }
+    }
+
+    /// Splits the reaction of a rigid stop evenly among all that stand at its face; gives the
+    /// supports that share one.
+    fn share_between_equals(&self, solved: &mut Solved, states: &mut States) -> Vec<usize> {
+        let mut undecided = Vec::new();
+        for bearing in 0..self.holds.len() {
+            let hold = &self.holds[bearing];
+            if hold.stop.is_none() || hold.stiffness.is_some() || !states.holds[bearing] {
+                continue;
+            }
+            let equals: Vec<usize> = self
+                .holds_in(hold.station, hold.station)
+                .filter(|&other| {
+                    let other = &self.holds[other];
+                    let level = (other.face - hold.face).abs() <= self.zero.length;
+                    level && other.stop == hold.stop && other.stiffness.is_none()
+                })
+                .collect();
+            if equals.len() < 2 || undecided.contains(&hold.support) {
+                continue;
+            }
+            let share = solved.reactions[bearing] / equals.len() as f64;
+            for equal in equals {
+                solved.reactions[equal] = share;
+                states.holds[equal] = true;
+                undecided.push(self.holds[equal].support);
+            }
+        }
+        undecided
     }
 
     /// Whether any was let go; each round lets at least one go, so this ends.

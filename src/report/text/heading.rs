@@ -7,7 +7,7 @@ use super::{Layout, checks, number, optional, with_unit};
 use crate::quantity::{
     Density, Dimension, Expansion, Measure, Stress, ThermodynamicTemperature, from_si,
 };
-use crate::result::{CheckResult, JobResult, JobStatus, Verdict};
+use crate::result::{CheckResult, JobResult, JobStatus, Verdict, YieldRow};
 use std::io::{self, Write};
 use unicode_width::UnicodeWidthStr;
 
@@ -123,15 +123,29 @@ pub(super) fn write_materials(
 
 /// Writes where the values of each material come from.
 fn write_material_sources(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
+    let style = layout.style(job);
     title(out, "Sources of the materials", '-', layout.width)?;
     let widths = job.materials.iter().map(|material| material.id.width());
     let widest = widths.max().unwrap_or(0);
     for material in &job.materials {
         let source = material.source.as_deref().unwrap_or("no source given");
-        let text = match &material.like {
+        let mut text = match &material.like {
             Some(like) => format!("{source} (like {like})"),
             None => source.to_owned(),
         };
+        if !material.yield_by_thickness.is_empty() {
+            let row = |row: &YieldRow| {
+                let strength = style.quantity(Dimension::Stress, row.yield_strength);
+                match row.thickness {
+                    Some(up_to) => {
+                        format!("{strength} to {}", style.quantity(Dimension::Length, up_to))
+                    }
+                    None => format!("{strength} beyond"),
+                }
+            };
+            let rows: Vec<String> = material.yield_by_thickness.iter().map(row).collect();
+            text += &format!("; yield by thickness {}", rows.join(", "));
+        }
         let id = &material.id;
         let lead = format!("{id}{:1$}", "", widest - id.width() + 2);
         wrapped(out, &lead, &text, layout.width)?;

@@ -162,7 +162,10 @@ fn a_failing_check_points_at_the_value_and_at_the_line_of_the_limit() {
 #[test]
 fn limits_and_materials_say_where_they_come_from_below_their_tables() {
     let text = whole(&sample::failing(), &PAGE);
-    assert_eq!(block(&text, "line 44"), "line 44  contract, clause 4.2");
+    assert_eq!(
+        block(&text, "line 44"),
+        "line 44, tension  contract, clause 4.2"
+    );
     let expected = "\
 rod-steel  mill certificate 4471 (like steel-s355)
 grout      no source given";
