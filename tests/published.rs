@@ -149,7 +149,7 @@ published! {
             .print(Carried(0.05 / 36.0)),
     }
 
-    // One public transcription pairs the data of the thin rod with the answers of the thick one.
+    // One public copy pairs the data of the thin rod with the answers of the thick one.
     p13_gap_at_the_wall_thick_rod "p13-thick.toml" {
         value("rod.start.reaction", "-16.0", "kN", -15.951_327_21),
         value("rod.wall.reaction", "-4.05", "kN", -4.048_672_789),
