@@ -58,9 +58,12 @@ pub fn reads(limit: &Limit, index: usize, combination: &Combination) -> bool {
     }
 }
 
-/// Every check that reads a combination. `line_of` tells the line of a place in the job file; a
-/// limit that counts from a combination without a result is passed over, since the job is an error
-/// then in any case.
+/// Every check that reads the combination with this index.
+///
+/// `zeros` are the thresholds of its members, `since` tells where in `all` the results of a
+/// combination of the model stand, and `lines` are the lines of the model's limits in the job file.
+/// A limit that counts from a combination without a result is passed over, since the job is an
+/// error then in any case.
 pub fn combination(
     model: &Model,
     index: usize,

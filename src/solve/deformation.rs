@@ -156,22 +156,19 @@ fn stiffness_weighted(
     Quotient::new(weighted, *rigidity)
 }
 
-/// The force that a layer takes, over its stiffness share: E (N + Σ EA (e − e_k)) / EA, whose first
-/// factor is left to the caller. Written with differences of free strains, so that layers that
-/// expand alike leave no rounding behind.
-pub(super) fn layer_strain(
+/// The elastic strain of a layer times EA of all: ε − e_k = (N + Σ EA (e − e_k)) / EA. Written with
+/// differences of free strains, so that layers that expand alike leave no rounding behind.
+pub(super) fn strain_times_rigidity(
     layers: &[LayerLoading],
     which: usize,
     force: &Curve<Force>,
-    rigidity: &Curve<Force>,
-) -> (Curve<Force>, Curve<Force>) {
+) -> Curve<Force> {
     let own = layers[which].free_strain();
-    let numerator = layers
+    let others = layers
         .iter()
         .enumerate()
-        .filter(|&(other, _)| other != which)
-        .fold(*force, |sum, (_, other)| {
-            sum + other.rigidity().times(&(other.free_strain() - own))
-        });
-    (numerator, *rigidity)
+        .filter(|&(other, _)| other != which);
+    others.fold(*force, |sum, (_, other)| {
+        sum + other.rigidity().times(&(other.free_strain() - own))
+    })
 }

@@ -3,7 +3,7 @@
 use super::range::Range;
 use crate::model::Layer;
 use crate::quantity::{Area, Curve, Force, Length, Ratio, Stress, from_si};
-use crate::solve::deformation::{PieceDeformation, layer_strain};
+use crate::solve::deformation::{PieceDeformation, strain_times_rigidity};
 use crate::solve::loading::LayerLoading;
 use crate::solve::quotient::{Quotient, Unbounded};
 
@@ -46,12 +46,8 @@ impl LayerOfPiece<'_> {
             return Quotient::new(self.force, *area);
         }
         let own = &self.layers[self.which];
-        let (strain, rigidity) = layer_strain(
-            self.layers,
-            self.which,
-            &self.force,
-            &self.deformation.rigidity,
-        );
+        let strain = strain_times_rigidity(self.layers, self.which, &self.force);
+        let rigidity = &self.deformation.rigidity;
         let unit: Area = from_si(1.0);
         let stiffness: Curve<Ratio> = rigidity.map(|rigidity| rigidity / (own.modulus * unit));
         if *area == own.area {
@@ -89,12 +85,8 @@ impl LayerOfPiece<'_> {
         if self.layers.len() == 1 {
             return self.force.at(s);
         }
-        let (strain, rigidity) = layer_strain(
-            self.layers,
-            self.which,
-            &self.force,
-            &self.deformation.rigidity,
-        );
+        let strain = strain_times_rigidity(self.layers, self.which, &self.force);
+        let rigidity = &self.deformation.rigidity;
         let own = self.layers[self.which].rigidity().at(s);
         if own == Force::default() {
             own
