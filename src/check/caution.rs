@@ -351,7 +351,7 @@ fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
     if share >= HOLDS_A_SAFETY_FACTOR {
         return None;
     }
-    let member = &model.members[limit.target.member()];
+    let member = &model.members[limit.target.member()?];
     let acting = cases_on(member);
     let factored = |factors: &[f64]| acting.iter().any(|&case| factors[case].abs() > 1.0);
     let (_, combination) = model
@@ -402,9 +402,12 @@ fn counted_from_itself(model: &Model, limit: &Limit) -> Option<Remark> {
     if reading.any(|(index, _)| index != since) {
         return None;
     }
-    let member = &model.members[limit.target.member()];
+    let about = match limit.target.member() {
+        Some(member) => format!("member.{}", model.members[member].name),
+        None => limit.on.to_string(),
+    };
     Some(Remark {
-        about: format!("member.{}", member.name),
+        about,
         text: format!(
             "no combination reads this limit on {} but `{}`, from which it is counted: nothing is checked by it",
             super::word(&limit.kind),

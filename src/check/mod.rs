@@ -79,7 +79,13 @@ pub fn combination(
         if limit.since == Some(index) || !reads(limit, index, &model.combinations[index]) {
             continue;
         }
-        let member = limit.target.member();
+        let Some(member) = limit
+            .target
+            .member()
+            .and_then(|member| model.combinations[index].position(member))
+        else {
+            continue;
+        };
         let reference = match limit.since {
             None => None,
             Some(from) => match since(from) {
@@ -110,12 +116,13 @@ fn judge(case: &Case) -> Option<Finding> {
         LimitKind::Reaction(limit) => reaction::judge(case, &limit),
         LimitKind::Gap { min, max } => gap::judge(case, min, max),
         LimitKind::Bears => bears::judge(case),
+        LimitKind::Slack | LimitKind::Watch(_) | LimitKind::Rotation(_) => None,
     }
 }
 
 /// The key of a limit in the job file.
 pub fn word(kind: &LimitKind) -> Name {
-    static WORDS: LazyLock<[Name; 8]> = LazyLock::new(|| {
+    static WORDS: LazyLock<[Name; 11]> = LazyLock::new(|| {
         [
             "tension",
             "compression",
@@ -125,6 +132,9 @@ pub fn word(kind: &LimitKind) -> Name {
             "reaction",
             "gap",
             "bears",
+            "slack",
+            "watch",
+            "rotation",
         ]
         .map(Name::from)
     });
@@ -137,6 +147,9 @@ pub fn word(kind: &LimitKind) -> Name {
         LimitKind::Reaction(_) => 5,
         LimitKind::Gap { .. } => 6,
         LimitKind::Bears => 7,
+        LimitKind::Slack => 8,
+        LimitKind::Watch(_) => 9,
+        LimitKind::Rotation(_) => 10,
     };
     WORDS[index].clone()
 }
@@ -247,6 +260,7 @@ impl Unit {
             Unit::Pascal => Some(Dimension::Stress),
             Unit::Newton => Some(Dimension::Force),
             Unit::Metre => Some(Dimension::Length),
+            Unit::Radian => Some(Dimension::Angle),
             Unit::None => None,
         }
     }

@@ -39,6 +39,8 @@ pub struct Combination {
     /// The factor on the modulus of every material of the model, 1 where none is written; empty
     /// when there is none at all.
     pub modulus: Vec<f64>,
+    /// The members that are taken out, by their indices, rising.
+    pub without: Vec<usize>,
     /// Its table, or the head of the file for the one called `all`.
     pub place: Place,
 }
@@ -47,5 +49,14 @@ impl Combination {
     /// The factor on the modulus of the material with this index.
     pub fn modulus_factor(&self, material: usize) -> f64 {
         self.modulus.get(material).copied().unwrap_or(1.0)
+    }
+
+    /// Where the result of a member stands among those of this combination, which leaves out what
+    /// it takes out.
+    pub fn position(&self, member: usize) -> Option<usize> {
+        match self.without.binary_search(&member) {
+            Ok(_) => None,
+            Err(before) => Some(member - before),
+        }
     }
 }

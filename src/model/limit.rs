@@ -1,7 +1,7 @@
 //! What is held: one [`Limit`] for each thing, names and shares already resolved.
 
 use super::{Name, Place, Purpose};
-use crate::quantity::{Force, Length, Stress};
+use crate::quantity::{Angle, Force, Length, Stress};
 
 /// Which area a stress stands on.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, serde::Serialize, serde::Deserialize)]
@@ -36,17 +36,26 @@ pub enum Target {
         member: usize,
         station: usize,
     },
+    /// One of the points that a hold holds, by its place in [`super::Hold::points`].
+    Hold {
+        hold: usize,
+        point: usize,
+    },
+    Watch {
+        watch: usize,
+    },
 }
 
 impl Target {
-    /// The member that it belongs to.
-    pub fn member(&self) -> usize {
+    /// The member that it belongs to; `None` for a hold and for a watch.
+    pub fn member(&self) -> Option<usize> {
         match *self {
             Target::Member { member }
             | Target::Segment { member, .. }
             | Target::Layer { member, .. }
             | Target::Support { member, .. }
-            | Target::Station { member, .. } => member,
+            | Target::Station { member, .. } => Some(member),
+            Target::Hold { .. } | Target::Watch { .. } => None,
         }
     }
 }
@@ -91,9 +100,10 @@ pub enum LimitKind {
     Elongation(Bounds<Length>),
     /// Displacement. Target: `Station`.
     Displacement(Bounds<Length>),
-    /// Reaction of a support. Target: `Support`.
+    /// Reaction of a support or a hold; of a hold that answers in more than one direction its size.
+    /// Target: `Support` or `Hold`.
     Reaction(Bounds<Force>),
-    /// What stays open. Target: `Support` with a stop, or `Segment` that is a gap.
+    /// What stays open. Target: `Support` or `Hold` with a stop, or `Segment` that is a gap.
     Gap {
         /// Not less than this.
         min: Option<Length>,
@@ -102,6 +112,12 @@ pub enum LimitKind {
     },
     /// It must have closed. Targets as `Gap`.
     Bears,
+    /// A one-way member must carry. Target: `Member`.
+    Slack,
+    /// A watched movement. Target: `Watch`.
+    Watch(Bounds<Length>),
+    /// A watched rotation. Target: `Watch`.
+    Rotation(Bounds<Angle>),
 }
 
 /// Which combinations a limit reads.
@@ -120,7 +136,8 @@ pub struct Limit {
     pub kind: LimitKind,
     /// Of what.
     pub target: Target,
-    /// `H4`, `H4.shank`, `H4.shank.bars`, `H4.kerb`: what reports call the target.
+    /// `H4`, `H4.shank`, `H4.shank.bars`, `H4.kerb`, the name of a hold or watch: what
+    /// reports call the target.
     pub on: Name,
     /// In which combinations.
     pub reads: Reads,

@@ -1,6 +1,6 @@
 //! A member: its segments, its stations, and how it is held.
 
-use super::{Actions, Name, Place};
+use super::{Actions, Name, Place, Spatial};
 use crate::catalogue::Section;
 use crate::quantity::{
     Angle, Area, Curve, Expansion, ForcePerLength, Length, MassPerLength, ThermodynamicTemperature,
@@ -17,6 +17,10 @@ pub struct Member {
     pub runs: Option<Angle>,
     /// The datum of its readings: its own or the job's.
     pub datum: Option<ThermodynamicTemperature>,
+    /// The points that it reaches between; `None` for a member with supports of its own.
+    pub between: Option<Between>,
+    /// The one way in which it carries; `None` for one that carries both ways.
+    pub carries: Option<Carries>,
     /// Its segments in order from start to end.
     pub segments: Vec<Segment>,
     /// Every cut, in order; the first is the start, the last the end.
@@ -38,8 +42,33 @@ impl Member {
     /// The sine of the angle above level: the share of a weight that acts toward the start.
     /// Exact for members that run up, down or level.
     pub fn rise(&self) -> f64 {
-        self.runs.map_or(0.0, |angle| angle.value.sin())
+        match &self.between {
+            Some(between) => between.rise,
+            None => self.runs.map_or(0.0, |angle| angle.value.sin()),
+        }
     }
+}
+
+/// Where a member between points lies. It has no supports: the points hold it.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct Between {
+    /// Index of the point at its start.
+    pub start: usize,
+    /// Index of the point at its end.
+    pub end: usize,
+    /// The unit vector from start to end.
+    pub direction: Spatial<f64>,
+    /// The sine of its angle above level; exactly ±1 where it is upright. 0 in one coordinate where
+    /// the job does not say which way is up.
+    pub rise: f64,
+}
+
+/// The one way in which a member carries: as a whole it is slack, or parts, the other way.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+#[allow(missing_docs)]
+pub enum Carries {
+    Tension,
+    Compression,
 }
 
 /// A length of a member with one make-up.

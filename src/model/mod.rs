@@ -5,16 +5,24 @@
 //! has no sense, or out of range. `solve`, `proof` and `check` read it and nothing else.
 
 mod action;
+mod assembly;
 mod combination;
 mod limit;
 mod member;
+mod watch;
 
 pub use action::{Actions, FreeStrain, LineLoad, Movement, PointForce, Temperatures, Weight};
+pub use assembly::{
+    Assembly, AssemblyActions, Body, ForceOnBody, ForceOnPoint, Hold, HoldKind, MomentOnBody,
+    MovementOfHold, Point, Spatial, WeightOfBody,
+};
 pub use combination::{Case, Combination, Purpose};
 pub use limit::{AreaUsed, Bounds, Limit, LimitKind, Reads, ShareFactor, Target};
 pub use member::{
-    Gap, Layer, Member, Part, Piece, Segment, SegmentKind, Side, Station, Support, SupportKind,
+    Between, Carries, Gap, Layer, Member, Part, Piece, Segment, SegmentKind, Side, Station,
+    Support, SupportKind,
 };
+pub use watch::{Watch, Watched};
 
 use crate::catalogue::Material;
 use crate::quantity::{ThermodynamicTemperature, Units};
@@ -57,6 +65,10 @@ pub struct Model {
     pub materials: Vec<Material>,
     /// The members in the order of the file.
     pub members: Vec<Member>,
+    /// What members between points share; `None` in a job without points.
+    pub assembly: Option<Assembly>,
+    /// What is watched, in the order of the file.
+    pub watches: Vec<Watch>,
     /// The limits, one for each thing that is held, in the order of the file.
     pub limits: Vec<Limit>,
     /// The places of literals that bear a tolerance, in the order of the file.

@@ -35,6 +35,8 @@ pub use uom::si::f64::{
 
 /// Stress, modulus, strength (Pa).
 pub type Stress = uom::si::f64::Pressure;
+/// Moment (N m).
+pub type Moment = uom::si::f64::Torque;
 /// Density (kg/m³).
 pub type Density = uom::si::f64::MassDensity;
 /// Mass per length (kg/m).

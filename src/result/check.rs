@@ -22,6 +22,8 @@ pub enum Unit {
     Newton,
     #[serde(rename = "m")]
     Metre,
+    #[serde(rename = "rad")]
+    Radian,
     /// A yes-or-no check: demand and limit are 1 for yes and 0 for no.
     #[serde(rename = "1")]
     None,

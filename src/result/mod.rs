@@ -5,10 +5,12 @@
 //! the force that the support puts on the member; a gap is the clearance that remains. What does
 //! not exist is `null`, never 0. Names are added to the format, never renamed.
 
+mod assembly;
 mod check;
 mod document;
 mod member;
 
+pub use assembly::{AssemblyTotals, BodyResult, HoldResult, PointResult, Rotation, WatchResult};
 pub use check::{CheckResult, Envelope, Governing, Unit, Verdict};
 pub use document::{
     Caution, Counts, Document, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Tool,
@@ -34,18 +36,18 @@ pub struct CombinationResult {
     pub factors: BTreeMap<Name, f64>,
     /// Members taken out.
     pub without: Vec<Name>,
-    /// The members in the order of the file.
+    /// The members in the order of the file, without those taken out.
     pub members: Vec<MemberResult>,
     /// Points of an assembly.
-    pub points: Vec<serde_json::Value>,
-    /// Holds of an assembly.
-    pub holds: Vec<serde_json::Value>,
+    pub points: Vec<PointResult>,
+    /// Holds of an assembly, one row for each point of each.
+    pub holds: Vec<HoldResult>,
     /// Bodies of an assembly.
-    pub bodies: Vec<serde_json::Value>,
-    /// Watches of an assembly.
-    pub watches: Vec<serde_json::Value>,
+    pub bodies: Vec<BodyResult>,
+    /// What is watched.
+    pub watches: Vec<WatchResult>,
     /// Sums over the assembly; null in a job without points.
-    pub totals: Option<serde_json::Value>,
+    pub totals: Option<AssemblyTotals>,
     /// How closely the result closes.
     pub residuals: Residuals,
     /// The checks that read this combination.

@@ -50,6 +50,7 @@ impl Combinations {
                     factors: vec![1.0; cases.len()],
                     shown: shown(cases, |_| true),
                     modulus: Vec::new(),
+                    without: Vec::new(),
                     place: 0..0,
                 }],
                 families: vec![(all, None, 0..1)],
@@ -269,6 +270,7 @@ fn multiply_out(
             factors: factors.clone(),
             shown: shown.clone(),
             modulus: modulus.clone(),
+            without: Vec::new(),
             place: combination.place.clone(),
         });
         // On to the next choice, as an odometer turns.

@@ -352,7 +352,10 @@ fn purpose_of(kind: &LimitKind) -> Purpose {
         LimitKind::Elongation(_)
         | LimitKind::Displacement(_)
         | LimitKind::Gap { .. }
-        | LimitKind::Bears => Purpose::Service,
+        | LimitKind::Bears
+        | LimitKind::Slack
+        | LimitKind::Watch(_)
+        | LimitKind::Rotation(_) => Purpose::Service,
     }
 }
 

@@ -228,6 +228,8 @@ fn member<'w, 't>(
             .given()
             .map(|runs| runs.value),
         datum: whole.datum.given().or(job_datum).map(|datum| datum.value),
+        between: None,
+        carries: None,
         segments,
         stations,
         pieces,

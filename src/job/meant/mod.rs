@@ -87,6 +87,8 @@ pub(super) fn model<'t>(job: &Job<'t>, r: &mut Reader<'t>) -> Option<Model> {
             .into_iter()
             .map(|meant| meant.sound.then_some(meant.member))
             .collect::<Option<_>>()?,
+        assembly: None,
+        watches: Vec::new(),
         limits,
         tolerances: std::mem::take(&mut r.tolerances),
         remarks,

@@ -210,6 +210,7 @@ fn unit(unit: Unit) -> &'static str {
         Unit::Pascal => "Pa",
         Unit::Newton => "N",
         Unit::Metre => "m",
+        Unit::Radian => "rad",
         Unit::None => "1",
     }
 }

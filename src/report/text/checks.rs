@@ -334,6 +334,7 @@ pub(super) fn dimension(unit: Unit) -> Option<Dimension> {
         Unit::Pascal => Some(Dimension::Stress),
         Unit::Newton => Some(Dimension::Force),
         Unit::Metre => Some(Dimension::Length),
+        Unit::Radian => Some(Dimension::Angle),
         Unit::None => None,
     }
 }
