@@ -14,6 +14,8 @@ mod quotient;
 mod recover;
 mod restraint;
 mod roots;
+#[allow(dead_code)] // the assembly that puts itself into it comes next
+mod system;
 mod threshold;
 
 pub use threshold::Threshold;
