@@ -29,6 +29,9 @@ pub(in crate::job) fn direct(text: &str) -> Option<Table<'_>> {
 /// The tree as it grows.
 struct Tree<'t> {
     text: &'t str,
+    /// Whether the text has neither backslashes nor control characters but line feeds: what stands
+    /// in quotes and comments then stands for itself.
+    is_plain: bool,
     /// All tables that have been closed.
     root: Table<'t>,
     /// The header whose entries come, `None` above the first.
@@ -66,14 +69,15 @@ impl<'t> Tree<'t> {
     fn new(text: &'t str) -> Self {
         Tree {
             text,
+            is_plain: is_plain(text),
             root: Table::default(),
             header: None,
             path: Vec::new(),
             in_header: false,
             open: Vec::new(),
-            keys: Vec::new(),
-            entries: Vec::new(),
-            values: Vec::new(),
+            keys: Vec::with_capacity(8),
+            entries: Vec::with_capacity(16),
+            values: Vec::with_capacity(8),
             given_up: false,
         }
     }
@@ -221,8 +225,9 @@ impl EventReceiver for Tree<'_> {
     fn scalar(&mut self, span: Span, encoding: Option<Encoding>, error: &mut dyn ErrorSink) {
         let raw = self.raw(span, encoding);
         let place = span.start()..span.end();
-        if encoding == Some(Encoding::BasicString)
-            && let Some(text) = plain(raw.as_str())
+        if self.is_plain
+            && encoding == Some(Encoding::BasicString)
+            && let Some(text) = unquoted(raw.as_str())
         {
             let content = Content::String(Cow::Borrowed(text));
             return self.put(Value { content, place });
@@ -245,11 +250,15 @@ impl EventReceiver for Tree<'_> {
     }
 
     fn comment(&mut self, span: Span, error: &mut dyn ErrorSink) {
-        self.raw(span, None).decode_comment(error);
+        if !self.is_plain {
+            self.raw(span, None).decode_comment(error);
+        }
     }
 
     fn newline(&mut self, span: Span, error: &mut dyn ErrorSink) {
-        self.raw(span, None).decode_newline(error);
+        if !self.is_plain {
+            self.raw(span, None).decode_newline(error);
+        }
     }
 }
 
@@ -332,15 +341,30 @@ fn position(entries: &[Entry<'_>], name: &str) -> Option<usize> {
     entries.iter().rposition(|entry| entry.key.name == name)
 }
 
-/// Whether a key is one that needs no quotes.
-fn is_bare(key: &str) -> bool {
-    let fits = |byte: u8| byte.is_ascii_alphanumeric() || matches!(byte, b'-' | b'_');
-    !key.is_empty() && key.bytes().all(fits)
+/// Whether a text has neither backslashes nor control characters but line feeds. No byte ends the
+/// search, since that way many are looked at at once.
+fn is_plain(text: &str) -> bool {
+    let fits = |byte: u8| (byte >= b' ' && byte != b'\\' && byte != 0x7f) || byte == b'\n';
+    text.bytes().fold(true, |plain, byte| plain & fits(byte))
 }
 
-/// What stands between quotes, where it stands for itself.
-fn plain(quoted: &str) -> Option<&str> {
-    let text = quoted.strip_prefix('"')?.strip_suffix('"')?;
-    let odd = |byte: u8| byte.is_ascii_control() || matches!(byte, b'"' | b'\\');
-    (!text.bytes().any(odd)).then_some(text)
+/// What stands between quotes.
+fn unquoted(text: &str) -> Option<&str> {
+    text.strip_prefix('"')?.strip_suffix('"')
 }
+
+/// Whether a key is one that needs no quotes.
+fn is_bare(key: &str) -> bool {
+    !key.is_empty() && key.bytes().all(|byte| BARE[usize::from(byte)])
+}
+
+/// The bytes of keys without quotes: letters, digits, `-` and `_`.
+const BARE: [bool; 256] = {
+    let mut bare = [false; 256];
+    let mut byte: u8 = 0;
+    while byte < 128 {
+        bare[byte as usize] = byte.is_ascii_alphanumeric() || byte == b'-' || byte == b'_';
+        byte += 1;
+    }
+    bare
+};
