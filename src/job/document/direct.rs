@@ -9,7 +9,7 @@ use toml_parser::parser::{EventReceiver, parse_document};
 use toml_parser::{ErrorSink, ParseError, Raw, Source, Span};
 
 /// A table of more keys is left to `toml`, whose search in it is the quicker one.
-const MOST_KEYS: usize = 256;
+const MOST_KEYS: usize = 1024;
 
 /// What is nested deeper is left to `toml`, which knows where to stop.
 const DEEPEST: usize = 16;
@@ -280,21 +280,20 @@ impl<'t> Table<'t> {
             content: Content::Table(table),
             place: place.clone(),
         };
-        if !is_array {
-            return above.push(key, value);
-        }
         match position(&above.entries, &key.name) {
-            None => {
+            None if is_array => {
                 let content = Content::Array(vec![value]);
                 above.push(key, Value { content, place })
             }
-            Some(at) => match above.entries[at].under_a_header()? {
+            None => above.push(key, value),
+            Some(at) if is_array => match above.entries[at].under_a_header()? {
                 Content::Array(tables) => {
                     tables.push(value);
                     Some(())
                 }
                 _ => None,
             },
+            Some(_) => None,
         }
     }
 
@@ -321,10 +320,10 @@ impl<'t> Table<'t> {
         }
     }
 
-    /// A new entry; none where the key is there, or too many are.
+    /// Adds a key that is not there; none where too many are.
     fn push(&mut self, key: Key<'t>, value: Value<'t>) -> Option<()> {
-        let is_new = self.entries.len() < MOST_KEYS && position(&self.entries, &key.name).is_none();
-        is_new.then(|| self.entries.push(Entry { key, value }))
+        let fits = self.entries.len() < MOST_KEYS;
+        fits.then(|| self.entries.push(Entry { key, value }))
     }
 }
 

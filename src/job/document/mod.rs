@@ -8,7 +8,7 @@
 mod direct;
 mod recovered;
 #[cfg(test)]
-mod tests;
+pub(super) mod tests;
 
 use crate::model::Place;
 use std::borrow::Cow;
