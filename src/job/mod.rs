@@ -37,7 +37,7 @@ const LARGE: usize = 1 << 22;
 pub fn read(text: &str) -> Result<Model, Vec<Problem>> {
     let (table, errors) = match document::direct(text) {
         Some(table) => (table, Vec::new()),
-        None => recovered(text)?,
+        None => by_toml(text)?,
     };
     let mut reader = written::Reader::new(text);
     let job = written::Job::read(&table, &mut reader);
@@ -53,7 +53,7 @@ pub fn read(text: &str) -> Result<Model, Vec<Problem>> {
 }
 
 /// The tree of a text that is at fault or unusual, with the faults of its syntax.
-fn recovered(text: &str) -> Result<(Table<'_>, Vec<toml::de::Error>), Vec<Problem>> {
+fn by_toml(text: &str) -> Result<(Table<'_>, Vec<toml::de::Error>), Vec<Problem>> {
     let (table, errors) = if text.len() <= LARGE {
         DeTable::parse_recoverable(text)
     } else {

@@ -1,8 +1,8 @@
 //! The text of a job as a tree of TOML values, each key and value with its place.
 //!
-//! Nearly every job is read the [direct] way: what the parser of `toml` sees goes straight into
+//! Nearly every job is read the [direct](direct()) way: what the parser of `toml` sees goes straight into
 //! the tree. As soon as a text is at fault, or merely unusual, `toml` reads the whole of it into its
-//! own table, and the tree is [made of that](recovered): it knows all faults of a text, and what
+//! own table, and the tree is [made of that](recovered()): it knows all faults of a text, and what
 //! can be read of it all the same. Both ways make the same tree of the same text.
 
 mod direct;
