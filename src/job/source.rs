@@ -139,7 +139,7 @@ pub fn decode(bytes: &[u8]) -> Result<Cow<'_, str>, Box<Undecoded>> {
             }));
         }
     };
-    if let Some(at) = bytes.iter().position(|&b| b == 0) {
+    if let Some(at) = text.find('\0') {
         return Err(Box::new(Undecoded {
             text: text.to_owned(),
             problem: Problem::new(

@@ -5,6 +5,7 @@ use crate::job::nearest::remedy;
 use crate::job::written::combination::{self as written, Factors, purpose_named};
 use crate::job::written::{Entry, Job, Written};
 use crate::model::{Case, Combination, Name, Purpose, Remark};
+use std::borrow::Cow;
 use std::ops::Range;
 
 /// A job may have as many combinations, lists multiplied out.
@@ -291,12 +292,13 @@ fn multiply_out(
 
 /// What a choice adds to the name of its combination: `/live=0`, the factor as its shortest decimal.
 fn chosen(case: &str, factor: f64) -> String {
-    // Most factors are small whole numbers, which are written sooner as such.
-    if factor.fract() == 0.0 && factor.abs() < 1e6 {
-        format!("/{case}={}", factor as i64)
-    } else {
-        format!("/{case}={factor}")
-    }
+    // Most factors are 0 or 1, and formatting is dear.
+    let factor = match factor {
+        0.0 => Cow::Borrowed("0"),
+        1.0 => Cow::Borrowed("1"),
+        _ => Cow::Owned(factor.to_string()),
+    };
+    ["/", case, "=", &factor].concat()
 }
 
 /// The factor on the modulus of every used material; empty where none is written.

@@ -1,7 +1,7 @@
 //! Jobs that were damaged: whatever the text, reading ends in a model or in located problems.
 
 use super::good::{SMALL, WHOLE};
-use crate::job::{Source, read, render};
+use crate::job::{Source, document, read, render};
 use proptest::prelude::*;
 
 /// Bits of text that a damaged job may hold.
@@ -68,8 +68,10 @@ fn damaged(text: &str, cuts: &[(usize, usize, usize)]) -> String {
     text.into_iter().collect()
 }
 
-/// Reads a text and draws what is said of it: every place must lie in the text, in order.
+/// Reads a text and draws what is said of it: every place must lie in the text, in order. Both ways
+/// of reading must agree on it.
 fn ends_well(text: &str) {
+    document::tests::is_direct(text);
     let Err(problems) = read(text) else {
         return;
     };

@@ -2,9 +2,9 @@
 
 use super::fields::{Entry, Fields, Keys, Value, Written, named};
 use super::{Reader, value};
+use crate::job::document::Content;
 use crate::job::nearest::remedy;
 use crate::model::{Place, Purpose};
-use toml::de::DeValue;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "combination",
@@ -89,7 +89,7 @@ impl<'t> Combination<'t> {
 }
 
 fn factor<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Factors> {
-    let DeValue::Array(list) = value.get_ref() else {
+    let Content::Array(list) = value.get_ref() else {
         return value::number(value, r).map(Factors::One);
     };
     if list.is_empty() {

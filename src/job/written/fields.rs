@@ -2,13 +2,12 @@
 
 use super::Reader;
 use super::later::later;
+use crate::job::document::{Content, Table};
 use crate::job::nearest::{nearest, remedy};
 use crate::model::Place;
-use toml::Spanned;
-use toml::de::{DeArray, DeTable, DeValue};
 
 /// A value with its place.
-pub(crate) type Value<'t> = Spanned<DeValue<'t>>;
+pub(crate) use crate::job::document::Value;
 
 /// What a kind of table is called in messages, and the keys that it may have.
 #[derive(Debug, Clone, Copy)]
@@ -69,7 +68,7 @@ impl<T> Entry<T> {
 
 /// One table, asked key by key. What nobody asked for is a misspelling.
 pub(crate) struct Fields<'t> {
-    table: &'t DeTable<'t>,
+    table: &'t Table<'t>,
     /// The table: its header, or all of an inline one.
     pub(crate) place: Place,
     known: Keys,
@@ -80,7 +79,7 @@ impl<'t> Fields<'t> {
     /// The table that a value is.
     pub(crate) fn of(value: &'t Value<'t>, known: Keys, r: &mut Reader<'t>) -> Option<Self> {
         match value.get_ref() {
-            DeValue::Table(table) => Some(Self::new(table, value.span(), known)),
+            Content::Table(table) => Some(Self::new(table, value.span(), known)),
             other => {
                 let article = article(known.table);
                 r.problems.say(
@@ -98,7 +97,7 @@ impl<'t> Fields<'t> {
     }
 
     /// A table at a place.
-    pub(crate) fn new(table: &'t DeTable<'t>, place: Place, known: Keys) -> Self {
+    pub(crate) fn new(table: &'t Table<'t>, place: Place, known: Keys) -> Self {
         Fields {
             table,
             place,
@@ -180,7 +179,7 @@ impl<'t> Fields<'t> {
             return;
         }
         for key in self.table.keys() {
-            let name = key.get_ref().as_ref();
+            let name = key.get_ref();
             if self.known.keys.contains(&name) {
                 continue;
             }
@@ -221,19 +220,15 @@ pub(crate) fn unknown_key(
 }
 
 /// The entries of a table whose keys are names, in the order of the file.
-pub(crate) fn in_order<'t>(table: &'t DeTable<'t>) -> Vec<(Written<&'t str>, &'t Value<'t>)> {
-    let mut entries: Vec<_> = table
-        .iter()
-        .map(|(key, value)| {
-            let name = Written {
-                value: key.get_ref().as_ref(),
-                place: key.span(),
-            };
-            (name, value)
-        })
-        .collect();
-    entries.sort_by_key(|(name, _)| name.place.start);
-    entries
+pub(crate) fn in_order<'t>(table: &'t Table<'t>) -> Vec<(Written<&'t str>, &'t Value<'t>)> {
+    let entries = table.iter().map(|(key, value)| {
+        let name = Written {
+            value: key.get_ref(),
+            place: key.span(),
+        };
+        (name, value)
+    });
+    entries.collect()
 }
 
 /// A table under a key whose own keys are names: `[case]`, `[member]`, `factors`.
@@ -244,7 +239,7 @@ pub(crate) fn named<'t>(
     r: &mut Reader<'t>,
 ) -> Option<Vec<(Written<&'t str>, &'t Value<'t>)>> {
     match value.get_ref() {
-        DeValue::Table(table) => Some(in_order(table)),
+        Content::Table(table) => Some(in_order(table)),
         other => {
             let message = format!("`{what}` is a table by name, not {}", kind_of(other));
             r.problems.say(&value.span(), message, help);
@@ -258,9 +253,9 @@ pub(crate) fn list<'t>(
     value: &'t Value<'t>,
     what: &str,
     r: &mut Reader<'t>,
-) -> Option<&'t DeArray<'t>> {
+) -> Option<&'t [Value<'t>]> {
     match value.get_ref() {
-        DeValue::Array(list) => Some(list),
+        Content::Array(list) => Some(list),
         other => {
             let message = format!("`{what}` is a list of tables, not {}", kind_of(other));
             let help = format!("write `{what} = [{{ … }}]`, or a header `[[… .{what}]]` for each");
@@ -271,14 +266,14 @@ pub(crate) fn list<'t>(
 }
 
 /// What a value is, with its article.
-pub(crate) fn kind_of(value: &DeValue<'_>) -> &'static str {
+pub(crate) fn kind_of(value: &Content<'_>) -> &'static str {
     match value {
-        DeValue::String(_) => "a text",
-        DeValue::Integer(_) | DeValue::Float(_) => "a bare number",
-        DeValue::Boolean(_) => "true or false",
-        DeValue::Datetime(_) => "a date",
-        DeValue::Array(_) => "a list",
-        DeValue::Table(_) => "a table",
+        Content::String(_) => "a text",
+        Content::Number(_) => "a bare number",
+        Content::Boolean(_) => "true or false",
+        Content::Datetime(_) => "a date",
+        Content::Array(_) => "a list",
+        Content::Table(_) => "a table",
     }
 }
 

@@ -2,10 +2,10 @@
 
 use super::fields::{Entry, Fields, Keys, Value, kind_of};
 use super::{Reader, value};
+use crate::job::document::Content;
 use crate::job::nearest::remedy;
 use crate::quantity::{ThermodynamicTemperature, Units};
 use std::borrow::Cow;
-use toml::de::DeValue;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "job",
@@ -55,8 +55,8 @@ impl<'t> Heading<'t> {
 /// A date as a text, or as TOML writes one.
 fn date<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Cow<'t, str>> {
     match value.get_ref() {
-        DeValue::String(text) => Some(Cow::Borrowed(text.as_ref())),
-        DeValue::Datetime(date) => Some(Cow::Owned(date.to_string())),
+        Content::String(text) => Some(Cow::Borrowed(text.as_ref())),
+        Content::Datetime(date) => Some(Cow::Owned(date.to_string())),
         other => {
             let message = format!("a date is expected here, not {}", kind_of(other));
             let help = "write it in quotes, or as year-month-day without them";

@@ -3,10 +3,10 @@
 use super::fields::{Entry, Fields, Keys, Value, Written, unknown_key};
 use super::station::{Station, station};
 use super::{Reader, value};
+use crate::job::document::{Content, Key};
 use crate::job::nearest::remedy;
 use crate::model::AreaUsed;
 use crate::quantity::{Force, Length, MovementBound, StressLimit};
-use toml::de::DeValue;
 
 const COMMON: [&str; 3] = ["in", "since", "source"];
 pub(crate) const OF_MEMBER: Keys = Keys {
@@ -129,7 +129,7 @@ impl<'t> Limits<'t> {
         stands: Stands,
         r: &mut Reader<'t>,
     ) -> Option<Vec<Self>> {
-        let DeValue::Array(tables) = value.get_ref() else {
+        let Content::Array(tables) = value.get_ref() else {
             return Limits::table(value, stands, r).map(|limits| vec![limits]);
         };
         let mut all = Vec::with_capacity(tables.len());
@@ -184,11 +184,10 @@ impl<'t> Limits<'t> {
             r.problems.say(&place, message, "take it out");
         }
         if let Some(table) = value.get_ref().as_table()
-            && table.keys().all(|key| {
-                [&COMMON[..], &["area"]]
-                    .concat()
-                    .contains(&key.get_ref().as_ref())
-            })
+            && table
+                .keys()
+                .map(Key::get_ref)
+                .all(|key| COMMON.contains(&key) || key == "area")
             && !(limits.area.is_written() || limits.since.is_written())
         {
             let message = "this limit holds nothing";
@@ -209,7 +208,7 @@ fn elsewhere<'t>(fields: &Fields<'t>, value: &'t Value<'t>, known: Keys, r: &mut
     };
     debug_assert_eq!(fields.place, value.span());
     for key in table.keys() {
-        let name = key.get_ref().as_ref();
+        let name = key.get_ref();
         if known.keys.contains(&name) {
             continue;
         }
@@ -240,13 +239,13 @@ fn names<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Vec<Written<&'t
         Some(())
     };
     match value.get_ref() {
-        DeValue::Array(list) if list.is_empty() => {
+        Content::Array(list) if list.is_empty() => {
             let message = "`in` names nothing";
             let help = "name combinations or purposes, or leave it out";
             r.problems.say(&value.span(), message, help);
             return None;
         }
-        DeValue::Array(list) => {
+        Content::Array(list) => {
             let mut sound = true;
             for value in list.iter() {
                 sound &= add(value, r).is_some();
@@ -266,7 +265,7 @@ fn bound<'t, T>(
     read: impl Fn(&'t Value<'t>, &mut Reader<'t>) -> Option<T>,
     size: impl Fn(&T) -> f64,
 ) -> Option<Bound<T>> {
-    if let DeValue::Array(_) = value.get_ref() {
+    if let Content::Array(_) = value.get_ref() {
         let [lower, upper] = value::pair(value, r)?;
         let (lower, upper) = (read(lower, r), read(upper, r));
         let (lower, upper) = (lower?, upper?);
@@ -312,7 +311,7 @@ fn displacements<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Vec<Dis
         }
     };
     match value.get_ref() {
-        DeValue::Array(list) => Some(list.iter().filter_map(|value| one(value, r)).collect()),
+        Content::Array(list) => Some(list.iter().filter_map(|value| one(value, r)).collect()),
         _ => one(value, r).map(|one| vec![one]),
     }
 }

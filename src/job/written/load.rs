@@ -4,11 +4,11 @@ use super::fields::{Entry, Fields, Keys, Value, Written, in_order};
 use super::station::{Station, station};
 use super::{Reader, value};
 use crate::catalogue::section::Along;
+use crate::job::document::Content;
 use crate::model::Place;
 use crate::quantity::{
     Force, ForcePerLength, Length, Ratio, TemperatureInterval, ThermodynamicTemperature,
 };
-use toml::de::DeValue;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "load",
@@ -206,7 +206,7 @@ fn by_case<'t, T>(
     r: &mut Reader<'t>,
     read: impl Fn(&'t Value<'t>, &mut Reader<'t>) -> Option<T>,
 ) -> Option<ByCase<'t, T>> {
-    let DeValue::Table(table) = value.get_ref() else {
+    let Content::Table(table) = value.get_ref() else {
         let place = value.span();
         return read(value, r).map(|value| ByCase::One(Written { value, place }));
     };

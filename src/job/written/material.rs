@@ -2,9 +2,9 @@
 
 use super::fields::{Entry, Fields, Keys, Value, Written, list};
 use super::{Reader, value};
+use crate::job::document::Content;
 use crate::model::Place;
 use crate::quantity::{Density, Expansion, Length, Stress, ThermodynamicTemperature};
-use toml::de::DeValue;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "material",
@@ -106,7 +106,7 @@ fn yield_by_thickness<'t>(
     r: &mut Reader<'t>,
 ) -> Option<Vec<(Option<Length>, Stress)>> {
     let rows = match value.get_ref() {
-        DeValue::Array(rows) if rows.is_empty() => {
+        Content::Array(rows) if rows.is_empty() => {
             let message = "this table of yield strengths is empty";
             let help = "write rows of a thickness and a strength: `[[\"16 mm\", \"355 MPa\"]]`";
             r.problems.say(&value.span(), message, help);

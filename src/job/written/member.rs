@@ -6,10 +6,10 @@ use super::load::Load;
 use super::segment::Segment;
 use super::support::Support;
 use super::{Reader, value};
+use crate::job::document::Content;
 use crate::model::Place;
 use crate::quantity::{self, Angle, ThermodynamicTemperature};
 use std::f64::consts::FRAC_PI_2;
-use toml::de::DeValue;
 
 /// The forms of a direction, for messages.
 const DIRECTIONS: &str =
@@ -163,7 +163,7 @@ fn fixed<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<()> {
 
 /// The direction from start to end as an angle above level.
 fn runs<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Angle> {
-    let DeValue::String(text) = value.get_ref() else {
+    let Content::String(text) = value.get_ref() else {
         let message = format!(
             "a direction is expected here, not {}",
             kind_of(value.get_ref())

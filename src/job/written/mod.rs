@@ -20,11 +20,11 @@ mod value;
 pub(crate) use fields::{Entry, Written};
 pub(crate) use load::ByCase;
 
+use super::document::Table;
 use super::problem::Problems;
 use crate::model::Place;
 use crate::quantity::Literal;
 use fields::{Fields, Keys, Value, named};
-use toml::de::DeTable;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "job file",
@@ -111,7 +111,7 @@ pub(crate) struct Job<'t> {
 }
 
 impl<'t> Job<'t> {
-    pub(crate) fn read(table: &'t DeTable<'t>, r: &mut Reader<'t>) -> Self {
+    pub(crate) fn read(table: &'t Table<'t>, r: &mut Reader<'t>) -> Self {
         let mut fields = Fields::new(table, 0..0, KEYS);
         let heading = fields
             .get("job")

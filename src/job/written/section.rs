@@ -9,9 +9,9 @@ use crate::catalogue::section::{
     Thread, Tube,
 };
 use crate::catalogue::{Section, Shape};
+use crate::job::document::Content;
 use crate::job::nearest::remedy;
 use crate::quantity::{Length, Measure};
-use toml::de::DeValue;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "section",
@@ -87,7 +87,7 @@ pub(super) fn section<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Se
     }
     let has_others = value.get_ref().as_table().is_some_and(|table| {
         let strange = |key: &str| !KEYS.keys.contains(&key);
-        table.keys().any(|key| strange(key.get_ref().as_ref()))
+        table.keys().any(|key| strange(key.get_ref()))
     });
     let place = fields.place.clone();
     fields.finish(r);
@@ -246,7 +246,7 @@ fn thread<'t>(
 
 /// The table of a rolled shape; its designation is for a later version.
 fn rolled<'t>(value: &'t Value<'t>, known: Keys, r: &mut Reader<'t>) -> Option<Fields<'t>> {
-    if let DeValue::String(designation) = value.get_ref() {
+    if let Content::String(designation) = value.get_ref() {
         let about = format!(
             "rolled shapes by designation; write `{}` with its dimensions",
             known.table

@@ -7,9 +7,9 @@ use super::section::{dimension, section};
 use super::{Reader, value};
 use crate::catalogue::Section;
 use crate::catalogue::section::Along;
+use crate::job::document::Content;
 use crate::model::Place;
 use crate::quantity::{Area, Dimension, Expansion, ForcePerLength, Length, MassPerLength};
-use toml::de::DeValue;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "segment",
@@ -201,7 +201,7 @@ impl<'t> Layer<'t> {
 
 fn length<'t>(fields: &mut Fields<'t>, r: &mut Reader<'t>) -> Entry<Length> {
     fields.required("length", "\"2.85 m\"", r, |value, r| {
-        if matches!(value.get_ref(), DeValue::String(text) if text == "rest") {
+        if matches!(value.get_ref(), Content::String(text) if text == "rest") {
             let about = "members between points; write the length itself";
             let (message, help) = refusal("rest", about);
             r.problems.say(&value.span(), message, help);

@@ -2,8 +2,8 @@
 
 use super::fields::{Value, kind_of};
 use super::{Reader, value};
+use crate::job::document::Content;
 use crate::quantity::{self, Length};
-use toml::de::DeValue;
 
 /// The forms of a station, for messages.
 const STATIONS: &str = "write \"start\", \"end\", \"<segment>.start\", \"<segment>.end\", or a \
@@ -24,7 +24,7 @@ pub(crate) enum Station<'t> {
 
 /// A station; a name that no segment has is found later.
 pub(crate) fn station<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Station<'t>> {
-    let DeValue::String(text) = value.get_ref() else {
+    let Content::String(text) = value.get_ref() else {
         let message = format!(
             "a station is expected here, not {}",
             kind_of(value.get_ref())

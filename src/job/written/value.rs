@@ -3,17 +3,17 @@
 use super::Reader;
 use super::fields::{Value, kind_of};
 use crate::catalogue::section::Along;
+use crate::job::document::Content;
 use crate::model::Place;
 use crate::quantity::{
     self, Dimension, Literal, LiteralError, Measure, MovementBound, StressLimit,
     TemperatureInterval, ThermodynamicTemperature,
 };
-use toml::de::DeValue;
 
 /// A text.
 pub(crate) fn text<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<&'t str> {
     match value.get_ref() {
-        DeValue::String(text) => Some(text.as_ref()),
+        Content::String(text) => Some(text.as_ref()),
         other => {
             let message = format!("a text is expected here, not {}", kind_of(other));
             r.problems.say(&value.span(), message, "write it in quotes");
@@ -25,7 +25,7 @@ pub(crate) fn text<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<&'t s
 /// `true` or `false`.
 pub(crate) fn boolean<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<bool> {
     match value.get_ref() {
-        DeValue::Boolean(value) => Some(*value),
+        Content::Boolean(value) => Some(*value),
         other => {
             let message = format!("true or false is expected here, not {}", kind_of(other));
             let help = "write `true` or `false` without quotes";
@@ -38,11 +38,7 @@ pub(crate) fn boolean<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<bo
 /// A number without a dimension: finite.
 pub(crate) fn number<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<f64> {
     let number = match value.get_ref() {
-        DeValue::Integer(integer) if integer.radix() == 10 => integer.as_str().parse().ok(),
-        DeValue::Integer(integer) => i64::from_str_radix(integer.as_str(), integer.radix())
-            .ok()
-            .map(|integer| integer as f64),
-        DeValue::Float(float) => float.as_str().parse().ok(),
+        Content::Number(number) => *number,
         other => {
             let message = format!("a bare number is expected here, not {}", kind_of(other));
             let help = "write it without quotes and without a unit, such as `1.5`";
@@ -50,13 +46,13 @@ pub(crate) fn number<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<f64
             return None;
         }
     };
-    let finite = number.filter(|number: &f64| number.is_finite());
-    if finite.is_none() {
+    if !number.is_finite() {
         let message = "this is no finite number";
         let help = "write a finite number, such as `1.5`";
         r.problems.say(&value.span(), message, help);
+        return None;
     }
-    finite
+    Some(number)
 }
 
 /// A literal of `Q`.
@@ -125,7 +121,7 @@ pub(crate) fn reading<'t>(
 /// A strain: a bare number, or a literal.
 pub(crate) fn strain<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<quantity::Ratio> {
     match value.get_ref() {
-        DeValue::Integer(_) | DeValue::Float(_) => number(value, r).map(quantity::from_si),
+        Content::Number(_) => number(value, r).map(quantity::from_si),
         _ => quantity(value, r),
     }
 }
@@ -166,12 +162,7 @@ pub(crate) fn movement_bound<'t>(
 
 /// Whether a value is a bare 0.
 pub(crate) fn is_zero(value: &Value<'_>) -> bool {
-    let text = match value.get_ref() {
-        DeValue::Integer(integer) => integer.as_str(),
-        DeValue::Float(float) => float.as_str(),
-        _ => return false,
-    };
-    text.parse() == Ok(0.0)
+    matches!(value.get_ref(), Content::Number(0.0))
 }
 
 fn nominal<Q: Copy>(value: Q) -> Literal<Q> {
@@ -188,7 +179,7 @@ pub(crate) fn along<'t, Q: Copy>(
     read: impl Fn(&'t Value<'t>, &mut Reader<'t>) -> Option<Q>,
 ) -> impl Fn(&'t Value<'t>, &mut Reader<'t>) -> Option<Along<Q>> {
     move |value, r| match value.get_ref() {
-        DeValue::Array(_) => {
+        Content::Array(_) => {
             let [start, end] = pair(value, r)?;
             let (start, end) = (read(start, r), read(end, r));
             Some(Along {
@@ -206,7 +197,7 @@ pub(crate) fn along<'t, Q: Copy>(
 /// The two values of a list of two.
 pub(crate) fn pair<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<[&'t Value<'t>; 2]> {
     let list = match value.get_ref() {
-        DeValue::Array(list) => list,
+        Content::Array(list) => list,
         other => {
             let message = format!("a pair is expected here, not {}", kind_of(other));
             let help = "write two values in [ ], with a comma between";
@@ -234,7 +225,7 @@ fn literal<'t, T>(
     read: impl FnOnce(&str) -> Result<T, LiteralError>,
 ) -> Option<T> {
     match value.get_ref() {
-        DeValue::String(text) => match read(text) {
+        Content::String(text) => match read(text) {
             Ok(literal) => Some(literal),
             Err(error) => {
                 let place = inside(&error.at, text, &value.span(), r.text);
@@ -250,7 +241,7 @@ fn literal<'t, T>(
             );
             let example = dimension.example();
             let help = match other {
-                DeValue::Integer(_) | DeValue::Float(_) => format!(
+                Content::Number(_) => format!(
                     "write it in quotes with its unit, such as \"{example}\"; units are {}",
                     dimension.accepted()
                 ),
