@@ -9,7 +9,7 @@ use crate::result::{
     Caution, CombinationResult, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Residuals,
     Verdict, YieldRow,
 };
-use crate::solve::{self, Solution, SolveError, Stiffness, Threshold};
+use crate::solve::{self, Solution, SolveError, Stiffness, Threshold, Workspace};
 
 /// How many errors a result holds; the rest are counted.
 const ERRORS_KEPT: usize = 1000;
@@ -203,6 +203,7 @@ struct Solved {
     zeros: Vec<Vec<Threshold>>,
     problems: Vec<Problem>,
     remarks: Vec<Remark>,
+    workspace: Workspace,
 }
 
 impl Solved {
@@ -224,9 +225,13 @@ impl Solved {
         for (at, member) in model.members.iter().enumerate() {
             let place = &member.place;
             let solution = match stiffness {
-                Some(stiffness) if combination.modulus.is_empty() => {
-                    solve::member_of(model, member, combination, &stiffness[at])
-                }
+                Some(stiffness) if combination.modulus.is_empty() => solve::member_of(
+                    model,
+                    member,
+                    combination,
+                    &stiffness[at],
+                    &mut self.workspace,
+                ),
                 _ => solve::member(model, member, combination),
             };
             match solution {

@@ -1,31 +1,23 @@
 //! How much of a member's free expansion its supports keep back.
 
-use super::Prepared;
-use super::chain::{Chain, Link, Solved};
+use super::chain::Solved;
 use super::deformation::PieceDeformation;
-use super::loading::Loading;
+use super::{Prepared, Settled};
 use crate::model::Member;
-use crate::quantity::{Curve, Flexibility, Force, Length};
+use crate::quantity::{Flexibility, Force, Length};
 
 /// Share of full restraint: the mean over the length of N less the N of the same combination
 /// without its temperature, over that of the member held rigidly at both ends,
 /// `−∫αΔT dx / ∫dx/EA`. `None` where nothing would expand, and where a point or an unsolvable
 /// combination without temperature leaves it without sense.
+///
+/// The temperature is taken out of the prepared chain, and `cold` is filled with what is left.
 pub(super) fn share(
     member: &Member,
-    loading: &Loading,
-    prepared: &Prepared,
+    prepared: &mut Prepared,
     solved: &Solved,
+    cold: &mut Settled,
 ) -> Option<f64> {
-    let acts = |strain: &Curve<crate::quantity::Ratio>| {
-        strain
-            .coefficients()
-            .iter()
-            .any(|strain| strain.value != 0.0)
-    };
-    if !loading.layers.all.iter().any(|layer| acts(&layer.thermal)) {
-        return None;
-    }
     let pieces = || prepared.pieces.iter().flatten();
     let expansion = pieces().fold(Length::default(), |sum, piece| sum + piece.thermal);
     let size = pieces().fold(Length::default(), |sum, piece| sum + piece.thermal.abs());
@@ -47,47 +39,19 @@ pub(super) fn share(
             }
         });
     let held = -(expansion / flexibility);
-    let (without, _) = cold(prepared).settle().ok()?;
-    let mean = mean_force(member, prepared, solved) - mean_force(member, prepared, &without);
-    // Adding 0 turns a negative zero into a plain one.
-    Some((mean / held).value + 0.0)
-}
-
-/// The same chain with nothing of the temperature in its links.
-fn cold(prepared: &Prepared) -> Chain {
-    let cool = |(link, piece): (&Link, &Option<PieceDeformation>)| {
-        let thermal = piece
+    let pieces = prepared.pieces.iter();
+    for (link, piece) in prepared.chain.links.iter_mut().zip(pieces) {
+        link.free -= piece
             .as_ref()
             .map_or(Length::default(), |piece| piece.thermal);
-        Link {
-            free: link.free - thermal,
-            ..*link
-        }
-    };
-    Chain {
-        loads: prepared.chain.loads.clone(),
-        links: prepared
-            .chain
-            .links
-            .iter()
-            .zip(&prepared.pieces)
-            .map(cool)
-            .collect(),
-        holds: prepared.chain.holds.clone(),
-        zero: prepared.chain.zero,
     }
-}
-
-/// `∫N dx / L`.
-fn mean_force(member: &Member, prepared: &Prepared, solved: &Solved) -> Force {
-    let total = member.length();
+    prepared.chain.settle(cold).ok()?;
+    // Along a piece both forces fall by the same line load: they differ alike all along it.
     let mut mean = Force::default();
-    for (index, (piece, deformation)) in member.pieces.iter().zip(&prepared.pieces).enumerate() {
-        let force = match deformation {
-            Some(deformation) => deformation.force(solved.after[index], solved.before[index + 1]),
-            None => Curve::constant(solved.after[index]),
-        };
-        mean += force.mean() * (piece.length / total).value;
+    for (index, piece) in member.pieces.iter().enumerate() {
+        let kept_back = solved.after[index] - cold.solved.after[index];
+        mean += kept_back * (piece.length / member.length()).value;
     }
-    mean
+    // Adding 0 turns a negative zero into a plain one.
+    Some((mean / held).value + 0.0)
 }

@@ -9,7 +9,7 @@ use crate::result::{LayerResult, SegmentResult};
 use crate::solve::SolveError;
 use crate::solve::deformation::{Elongation, PieceDeformation};
 use crate::solve::loading::pieces_of;
-use crate::solve::quotient::{Extreme, Quotient, Unbounded};
+use crate::solve::quotient::{Extreme, Unbounded, extremes};
 
 /// What is gathered of a segment while its pieces are gone through.
 struct Gathered {
@@ -87,9 +87,7 @@ impl Recovered<'_> {
         };
         let force = deformation.force(start, end);
         let one: Curve<Ratio> = Curve::constant(from_si(1.0));
-        gathered
-            .force
-            .take(Quotient::new(force, one)?.extremes(), from, length);
+        gathered.force.take(extremes(&force, &one)?, from, length);
         gathered.elongation.force += deformation.stretch(&force)?;
         gathered.elongation.temperature += deformation.thermal;
         gathered.elongation.misfit += deformation.imposed;
