@@ -82,7 +82,7 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         units: model.units,
         ..Style::default()
     };
-    let mut solved = Solved::default();
+    let mut solved = Solved::with_room_for(model.combinations.len());
     let plain = model
         .combinations
         .iter()
@@ -184,14 +184,19 @@ fn lines_of(text: &str, places: impl Iterator<Item = usize>) -> Vec<usize> {
         if place < at {
             (at, line) = (0, 1);
         }
-        line += text.as_bytes()[at..place]
-            .iter()
-            .filter(|&&byte| byte == b'\n')
-            .count();
+        line += breaks_in(&text.as_bytes()[at..place]);
         at = place;
         line
     };
     places.map(line_at).collect()
+}
+
+/// How many line breaks there are. Counted by parts whose count fits a byte, which the compiler
+/// turns into comparisons of many bytes at a time.
+fn breaks_in(text: &[u8]) -> usize {
+    let breaks = |part: &[u8]| -> u8 { part.iter().map(|&byte| u8::from(byte == b'\n')).sum() };
+    let parts = text.chunks(usize::from(u8::MAX));
+    parts.map(|part| usize::from(breaks(part))).sum()
 }
 
 /// What the combinations came to; one that cannot be solved is a problem and has no result.
@@ -207,6 +212,15 @@ struct Solved {
 }
 
 impl Solved {
+    fn with_room_for(combinations: usize) -> Self {
+        Solved {
+            indices: Vec::with_capacity(combinations),
+            results: Vec::with_capacity(combinations),
+            zeros: Vec::with_capacity(combinations),
+            ..Self::default()
+        }
+    }
+
     /// `stiffness` is that of the members in combinations without factors on moduli.
     fn combination(
         &mut self,

@@ -66,7 +66,8 @@ pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
     }
     // One literal may limit many segments: it is said once.
     let mut said = HashSet::new();
-    for limit in &model.limits {
+    let may_warn = |limit: &&Limit| limit.since.is_some() || small_share(limit).is_some();
+    for limit in model.limits.iter().filter(may_warn) {
         if said.insert(limit.place.start) {
             remarks.extend(factored_share(model, limit));
             remarks.extend(counted_from_itself(model, limit));
@@ -341,16 +342,19 @@ impl Look<'_> {
     }
 }
 
+/// The share of a strength that a limit is, where it is so small that it holds a safety factor.
+fn small_share(limit: &Limit) -> Option<f64> {
+    match limit.kind {
+        LimitKind::Tension { share, .. } | LimitKind::Compression { share, .. } => share
+            .map(|ShareFactor(share)| share)
+            .filter(|&share| share < HOLDS_A_SAFETY_FACTOR),
+        _ => None,
+    }
+}
+
 /// A share of a strength that already holds a safety factor, read with factored loads.
 fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
-    let (LimitKind::Tension { share, .. } | LimitKind::Compression { share, .. }) = limit.kind
-    else {
-        return None;
-    };
-    let ShareFactor(share) = share?;
-    if share >= HOLDS_A_SAFETY_FACTOR {
-        return None;
-    }
+    let share = small_share(limit)?;
     let member = &model.members[limit.target.member()];
     let acting = cases_on(member);
     let factored = |factors: &[f64]| acting.iter().any(|&case| factors[case].abs() > 1.0);

@@ -73,7 +73,7 @@ pub fn combination(
     all: &[CombinationResult],
     lines: &[usize],
 ) -> Vec<CheckResult> {
-    let mut checks = Vec::new();
+    let mut checks = Vec::with_capacity(model.limits.len());
     for (limit, &line) in model.limits.iter().zip(lines) {
         // A movement counted from this very combination is nothing to check.
         if limit.since == Some(index) || !reads(limit, index, &model.combinations[index]) {

@@ -133,10 +133,12 @@ impl Loading {
             let line = Curve::linear(action.start, action.end) * factor(action.case);
             self.lines[action.piece] = self.lines[action.piece] + line;
         }
-        for action in &actions.weights {
-            let times = action.number * factor(action.case);
-            if times != 0.0 {
-                self.add_weight(model, member, action.segment, action.layer, times);
+        if !actions.weights.is_empty() {
+            // On a member that rises, weight acts toward the start.
+            let gravity = -member.rise() * STANDARD_GRAVITY;
+            for action in &actions.weights {
+                let along = gravity * (action.number * factor(action.case));
+                self.add_weight(model, member, (action.segment, action.layer), along);
             }
         }
         for action in &actions.temperatures {
@@ -158,17 +160,17 @@ impl Loading {
         }
     }
 
-    /// ρ g A (or the mass per length times g) along the axis.
+    /// ρ g A (or the mass per length times g), `along` being g along the axis.
     fn add_weight(
         &mut self,
         model: &Model,
         member: &Member,
-        segment: usize,
-        layer: usize,
-        times: f64,
+        (segment, layer): (usize, usize),
+        along: f64,
     ) {
-        // On a member that rises, weight acts toward the start.
-        let along = -member.rise() * STANDARD_GRAVITY * times;
+        if along == 0.0 {
+            return;
+        }
         for piece in pieces_of(member, segment) {
             let at = self.layers.of_piece[piece].start + layer;
             let per_length = |mass: crate::quantity::MassPerLength| -> ForcePerLength {

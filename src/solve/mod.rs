@@ -221,19 +221,20 @@ impl Prepared {
                 member: member.name.clone(),
                 segment: segment.name.clone(),
             };
-            let (deformation, link) = match (&segment.kind, &stiffness.pieces[index]) {
-                (SegmentKind::Gap(gap), _) => (None, joint(gap)),
+            match (&segment.kind, &stiffness.pieces[index]) {
+                (SegmentKind::Gap(gap), _) => {
+                    chain.links.push(joint(gap));
+                    self.pieces.push(None);
+                }
                 (_, None) => return Err(pointed(quotient::Unbounded)),
                 (_, Some(made)) => {
                     let layers = loading.layers.of_piece(index);
                     let piece = PieceDeformation::of(made, layers, loading.lines[index])
                         .map_err(pointed)?;
-                    let link = link(&piece).map_err(pointed)?;
-                    (Some(piece), link)
+                    chain.links.push(link(&piece).map_err(pointed)?);
+                    self.pieces.push(Some(piece));
                 }
-            };
-            self.pieces.push(deformation);
-            chain.links.push(link);
+            }
         }
         chain.loads.clone_from(&loading.forces);
         chain.holds.clear();

@@ -27,9 +27,11 @@ pub(super) struct Recovered<'a> {
 impl Recovered<'_> {
     /// The finished results of the member, its share of restraint left out.
     pub(super) fn result(&self) -> Result<MemberResult, SolveError> {
-        let segments = (0..self.member.segments.len())
-            .map(|index| self.segment(index))
-            .collect::<Result<Vec<_>, _>>()?;
+        let mut segments = Vec::with_capacity(self.member.segments.len());
+        let mut layers = Vec::new();
+        for index in 0..self.member.segments.len() {
+            segments.push(self.segment(index, &mut layers)?);
+        }
         let sum = |part: fn(&SegmentResult) -> Length| {
             segments
                 .iter()
