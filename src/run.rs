@@ -91,8 +91,15 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         let of = |member| Stiffness::of(model, member, plain);
         model.members.iter().map(of).collect::<Vec<_>>()
     });
-    for index in 0..model.combinations.len() {
-        solved.combination(model, index, stiffness.as_deref(), style);
+    // All are solved before the first is proven: so the code of each stays in the processor's
+    // nearest memory while it is at work.
+    let mut workspace = Workspace::default();
+    let combinations = model.combinations.iter();
+    let solutions: Vec<_> = combinations
+        .map(|combination| solve(model, combination, stiffness.as_deref(), &mut workspace))
+        .collect();
+    for (index, solutions) in solutions.into_iter().enumerate() {
+        solved.combination(model, index, solutions, style);
     }
     let line_of = |place: &crate::model::Place| source.line_and_column(place).0;
     let lines = lines_of(
@@ -199,6 +206,23 @@ fn breaks_in(text: &[u8]) -> usize {
     parts.map(|part| usize::from(breaks(part))).sum()
 }
 
+/// Solves every member in a combination. `stiffness` is that of the members in combinations without
+/// factors on moduli.
+fn solve(
+    model: &Model,
+    combination: &Combination,
+    stiffness: Option<&[Stiffness]>,
+    workspace: &mut Workspace,
+) -> Vec<Result<Solution, SolveError>> {
+    let member = |(at, member): (usize, &Member)| match stiffness {
+        Some(stiffness) if combination.modulus.is_empty() => {
+            solve::member_of(model, member, combination, &stiffness[at], workspace)
+        }
+        _ => solve::member(model, member, combination),
+    };
+    model.members.iter().enumerate().map(member).collect()
+}
+
 /// What the combinations came to; one that cannot be solved is a problem and has no result.
 #[derive(Default)]
 struct Solved {
@@ -208,7 +232,6 @@ struct Solved {
     zeros: Vec<Vec<Threshold>>,
     problems: Vec<Problem>,
     remarks: Vec<Remark>,
-    workspace: Workspace,
 }
 
 impl Solved {
@@ -221,12 +244,12 @@ impl Solved {
         }
     }
 
-    /// `stiffness` is that of the members in combinations without factors on moduli.
+    /// Proves and takes in what solving the members in one combination gave.
     fn combination(
         &mut self,
         model: &Model,
         index: usize,
-        stiffness: Option<&[Stiffness]>,
+        solutions: Vec<Result<Solution, SolveError>>,
         style: Style,
     ) {
         let combination = &model.combinations[index];
@@ -236,18 +259,8 @@ impl Solved {
         );
         let mut residuals = Residuals::default();
         let problems = self.problems.len();
-        for (at, member) in model.members.iter().enumerate() {
+        for (member, solution) in model.members.iter().zip(solutions) {
             let place = &member.place;
-            let solution = match stiffness {
-                Some(stiffness) if combination.modulus.is_empty() => solve::member_of(
-                    model,
-                    member,
-                    combination,
-                    &stiffness[at],
-                    &mut self.workspace,
-                ),
-                _ => solve::member(model, member, combination),
-            };
             match solution {
                 Ok(mut solution) => {
                     let own = proof::member(model, member, combination, &solution.member);

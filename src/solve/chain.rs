@@ -61,6 +61,13 @@ pub(super) struct States {
     pub(super) links: Vec<bool>,
 }
 
+impl States {
+    /// Whether one hold at the most acts and every joint is closed, so that statics alone gives N.
+    pub(super) fn are_statics(&self) -> bool {
+        self.holds.iter().filter(|&&acts| acts).count() < 2 && self.links.iter().all(|&shut| shut)
+    }
+}
+
 /// Displacements and forces of a solved chain.
 #[derive(Debug, Clone, Default)]
 pub(super) struct Solved {

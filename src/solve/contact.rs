@@ -8,7 +8,7 @@
 
 use super::chain::{Answer, Chain, Hold, Link, NoSolution, States};
 use crate::model::Side;
-use crate::quantity::{Force, ForcePerLength, Length};
+use crate::quantity::{Flexibility, Force, ForcePerLength, Length};
 
 /// How many times the largest displacement that the actions can make a knot may lie off before it
 /// is decided: no solution lies there, and in a long sprung chain such knots grow without end.
@@ -377,28 +377,22 @@ fn release(states: &mut States, touch: Touch) {
 /// More than any station of a solution moves: faces, free stretches, and all of the load through
 /// all of the flexibility.
 fn largest_displacement(chain: &Chain) -> Length {
-    let faces = chain
-        .holds
-        .iter()
-        .fold(Length::default(), |most, hold| most.max(hold.face.abs()));
-    let free = chain
-        .links
-        .iter()
-        .fold(Length::default(), |sum, link| sum + link.free.abs());
-    let loads = chain
-        .loads
-        .iter()
-        .fold(Force::default(), |sum, load| sum + load.abs())
-        + chain
-            .links
-            .iter()
-            .fold(Force::default(), |sum, link| sum + link.load.abs());
-    let springs = chain.holds.iter().filter_map(|hold| hold.stiffness);
-    let softest = springs.fold(Length::default(), |most, stiffness| {
-        most.max(loads / stiffness)
-    });
-    let links = chain.links.iter().fold(Length::default(), |sum, link| {
-        sum + link.flexibility * loads
-    });
-    faces + free + softest + links
+    let mut loads = Force::default();
+    for load in &chain.loads {
+        loads += load.abs();
+    }
+    let (mut free, mut flexibility) = (Length::default(), Flexibility::default());
+    for link in &chain.links {
+        loads += link.load.abs();
+        free += link.free.abs();
+        flexibility += link.flexibility;
+    }
+    let (mut faces, mut softest) = (Length::default(), Length::default());
+    for hold in &chain.holds {
+        faces = faces.max(hold.face.abs());
+        if let Some(stiffness) = hold.stiffness {
+            softest = softest.max(loads / stiffness);
+        }
+    }
+    faces + free + softest + flexibility * loads
 }

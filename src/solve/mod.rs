@@ -19,7 +19,7 @@ mod threshold;
 pub use threshold::Threshold;
 
 use crate::model::{Combination, Member, Model, Name, SegmentKind, Side, SupportKind};
-use crate::quantity::{Force, Length};
+use crate::quantity::{Flexibility, Force, Length};
 use crate::result::MemberResult;
 use chain::{Chain, Hold, Link, NoSolution, Solved, States};
 use contact::Pieces;
@@ -162,7 +162,7 @@ pub fn member_of(
         states,
     };
     let mut result = recovered.result()?;
-    result.restraint = restraint::share(member, prepared, solved, cold);
+    result.restraint = restraint::share(member, prepared, settled, cold);
     let name = |station: usize| member.stations[station].name.clone();
     let free = solved
         .free
@@ -316,39 +316,38 @@ fn hold(member: &Member, loading: &Loading, support: usize) -> Hold {
 
 /// What counts as zero, from the sizes of what comes together on the member.
 fn threshold(forces: &[Force], links: &[Link], holds: &[Hold]) -> Threshold {
-    let loads = forces
-        .iter()
-        .fold(Force::default(), |sum, force| sum + force.abs())
-        + links
-            .iter()
-            .fold(Force::default(), |sum, link| sum + link.load.abs());
-    let faces = holds
-        .iter()
-        .fold(Length::default(), |sum, hold| sum + hold.face.abs());
-    let free = links
-        .iter()
-        .fold(Length::default(), |sum, link| sum + link.free.abs());
-    let flexibility = links.iter().fold(
-        Default::default(),
-        |sum: crate::quantity::Flexibility, link| sum + link.flexibility,
-    );
+    let mut loads = Force::default();
+    for force in forces {
+        loads += force.abs();
+    }
+    let mut lengths = Length::default();
+    for hold in holds {
+        lengths += hold.face.abs();
+    }
+    let (mut free, mut flexibility) = (Length::default(), Flexibility::default());
+    for link in links {
+        loads += link.load.abs();
+        free += link.free.abs();
+        flexibility += link.flexibility;
+    }
     let restrained = if flexibility.value > 0.0 {
         free / flexibility
     } else {
         Force::default()
     };
-    Threshold::relative_to(loads + restrained, faces + free + flexibility * loads)
+    Threshold::relative_to(loads + restrained, lengths + free + flexibility * loads)
 }
 
 impl Chain {
-    /// Finds the states, solves, and lets go what bears with no force: an exact touch.
+    /// Finds the states and solves.
     fn settle(&self, settled: &mut Settled) -> Result<(), NoSolution> {
-        let Settled {
-            solved,
-            states,
-            pieces,
-        } = settled;
-        contact::find(self, states, pieces)?;
+        contact::find(self, &mut settled.states, &mut settled.pieces)?;
+        self.solve_and_release(settled)
+    }
+
+    /// Solves in the states that were found, and lets go what bears with no force: an exact touch.
+    fn solve_and_release(&self, settled: &mut Settled) -> Result<(), NoSolution> {
+        let Settled { solved, states, .. } = settled;
         loop {
             self.solve(states, solved)?;
             if !self.release_touching(states, solved) {

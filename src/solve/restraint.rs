@@ -1,8 +1,6 @@
 //! How much of a member's free expansion its supports keep back.
 
-use super::chain::Solved;
-use super::deformation::PieceDeformation;
-use super::{Prepared, Settled};
+use super::{Prepared, Settled, contact};
 use crate::model::Member;
 use crate::quantity::{Flexibility, Force, Length};
 
@@ -15,43 +13,38 @@ use crate::quantity::{Flexibility, Force, Length};
 pub(super) fn share(
     member: &Member,
     prepared: &mut Prepared,
-    solved: &Solved,
+    warm: &Settled,
     cold: &mut Settled,
 ) -> Option<f64> {
-    let pieces = || prepared.pieces.iter().flatten();
-    let expansion = pieces().fold(Length::default(), |sum, piece| sum + piece.thermal);
-    let size = pieces().fold(Length::default(), |sum, piece| sum + piece.thermal.abs());
-    if expansion.abs() <= size * 1e-14 || pieces().any(PieceDeformation::runs_to_a_point) {
+    let (mut expansion, mut size) = (Length::default(), Length::default());
+    let mut flexibility = Flexibility::default();
+    for (link, piece) in prepared.chain.links.iter_mut().zip(&prepared.pieces) {
+        // A gap has no piece: it neither expands nor gives.
+        let Some(piece) = piece else { continue };
+        if piece.runs_to_a_point() {
+            return None;
+        }
+        expansion += piece.thermal;
+        size += piece.thermal.abs();
+        flexibility += piece.flexibility;
+        link.free -= piece.thermal;
+    }
+    if expansion.abs() <= size * 1e-14 {
         return None;
     }
-    if prepared.chain.holds.len() < 2 {
-        return Some(0.0); // statics alone gives N: temperature makes none
+    let chain = &prepared.chain;
+    contact::find(chain, &mut cold.states, &mut cold.pieces).ok()?;
+    if cold.states == warm.states && warm.states.are_statics() {
+        return Some(0.0); // temperature makes no N
     }
-    let flexibility = prepared
-        .chain
-        .links
-        .iter()
-        .fold(Flexibility::default(), |sum, link| {
-            if link.joint {
-                sum
-            } else {
-                sum + link.flexibility
-            }
-        });
-    let held = -(expansion / flexibility);
-    let pieces = prepared.pieces.iter();
-    for (link, piece) in prepared.chain.links.iter_mut().zip(pieces) {
-        link.free -= piece
-            .as_ref()
-            .map_or(Length::default(), |piece| piece.thermal);
-    }
-    prepared.chain.settle(cold).ok()?;
+    chain.solve_and_release(cold).ok()?;
     // Along a piece both forces fall by the same line load: they differ alike all along it.
     let mut mean = Force::default();
     for (index, piece) in member.pieces.iter().enumerate() {
-        let kept_back = solved.after[index] - cold.solved.after[index];
+        let kept_back = warm.solved.after[index] - cold.solved.after[index];
         mean += kept_back * (piece.length / member.length()).value;
     }
+    let held = -(expansion / flexibility);
     // Adding 0 turns a negative zero into a plain one.
     Some((mean / held).value + 0.0)
 }
