@@ -57,8 +57,9 @@ pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
             observed,
             style,
         };
-        remarks.extend(look.compression());
-        remarks.extend(look.slenderness());
+        let compression = look.greatest_compression();
+        remarks.extend(compression.and_then(|pushed| look.compression(pushed)));
+        remarks.extend(look.slenderness(compression.is_some()));
         remarks.extend(look.yielding());
         remarks.extend(look.movement());
         remarks.extend(look.temperature());
@@ -126,8 +127,7 @@ impl Look<'_> {
         self.worst(|result, zero| (-result.force_min > zero.force).then_some(-result.force_min))
     }
 
-    fn compression(&self) -> Option<Remark> {
-        let (force, combination) = self.greatest_compression()?;
+    fn compression(&self, (force, combination): (Force, &str)) -> Option<Remark> {
         let force = self.style.quantity(Dimension::Force, force.value);
         self.caution(
             format!("compression of {force} in `{combination}`, and buckling is not checked here: check it by the governing code"),
@@ -135,7 +135,7 @@ impl Look<'_> {
         )
     }
 
-    fn slenderness(&self) -> Option<Remark> {
+    fn slenderness(&self, pushed: bool) -> Option<Remark> {
         let single = self
             .member
             .segments
@@ -144,7 +144,6 @@ impl Look<'_> {
                 [only] => Some(only),
                 _ => None,
             });
-        let pushed = self.greatest_compression().is_some();
         let rod = |layer: &Layer| {
             matches!(
                 layer.section,

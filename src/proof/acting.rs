@@ -14,7 +14,7 @@ pub(super) struct Acting<'m> {
     pub(super) member: &'m Member,
     combination: &'m Combination,
     pub(super) stations: Vec<AtStation>,
-    /// Line load at the two ends of each piece, self-weight left out.
+    /// Line load at the two ends of each piece, self-weight left out; empty where there is none.
     lines: Vec<(ForcePerLength, ForcePerLength)>,
     /// For every layer of every segment: times self-weight, change of temperature at the segment's
     /// ends, imposed strain.
@@ -76,7 +76,7 @@ impl<'m> Acting<'m> {
             member,
             combination,
             stations: vec![AtStation::default(); member.stations.len()],
-            lines: vec![Default::default(); member.pieces.len()],
+            lines: Vec::new(),
             layers: vec![OnLayer::default(); count],
             first_layer,
             movements: Vec::new(),
@@ -88,6 +88,9 @@ impl<'m> Acting<'m> {
             let station = &mut acting.stations[force.station];
             station.load += factored;
             station.load_size += factored.abs();
+        }
+        if !member.actions.lines.is_empty() {
+            acting.lines = vec![Default::default(); member.pieces.len()];
         }
         for line in &member.actions.lines {
             acting.lines[line.piece].0 += line.start * factor(line.case);
@@ -140,9 +143,14 @@ impl<'m> Acting<'m> {
             * self.combination.modulus_factor(layer.material)
     }
 
+    /// The line load at the two ends of a piece, self-weight left out.
+    fn written_line(&self, piece: usize) -> (ForcePerLength, ForcePerLength) {
+        self.lines.get(piece).copied().unwrap_or_default()
+    }
+
     /// The line load at a fraction of a piece, self-weight included, + toward the end.
     pub(super) fn line(&self, piece: usize, s: f64) -> ForcePerLength {
-        let (start, end) = self.lines[piece];
+        let (start, end) = self.written_line(piece);
         let mut line = start * (1.0 - s) + end * s;
         let index = self.member.pieces[piece].segment;
         let segment = &self.member.segments[index];
@@ -180,7 +188,7 @@ impl<'m> Acting<'m> {
         let none = ForcePerLength::default();
         let index = self.member.pieces[piece].segment;
         let count = self.member.segments[index].layers().len().max(1);
-        self.lines[piece] != (none, none)
+        self.written_line(piece) != (none, none)
             || (0..count).any(|layer| self.layer(index, layer).weight != 0.0)
     }
 

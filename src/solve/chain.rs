@@ -362,8 +362,8 @@ impl Chain {
         arriving: &mut [Answer],
     ) {
         let mut answer = Answer::nothing();
-        for station in first..=last {
-            arriving[station] = answer;
+        for (station, arriving) in (first..=last).zip(&mut arriving[first..=last]) {
+            *arriving = answer;
             answer = answer.past_load(self.loads[station]);
             let mut rigid = None;
             let holds = self.holds_from(next, station);
