@@ -9,7 +9,7 @@ use crate::result::{
     Caution, CombinationResult, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Residuals,
     Verdict, YieldRow,
 };
-use crate::solve::{self, Solution, SolveError, Stiffness, Threshold};
+use crate::solve::{self, Solution, SolveError, Stiffness, Threshold, Workspace};
 
 /// How many errors a result holds; the rest are counted.
 const ERRORS_KEPT: usize = 1000;
@@ -82,7 +82,7 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         units: model.units,
         ..Style::default()
     };
-    let mut solved = Solved::default();
+    let mut solved = Solved::with_room_for(model.combinations.len());
     let plain = model
         .combinations
         .iter()
@@ -91,8 +91,15 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         let of = |member| Stiffness::of(model, member, plain);
         model.members.iter().map(of).collect::<Vec<_>>()
     });
-    for index in 0..model.combinations.len() {
-        solved.combination(model, index, stiffness.as_deref(), style);
+    // All are solved before the first is proven: so the code of each stays in the processor's
+    // nearest memory while it is at work.
+    let mut workspace = Workspace::default();
+    let combinations = model.combinations.iter();
+    let solutions: Vec<_> = combinations
+        .map(|combination| solve(model, combination, stiffness.as_deref(), &mut workspace))
+        .collect();
+    for (index, solutions) in solutions.into_iter().enumerate() {
+        solved.combination(model, index, solutions, style);
     }
     let line_of = |place: &crate::model::Place| source.line_and_column(place).0;
     let lines = lines_of(
@@ -184,14 +191,36 @@ fn lines_of(text: &str, places: impl Iterator<Item = usize>) -> Vec<usize> {
         if place < at {
             (at, line) = (0, 1);
         }
-        line += text.as_bytes()[at..place]
-            .iter()
-            .filter(|&&byte| byte == b'\n')
-            .count();
+        line += breaks_in(&text.as_bytes()[at..place]);
         at = place;
         line
     };
     places.map(line_at).collect()
+}
+
+/// How many line breaks there are. Counted by parts whose count fits a byte, which the compiler
+/// turns into comparisons of many bytes at a time.
+fn breaks_in(text: &[u8]) -> usize {
+    let breaks = |part: &[u8]| -> u8 { part.iter().map(|&byte| u8::from(byte == b'\n')).sum() };
+    let parts = text.chunks(usize::from(u8::MAX));
+    parts.map(|part| usize::from(breaks(part))).sum()
+}
+
+/// Solves every member in a combination. `stiffness` is that of the members in combinations without
+/// factors on moduli.
+fn solve(
+    model: &Model,
+    combination: &Combination,
+    stiffness: Option<&[Stiffness]>,
+    workspace: &mut Workspace,
+) -> Vec<Result<Solution, SolveError>> {
+    let member = |(at, member): (usize, &Member)| match stiffness {
+        Some(stiffness) if combination.modulus.is_empty() => {
+            solve::member_of(model, member, combination, &stiffness[at], workspace)
+        }
+        _ => solve::member(model, member, combination),
+    };
+    model.members.iter().enumerate().map(member).collect()
 }
 
 /// What the combinations came to; one that cannot be solved is a problem and has no result.
@@ -206,12 +235,21 @@ struct Solved {
 }
 
 impl Solved {
-    /// `stiffness` is that of the members in combinations without factors on moduli.
+    fn with_room_for(combinations: usize) -> Self {
+        Solved {
+            indices: Vec::with_capacity(combinations),
+            results: Vec::with_capacity(combinations),
+            zeros: Vec::with_capacity(combinations),
+            ..Self::default()
+        }
+    }
+
+    /// Proves and takes in what solving the members in one combination gave.
     fn combination(
         &mut self,
         model: &Model,
         index: usize,
-        stiffness: Option<&[Stiffness]>,
+        solutions: Vec<Result<Solution, SolveError>>,
         style: Style,
     ) {
         let combination = &model.combinations[index];
@@ -221,14 +259,8 @@ impl Solved {
         );
         let mut residuals = Residuals::default();
         let problems = self.problems.len();
-        for (at, member) in model.members.iter().enumerate() {
+        for (member, solution) in model.members.iter().zip(solutions) {
             let place = &member.place;
-            let solution = match stiffness {
-                Some(stiffness) if combination.modulus.is_empty() => {
-                    solve::member_of(model, member, combination, &stiffness[at])
-                }
-                _ => solve::member(model, member, combination),
-            };
             match solution {
                 Ok(mut solution) => {
                     let own = proof::member(model, member, combination, &solution.member);

@@ -57,8 +57,9 @@ pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
             observed,
             style,
         };
-        remarks.extend(look.compression());
-        remarks.extend(look.slenderness());
+        let compression = look.greatest_compression();
+        remarks.extend(compression.and_then(|pushed| look.compression(pushed)));
+        remarks.extend(look.slenderness(compression.is_some()));
         remarks.extend(look.yielding());
         remarks.extend(look.movement());
         remarks.extend(look.temperature());
@@ -66,7 +67,8 @@ pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
     }
     // One literal may limit many segments: it is said once.
     let mut said = HashSet::new();
-    for limit in &model.limits {
+    let may_warn = |limit: &&Limit| limit.since.is_some() || small_share(limit).is_some();
+    for limit in model.limits.iter().filter(may_warn) {
         if said.insert(limit.place.start) {
             remarks.extend(factored_share(model, limit));
             remarks.extend(counted_from_itself(model, limit));
@@ -125,8 +127,7 @@ impl Look<'_> {
         self.worst(|result, zero| (-result.force_min > zero.force).then_some(-result.force_min))
     }
 
-    fn compression(&self) -> Option<Remark> {
-        let (force, combination) = self.greatest_compression()?;
+    fn compression(&self, (force, combination): (Force, &str)) -> Option<Remark> {
         let force = self.style.quantity(Dimension::Force, force.value);
         self.caution(
             format!("compression of {force} in `{combination}`, and buckling is not checked here: check it by the governing code"),
@@ -134,7 +135,7 @@ impl Look<'_> {
         )
     }
 
-    fn slenderness(&self) -> Option<Remark> {
+    fn slenderness(&self, pushed: bool) -> Option<Remark> {
         let single = self
             .member
             .segments
@@ -143,7 +144,6 @@ impl Look<'_> {
                 [only] => Some(only),
                 _ => None,
             });
-        let pushed = self.greatest_compression().is_some();
         let rod = |layer: &Layer| {
             matches!(
                 layer.section,
@@ -341,16 +341,19 @@ impl Look<'_> {
     }
 }
 
+/// The share of a strength that a limit is, where it is so small that it holds a safety factor.
+fn small_share(limit: &Limit) -> Option<f64> {
+    match limit.kind {
+        LimitKind::Tension { share, .. } | LimitKind::Compression { share, .. } => share
+            .map(|ShareFactor(share)| share)
+            .filter(|&share| share < HOLDS_A_SAFETY_FACTOR),
+        _ => None,
+    }
+}
+
 /// A share of a strength that already holds a safety factor, read with factored loads.
 fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
-    let (LimitKind::Tension { share, .. } | LimitKind::Compression { share, .. }) = limit.kind
-    else {
-        return None;
-    };
-    let ShareFactor(share) = share?;
-    if share >= HOLDS_A_SAFETY_FACTOR {
-        return None;
-    }
+    let share = small_share(limit)?;
     let member = &model.members[limit.target.member()?];
     let acting = cases_on(member);
     let factored = |factors: &[f64]| acting.iter().any(|&case| factors[case].abs() > 1.0);

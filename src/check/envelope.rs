@@ -8,7 +8,10 @@ pub fn envelope(combinations: &[CombinationResult]) -> Vec<Envelope> {
     let Some(first) = combinations.first() else {
         return Vec::new();
     };
-    let mut rows = Vec::new();
+    let rows_of = |member: &MemberResult| {
+        3 + 2 * member.supports.len() + member.segments.iter().filter_map(|s| s.gap).count()
+    };
+    let mut rows = Vec::with_capacity(first.members.iter().map(rows_of).sum());
     for (index, member) in first.members.iter().enumerate() {
         let mut add =
             |part: &str, quantity: &str, unit: Unit, of: &dyn Fn(&MemberResult) -> Option<f64>| {

@@ -2,13 +2,13 @@
 
 use super::rank;
 use crate::result::{CheckResult, CombinationResult, Governing};
-use std::collections::HashMap;
+use std::collections::BTreeMap;
 
 /// One row for each check on each thing, in the order in which they first appear. The worst one
 /// governs: a failure before a pass, then the larger utilisation, then the earlier combination.
 pub fn governing(combinations: &[CombinationResult]) -> Vec<Governing> {
     let mut order: Vec<(&CheckResult, usize)> = Vec::new();
-    let mut known: HashMap<(&str, &str), usize> = HashMap::new();
+    let mut known: BTreeMap<(&str, &str), usize> = BTreeMap::new();
     // The checks of a combination come in one order, so the next row is mostly the one looked for.
     let mut next = 0;
     for (index, combination) in combinations.iter().enumerate() {

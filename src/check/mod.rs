@@ -73,10 +73,14 @@ pub fn combination(
     all: &[CombinationResult],
     lines: &[usize],
 ) -> Vec<CheckResult> {
-    let mut checks = Vec::new();
+    // A movement counted from this very combination is nothing to check.
+    let looks = |limit: &Limit| {
+        limit.since != Some(index) && reads(limit, index, &model.combinations[index])
+    };
+    let count = model.limits.iter().filter(|&limit| looks(limit)).count();
+    let mut checks = Vec::with_capacity(count);
     for (limit, &line) in model.limits.iter().zip(lines) {
-        // A movement counted from this very combination is nothing to check.
-        if limit.since == Some(index) || !reads(limit, index, &model.combinations[index]) {
+        if !looks(limit) {
             continue;
         }
         let Some(member) = limit

@@ -15,7 +15,7 @@ use crate::model::{Combination, Member, Model, SegmentKind};
 use crate::quantity::{Energy, Force, Length};
 use crate::result::{MemberResult, Residuals, SegmentResult};
 use acting::Acting;
-use piece::{Integrated, Piece};
+use piece::Piece;
 use residual::{Residual, Size};
 
 /// The share of a member's largest force below which N somewhere may be nothing but the rounding of
@@ -34,43 +34,33 @@ pub fn member(
     combination: &Combination,
     result: &MemberResult,
 ) -> Residuals {
-    let acting = Acting::on(model, member, combination);
+    let acting = Acting::on(model, member, combination, result);
     let doubt = result.force_max.abs().max(result.force_min.abs()) * DOUBT;
-    let along: Vec<Piece> = (0..member.pieces.len())
-        .map(|piece| {
-            let (start, end) = (
-                result.stations[piece].force_after,
-                result.stations[piece + 1].force_before,
-            );
-            Piece::of(
-                &acting,
-                piece,
-                (start.unwrap_or_default(), end.unwrap_or_default()),
-            )
-        })
-        .collect();
-    let pieces: Vec<Integrated> = along
-        .iter()
-        .enumerate()
-        .map(|(index, piece)| piece.integrate(&acting, index, doubt))
-        .collect();
+    let piece = |index: usize| {
+        let (start, end) = (
+            result.stations[index].force_after,
+            result.stations[index + 1].force_before,
+        );
+        let ends = (start.unwrap_or_default(), end.unwrap_or_default());
+        Piece::of(&acting, index, ends, doubt)
+    };
+    let along: Vec<Piece> = (0..member.pieces.len()).map(piece).collect();
     let mut proof = Proof {
         acting,
         result,
-        along,
-        reactions: reactions_by_station(member, result),
+        along: &along,
         equilibrium: Residual::default(),
         compatibility: Residual::default(),
     };
     proof.stations();
-    proof.whole(&pieces);
-    proof.pieces(&pieces);
-    proof.segments(&pieces);
+    proof.whole();
+    proof.pieces();
+    proof.segments();
     for (index, support) in result.supports.iter().enumerate() {
         proof.support(index, support);
     }
     let mut energy = Residual::default();
-    energy.take(proof.energy(&pieces));
+    energy.take(proof.energy());
     Residuals {
         equilibrium: proof.equilibrium.largest(),
         compatibility: proof.compatibility.largest(),
@@ -78,22 +68,10 @@ pub fn member(
     }
 }
 
-fn reactions_by_station(member: &Member, result: &MemberResult) -> Vec<(Force, Force)> {
-    let mut reactions = vec![(Force::default(), Force::default()); member.stations.len()];
-    for (support, result) in member.supports.iter().zip(&result.supports) {
-        let reaction = result.reaction.unwrap_or_default();
-        reactions[support.station].0 += reaction;
-        reactions[support.station].1 += reaction.abs();
-    }
-    reactions
-}
-
 struct Proof<'p> {
     acting: Acting<'p>,
     result: &'p MemberResult,
-    along: Vec<Piece>,
-    /// The reactions at each station, and the sum of their sizes.
-    reactions: Vec<(Force, Force)>,
+    along: &'p [Piece],
     equilibrium: Residual,
     compatibility: Residual,
 }
@@ -114,26 +92,24 @@ impl Proof<'_> {
 
     /// N after − N before + load + reactions = 0 at every station.
     fn stations(&mut self) {
-        for station in 0..self.reactions.len() {
-            let (reaction, size) = self.reactions[station];
+        for (station, at) in self.acting.stations.iter().enumerate() {
             let (before, after) = self.forces_at(station);
-            let (load, load_size) = self.acting.forces[station];
-            let sizes = before.abs() + after.abs() + load_size + size;
+            let sizes = before.abs() + after.abs() + at.load_size + at.reaction_size;
             self.equilibrium
-                .take((after - before + load + reaction).over(sizes));
+                .take((after - before + at.load + at.reaction).over(sizes));
         }
     }
 
     /// All loads against all reactions, and the totals that the result gives of them.
-    fn whole(&mut self, pieces: &[Integrated]) {
+    fn whole(&mut self) {
         let (mut applied, mut size) = (Force::default(), Force::default());
-        for &(force, force_size) in &self.acting.forces {
-            applied += force;
-            size += force_size;
+        for at in &self.acting.stations {
+            applied += at.load;
+            size += at.load_size;
         }
-        for piece in pieces {
-            applied += piece.load;
-            size += piece.load_size;
+        for piece in self.along {
+            applied += piece.sums.load;
+            size += piece.sums.load_size;
         }
         let (mut reactions, mut reaction_size) = (Force::default(), Force::default());
         for support in &self.result.supports {
@@ -151,8 +127,8 @@ impl Proof<'_> {
     }
 
     /// Along every piece: N falls by its line load, and its ends move apart by its strain.
-    fn pieces(&mut self, pieces: &[Integrated]) {
-        for (index, piece) in pieces.iter().enumerate() {
+    fn pieces(&mut self) {
+        for (index, Piece { sums: piece, .. }) in self.along.iter().enumerate() {
             let ((_, start), (end, _)) = (self.forces_at(index), self.forces_at(index + 1));
             let sizes = start.abs() + end.abs() + piece.load_size;
             self.equilibrium
@@ -168,7 +144,7 @@ impl Proof<'_> {
     }
 
     /// Every segment's forces and elongations against its pieces, and the member's against all.
-    fn segments(&mut self, pieces: &[Integrated]) {
+    fn segments(&mut self) {
         let member = self.acting.member;
         let mut at = 0;
         let (mut force, mut thermal, mut imposed) =
@@ -177,10 +153,10 @@ impl Proof<'_> {
             let first = at;
             let (mut f, mut t, mut m) = (Sum::default(), Sum::default(), Sum::default());
             let (mut most, mut least, mut size) = (None::<Force>, None::<Force>, Force::default());
-            while at < pieces.len()
+            while at < self.along.len()
                 && std::ptr::eq(segment, &member.segments[member.pieces[at].segment])
             {
-                let piece = &pieces[at];
+                let piece = &self.along[at].sums;
                 if let SegmentKind::Gap(_) = segment.kind {
                     f.add(
                         self.displacement(at + 1) - self.displacement(at),
@@ -267,7 +243,11 @@ impl Proof<'_> {
             let s = ((x - stations[piece].x) / length).value.clamp(0.0, 1.0);
             self.along[piece].force_at(s)
         };
-        let (here, before) = (at(after), at(after.saturating_sub(1)));
+        let here = at(after);
+        if here == named {
+            return here;
+        }
+        let before = at(after.saturating_sub(1));
         if (before - named).abs() < (here - named).abs() {
             before
         } else {
@@ -313,14 +293,14 @@ impl Proof<'_> {
     }
 
     /// The work of loads and reactions against the internal work.
-    fn energy(&self, pieces: &[Integrated]) -> f64 {
+    fn energy(&self) -> f64 {
         let (mut balance, mut size) = (Energy::default(), Energy::default());
         let mut take = |work: Energy| {
             balance += work;
             size += work.abs();
         };
-        for (station, &(load, _)) in self.acting.forces.iter().enumerate() {
-            take(load * self.displacement(station));
+        for (station, at) in self.acting.stations.iter().enumerate() {
+            take(at.load * self.displacement(station));
         }
         for (support, result) in self
             .acting
@@ -331,7 +311,7 @@ impl Proof<'_> {
         {
             take(result.reaction.unwrap_or_default() * self.displacement(support.station));
         }
-        for (index, piece) in pieces.iter().enumerate() {
+        for (index, Piece { sums: piece, .. }) in self.along.iter().enumerate() {
             take(piece.load * self.displacement(index) + piece.line_work);
             let segment = &self.acting.member.segments[self.acting.member.pieces[index].segment];
             if let SegmentKind::Gap(_) = segment.kind {

@@ -9,12 +9,11 @@ pub(super) struct Residual(f64);
 impl Residual {
     /// A leftover that is not a number counts as infinite: it must never pass as small.
     pub(super) fn take(&mut self, leftover: f64) {
-        let leftover = if leftover.is_nan() {
-            f64::INFINITY
-        } else {
-            leftover
-        };
-        self.0 = self.0.max(leftover);
+        if leftover.is_nan() {
+            self.0 = f64::INFINITY;
+        } else if leftover > self.0 {
+            self.0 = leftover;
+        }
     }
 
     pub(super) fn largest(self) -> f64 {

@@ -36,15 +36,14 @@ impl Proof<'_> {
     /// The size of the forces about a piece, against which one that should not be there is held.
     fn force_size(&self, station: usize) -> Force {
         let (before, after) = self.forces_at(station);
-        let (_, load) = self.acting.forces[station];
-        let (_, reactions) = self.reactions[station];
-        before.abs() + after.abs() + load + reactions
+        let at = &self.acting.stations[station];
+        before.abs() + after.abs() + at.load_size + at.reaction_size
     }
 
     /// A support keeps its law: fixed, spring, or a stop that only pushes and never overlaps.
     pub(super) fn support(&mut self, index: usize, result: &SupportResult) {
         let support = &self.acting.member.supports[index];
-        let moved = self.acting.movements[index];
+        let moved = self.acting.movement(index);
         let displacement = self.displacement(support.station);
         let Some(reaction) = result.reaction else {
             return;

@@ -52,9 +52,16 @@ where
         Self::from_coefficients(&[value])
     }
 
-    /// Linear from `start` to `end`.
-    pub fn linear(start: T, end: T) -> Self {
-        Self::from_coefficients(&[start, end])
+    /// Linear from `start` to `end`; of degree 0 where they are equal.
+    pub fn linear(start: T, end: T) -> Self
+    where
+        T: PartialEq,
+    {
+        if start == end {
+            Self::constant(start)
+        } else {
+            Self::from_coefficients(&[start, end])
+        }
     }
 
     /// The degree of the form (the polynomial itself may be of a lower one).

@@ -30,12 +30,22 @@ impl ser::Error for NotFinite {
 /// # Errors
 /// The name of the first that is not.
 pub fn all_finite<T: Serialize>(value: &T) -> Result<(), NotFinite> {
-    value.serialize(&mut Guard { name: "number" })
+    let mut guard = Guard {
+        name: "number",
+        found: None,
+    };
+    value.serialize(&mut guard)?;
+    guard
+        .found
+        .map_or(Ok(()), |name| Err(NotFinite::Number(name)))
 }
 
 /// Walks over a value, remembering the name of the field that it is in.
 struct Guard {
     name: &'static str,
+    /// The first number that is not finite. It does not end the walk: so the walk over a sound
+    /// value, which is nearly every one, has no ways out to look after.
+    found: Option<&'static str>,
 }
 
 macro_rules! passed_over {
@@ -63,11 +73,10 @@ impl Serializer for &mut Guard {
     }
 
     fn serialize_f64(self, number: f64) -> Result<(), NotFinite> {
-        if number.is_finite() {
-            Ok(())
-        } else {
-            Err(NotFinite::Number(self.name))
+        if !number.is_finite() && self.found.is_none() {
+            self.found = Some(self.name);
         }
+        Ok(())
     }
 
     fn serialize_f32(self, number: f32) -> Result<(), NotFinite> {

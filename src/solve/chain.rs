@@ -13,6 +13,7 @@ use crate::model::Side;
 use crate::quantity::{Flexibility, Force, ForcePerLength, Length, Ratio};
 
 /// A member as stations and links; one link fewer than stations.
+#[derive(Default)]
 pub(super) struct Chain {
     /// Force at each station, + toward the end.
     pub(super) loads: Vec<Force>,
@@ -54,14 +55,21 @@ pub(super) struct Hold {
 }
 
 /// Which stops bear and which joints are closed; true as well for holds that always act.
-#[derive(Debug, Clone, PartialEq, Eq)]
+#[derive(Debug, Clone, Default, PartialEq, Eq)]
 pub(super) struct States {
     pub(super) holds: Vec<bool>,
     pub(super) links: Vec<bool>,
 }
 
+impl States {
+    /// Whether one hold at the most acts and every joint is closed, so that statics alone gives N.
+    pub(super) fn are_statics(&self) -> bool {
+        self.holds.iter().filter(|&&acts| acts).count() < 2 && self.links.iter().all(|&shut| shut)
+    }
+}
+
 /// Displacements and forces of a solved chain.
-#[derive(Debug, Clone)]
+#[derive(Debug, Clone, Default)]
 pub(super) struct Solved {
     pub(super) displacements: Vec<Length>,
     /// N just before each station; 0 at the start.
@@ -72,6 +80,8 @@ pub(super) struct Solved {
     pub(super) reactions: Vec<Force>,
     /// Groups of stations that nothing holds, first and last, whose displacement is free.
     pub(super) free: Vec<(usize, usize)>,
+    /// What arrives at each station from its left, before its own load and holds.
+    arriving: Vec<Answer>,
 }
 
 /// Why a chain has no solution.
@@ -168,6 +178,23 @@ impl Answer {
     }
 }
 
+impl Solved {
+    /// Makes room for a chain of so many stations and holds, all at rest.
+    fn clear(&mut self, stations: usize, holds: usize) {
+        for forces in [&mut self.before, &mut self.after] {
+            forces.clear();
+            forces.resize(stations, Force::default());
+        }
+        self.displacements.clear();
+        self.displacements.resize(stations, Length::default());
+        self.reactions.clear();
+        self.reactions.resize(holds, Force::default());
+        self.free.clear();
+        self.arriving.clear();
+        self.arriving.resize(stations, Answer::nothing());
+    }
+}
+
 fn one() -> Ratio {
     crate::quantity::from_si(1.0)
 }
@@ -185,31 +212,27 @@ impl Link {
 }
 
 impl Chain {
-    /// Solves the chain with these states.
-    pub(super) fn solve(&self, states: &States) -> Result<Solved, NoSolution> {
+    /// Solves the chain with these states, in the place of what was solved before.
+    pub(super) fn solve(&self, states: &States, solved: &mut Solved) -> Result<(), NoSolution> {
         let count = self.loads.len();
-        let mut solved = Solved {
-            displacements: vec![Length::default(); count],
-            before: vec![Force::default(); count],
-            after: vec![Force::default(); count],
-            reactions: vec![Force::default(); self.holds.len()],
-            free: Vec::new(),
-        };
+        solved.clear(count, self.holds.len());
         let mut first = 0;
         while first < count {
             let open = (first..count - 1).find(|&link| !states.links[link]);
             let last = open.unwrap_or(count - 1);
             let held = self.holds_in(first, last).any(|hold| states.holds[hold]);
             if held {
-                self.solve_held(states, first, last, &mut solved)?;
+                self.solve_held(states, first, last, solved)?;
             } else {
-                self.solve_free(first, last, &mut solved)?;
+                self.solve_free(first, last, solved)?;
                 solved.free.push((first, last));
             }
             first = last + 1;
         }
-        placing::place(self, &mut solved);
-        Ok(solved)
+        if !solved.free.is_empty() {
+            placing::place(self, solved);
+        }
+        Ok(())
     }
 
     /// The holds of the stations from first to last.
@@ -217,6 +240,20 @@ impl Chain {
         let from = self.holds.partition_point(|hold| hold.station < first);
         let to = self.holds.partition_point(|hold| hold.station <= last);
         from..to
+    }
+
+    /// The holds of a station, the first of them or of a later station being `from`.
+    fn holds_from(&self, from: usize, station: usize) -> std::ops::Range<usize> {
+        let others = self.holds[from..].iter();
+        let count = others.take_while(|hold| hold.station == station).count();
+        from..from + count
+    }
+
+    /// The holds of a station, the last of them or of an earlier station being the one before `to`.
+    fn holds_up_to(&self, to: usize, station: usize) -> std::ops::Range<usize> {
+        let others = self.holds[..to].iter().rev();
+        let count = others.take_while(|hold| hold.station == station).count();
+        to - count..to
     }
 
     /// A group of stations that at least one hold acts on.
@@ -227,11 +264,15 @@ impl Chain {
         last: usize,
         solved: &mut Solved,
     ) -> Result<(), NoSolution> {
-        let arriving = self.forward(states, first, last);
+        let own = self.holds_in(first, last);
+        self.forward(states, (first, last), own.start, &mut solved.arriving);
         let mut after = Force::default();
+        let mut later = own.end;
         for station in (first..=last).rev() {
-            let holds = self.holds_in(station, station);
-            let mut answer = arriving[station - first].past_load(self.loads[station]);
+            let holds = self.holds_up_to(later, station);
+            later = holds.start;
+            let arriving = solved.arriving[station];
+            let mut answer = arriving.past_load(self.loads[station]);
             let mut springs = Vec::new();
             let mut rigid = None;
             for hold in holds.filter(|&hold| states.holds[hold]) {
@@ -249,12 +290,7 @@ impl Chain {
                 let face = self.holds[hold].face;
                 solved.displacements[station] = face;
                 let load = self.loads[station];
-                let before = self.force_at_rigid(
-                    arriving[station - first],
-                    face,
-                    after + load,
-                    (first, station),
-                )?;
+                let before = self.force_at_rigid(arriving, face, after + load, (first, station))?;
                 // The springs beside it answer by its displacement, and it takes the rest.
                 let mut rest = before - load - after;
                 for &(spring, stiffness, _) in &springs {
@@ -283,7 +319,7 @@ impl Chain {
                     solved.reactions[hold] = left - force;
                     force = left;
                 }
-                solved.before[station] = match arriving[station - first] {
+                solved.before[station] = match arriving {
                     Answer::Free { force } => force,
                     Answer::Held { .. } => force + self.loads[station],
                 };
@@ -317,18 +353,22 @@ impl Chain {
         }
     }
 
-    /// What arrives at each station of a group from its left, before its own load and holds.
-    fn forward(&self, states: &States, first: usize, last: usize) -> Vec<Answer> {
-        let mut arriving = Vec::with_capacity(last - first + 1);
+    /// Fills in what arrives at each station of a group, whose first hold is `next`.
+    fn forward(
+        &self,
+        states: &States,
+        (first, last): (usize, usize),
+        mut next: usize,
+        arriving: &mut [Answer],
+    ) {
         let mut answer = Answer::nothing();
-        for station in first..=last {
-            arriving.push(answer);
+        for (station, arriving) in (first..=last).zip(&mut arriving[first..=last]) {
+            *arriving = answer;
             answer = answer.past_load(self.loads[station]);
             let mut rigid = None;
-            for hold in self
-                .holds_in(station, station)
-                .filter(|&hold| states.holds[hold])
-            {
+            let holds = self.holds_from(next, station);
+            next = holds.end;
+            for hold in holds.filter(|&hold| states.holds[hold]) {
                 match self.holds[hold].stiffness {
                     Some(stiffness) => {
                         answer = answer.past_spring(stiffness, self.holds[hold].face)
@@ -343,7 +383,6 @@ impl Chain {
                 answer = answer.past_link(&self.links[station]);
             }
         }
-        arriving
     }
 
     /// A group that nothing holds: sound only while no load pushes it, and placed afterwards.

@@ -8,22 +8,30 @@
 
 use super::chain::{Answer, Chain, Hold, Link, NoSolution, States};
 use crate::model::Side;
-use crate::quantity::{Force, ForcePerLength, Length};
+use crate::quantity::{Flexibility, Force, ForcePerLength, Length};
 
 /// How many times the largest displacement that the actions can make a knot may lie off before it
 /// is decided: no solution lies there, and in a long sprung chain such knots grow without end.
 const FAR: f64 = 1e3;
 
-/// The states of all stops and joints of a chain.
-pub(super) fn states(chain: &Chain) -> Result<States, NoSolution> {
+/// Finds the states of all stops and joints of a chain, in the place of those found before.
+pub(super) fn find(
+    chain: &Chain,
+    states: &mut States,
+    pieces: &mut Pieces,
+) -> Result<(), NoSolution> {
+    // At the far left every stop that blocks movement toward the start bears, and every joint
+    // is pressed shut.
+    let bears = |hold: &Hold| hold.stop != Some(Side::End);
+    states.holds.clear();
+    states.holds.extend(chain.holds.iter().map(bears));
+    states.links.clear();
+    states.links.resize(chain.links.len(), true);
     let one_way = |hold: &Hold| hold.stop.is_some();
     if !chain.holds.iter().any(one_way) && !chain.links.iter().any(|link| link.joint) {
-        return Ok(States {
-            holds: vec![true; chain.holds.len()],
-            links: vec![true; chain.links.len()],
-        });
+        return Ok(());
     }
-    let mut line = Line::new(chain);
+    let mut line = Line::new(chain, states, pieces);
     let mut hold = 0;
     for station in 0..chain.loads.len() {
         line.past_load(chain.loads[station]);
@@ -49,8 +57,7 @@ pub(super) fn states(chain: &Chain) -> Result<States, NoSolution> {
             }
         }
     }
-    line.end_at_no_force()?;
-    Ok(line.states)
+    line.end_at_no_force()
 }
 
 /// What a knot is the touching of.
@@ -68,36 +75,38 @@ struct Knot {
     touch: Touch,
 }
 
-/// The rising line: straight pieces in order, a knot between each and the next.
-struct Line<'c> {
-    chain: &'c Chain,
+/// What the line is made of: straight pieces in order, a knot between each and the next. Kept from
+/// one line to the next for its memory alone.
+#[derive(Debug, Clone, Default)]
+pub(super) struct Pieces {
     straight: Vec<Answer>,
     knots: Vec<Knot>,
+}
+
+/// The rising line.
+struct Line<'c> {
+    chain: &'c Chain,
+    straight: &'c mut Vec<Answer>,
+    knots: &'c mut Vec<Knot>,
     /// The states before any knot is passed, changed as knots are.
-    states: States,
+    states: &'c mut States,
     /// The first station of the part that the line answers for.
     first: usize,
     far: Length,
 }
 
 impl<'c> Line<'c> {
-    fn new(chain: &'c Chain) -> Self {
-        // At the far left every stop that blocks movement toward the start bears, and every joint
-        // is pressed shut.
-        let holds = chain
-            .holds
-            .iter()
-            .map(|hold| hold.stop != Some(Side::End))
-            .collect();
-        let links = vec![true; chain.links.len()];
-        Line {
+    fn new(chain: &'c Chain, states: &'c mut States, pieces: &'c mut Pieces) -> Self {
+        let mut line = Line {
             chain,
-            straight: vec![Answer::nothing()],
-            knots: Vec::new(),
-            states: States { holds, links },
+            straight: &mut pieces.straight,
+            knots: &mut pieces.knots,
+            states,
             first: 0,
             far: FAR * largest_displacement(chain),
-        }
+        };
+        line.begin(Answer::nothing(), 0);
+        line
     }
 
     fn begin(&mut self, answer: Answer, station: usize) {
@@ -129,7 +138,7 @@ impl<'c> Line<'c> {
         self.straight
             .iter_mut()
             .for_each(|straight| *straight = straight.past_link(link));
-        for knot in &mut self.knots {
+        for knot in self.knots.iter_mut() {
             knot.displacement += link.stretch(knot.force);
             knot.force -= link.load;
         }
@@ -310,7 +319,7 @@ impl<'c> Line<'c> {
             .count();
         // A knot at a force of 0 is an exact touch, which is no bearing on either side of it.
         for knot in &self.knots[passed..passed + touching] {
-            release(&mut self.states, knot.touch);
+            release(self.states, knot.touch);
         }
         self.pass_first(passed);
         Ok(())
@@ -368,28 +377,22 @@ fn release(states: &mut States, touch: Touch) {
 /// More than any station of a solution moves: faces, free stretches, and all of the load through
 /// all of the flexibility.
 fn largest_displacement(chain: &Chain) -> Length {
-    let faces = chain
-        .holds
-        .iter()
-        .fold(Length::default(), |most, hold| most.max(hold.face.abs()));
-    let free = chain
-        .links
-        .iter()
-        .fold(Length::default(), |sum, link| sum + link.free.abs());
-    let loads = chain
-        .loads
-        .iter()
-        .fold(Force::default(), |sum, load| sum + load.abs())
-        + chain
-            .links
-            .iter()
-            .fold(Force::default(), |sum, link| sum + link.load.abs());
-    let springs = chain.holds.iter().filter_map(|hold| hold.stiffness);
-    let softest = springs.fold(Length::default(), |most, stiffness| {
-        most.max(loads / stiffness)
-    });
-    let links = chain.links.iter().fold(Length::default(), |sum, link| {
-        sum + link.flexibility * loads
-    });
-    faces + free + softest + links
+    let mut loads = Force::default();
+    for load in &chain.loads {
+        loads += load.abs();
+    }
+    let (mut free, mut flexibility) = (Length::default(), Flexibility::default());
+    for link in &chain.links {
+        loads += link.load.abs();
+        free += link.free.abs();
+        flexibility += link.flexibility;
+    }
+    let (mut faces, mut softest) = (Length::default(), Length::default());
+    for hold in &chain.holds {
+        faces = faces.max(hold.face.abs());
+        if let Some(stiffness) = hold.stiffness {
+            softest = softest.max(loads / stiffness);
+        }
+    }
+    faces + free + softest + flexibility * loads
 }

@@ -1,7 +1,7 @@
 //! How a piece deforms: PL/AE and αΔTL, with everything that may vary along it.
 
 use super::loading::LayerLoading;
-use super::quotient::{Quotient, Unbounded};
+use super::quotient::{Unbounded, integral};
 use crate::quantity::{Curve, Flexibility, Force, ForcePerLength, Length, Ratio};
 
 /// A piece of a segment before anything acts on it.
@@ -20,9 +20,9 @@ impl PieceStiffness {
             .iter()
             .fold(layers[0].rigidity(), |sum, layer| sum + layer.rigidity());
         let one: Curve<Ratio> = Curve::constant(crate::quantity::from_si(1.0));
-        let flexibility = Quotient::new(one, rigidity).map_or_else(
-            |_| Flexibility::default(),
-            |quotient| length * quotient.integral(),
+        let flexibility = integral(&one, &rigidity).map_or_else(
+            |Unbounded| Flexibility::default(),
+            |integral| length * integral,
         );
         PieceStiffness {
             length,
@@ -76,17 +76,18 @@ impl PieceDeformation {
             rigidity,
             flexibility,
         } = *made;
-        let mean = |strain: &dyn Fn(&LayerLoading) -> Curve<Ratio>| -> Result<Ratio, Unbounded> {
-            match layers {
-                [only] => Ok(strain(only).mean()),
-                _ => stiffness_weighted(layers, &rigidity, strain).map(|strain| strain.integral()),
-            }
+        let (thermal, imposed) = match layers {
+            [only] => (only.thermal.mean(), only.imposed),
+            _ => (
+                stiffness_weighted(layers, &rigidity, |layer| layer.thermal)?,
+                stiffness_weighted(layers, &rigidity, |layer| Curve::constant(layer.imposed))?,
+            ),
         };
         Ok(PieceDeformation {
             length,
             from_end: rigidity.end() < rigidity.start(),
-            thermal: length * mean(&|layer| layer.thermal)?,
-            imposed: length * mean(&|layer| Curve::constant(layer.imposed))?,
+            thermal: length * thermal,
+            imposed: length * imposed,
             rigidity,
             flexibility,
             line,
@@ -139,21 +140,21 @@ impl PieceDeformation {
 
     /// `∫ N dx / EA`: PL/AE, for any taper and line load.
     pub(super) fn stretch(&self, force: &Curve<Force>) -> Result<Length, Unbounded> {
-        Ok(self.length * Quotient::new(*force, self.rigidity)?.integral())
+        Ok(self.length * integral(force, &self.rigidity)?)
     }
 }
 
-/// Σ E A e / EA: the free strain of bonded layers.
+/// `∫ Σ E A e / EA ds`: the mean free strain of bonded layers.
 fn stiffness_weighted(
     layers: &[LayerLoading],
     rigidity: &Curve<Force>,
-    strain: &dyn Fn(&LayerLoading) -> Curve<Ratio>,
-) -> Result<Quotient<Force, Force>, Unbounded> {
+    strain: impl Fn(&LayerLoading) -> Curve<Ratio>,
+) -> Result<Ratio, Unbounded> {
     let weighted = layers.iter().fold(
         Curve::constant(Force::default()),
         |sum: Curve<Force>, layer| sum + layer.rigidity().times(&strain(layer)),
     );
-    Quotient::new(weighted, *rigidity)
+    integral(&weighted, rigidity)
 }
 
 /// The elastic strain of a layer times EA of all: ε − e_k = (N + Σ EA (e − e_k)) / EA. Written with

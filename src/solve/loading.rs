@@ -10,6 +10,7 @@ use std::ops::Range;
 use std::rc::Rc;
 
 /// All actions of a combination on one member, factored and added up.
+#[derive(Default)]
 pub(super) struct Loading {
     /// Force at each station, + toward the end.
     pub(super) forces: Vec<Force>,
@@ -36,7 +37,7 @@ pub(super) struct LayerLoading {
 }
 
 /// The layers of all pieces, piece by piece; a part known by its stiffness has one, a gap none.
-#[derive(Clone)]
+#[derive(Default)]
 pub(super) struct Layers {
     pub(super) all: Vec<LayerLoading>,
     of_piece: Rc<[Range<usize>]>,
@@ -99,65 +100,77 @@ impl LayerLoading {
 }
 
 impl Loading {
-    /// Adds up what `combination` puts on `member`, whose unloaded layers are `made`.
-    pub(super) fn of(
+    /// Nothing acting on `member`, whose unloaded layers are `made`.
+    fn clear(&mut self, member: &Member, made: &Layers) {
+        self.forces.clear();
+        self.forces.resize(member.stations.len(), Force::default());
+        let no_line = Curve::constant(ForcePerLength::default());
+        self.lines.clear();
+        self.lines.resize(member.pieces.len(), no_line);
+        self.layers.all.clone_from(&made.all);
+        self.layers.of_piece.clone_from(&made.of_piece);
+        self.movements.clear();
+        self.movements
+            .resize(member.supports.len(), Length::default());
+    }
+
+    /// Adds up what `combination` puts on `member`, whose unloaded layers are `made`, in the place
+    /// of what was added up before.
+    pub(super) fn add_up(
+        &mut self,
         model: &Model,
         member: &Member,
         combination: &Combination,
         made: &Layers,
-    ) -> Self {
-        let mut loading = Loading {
-            forces: vec![Force::default(); member.stations.len()],
-            lines: vec![Curve::constant(ForcePerLength::default()); member.pieces.len()],
-            layers: made.clone(),
-            movements: vec![Length::default(); member.supports.len()],
-        };
+    ) {
+        self.clear(member, made);
         let factor = |case: usize| combination.factors[case];
         let actions = &member.actions;
         for action in &actions.forces {
-            loading.forces[action.station] += action.force * factor(action.case);
+            self.forces[action.station] += action.force * factor(action.case);
         }
         for action in &actions.lines {
             let line = Curve::linear(action.start, action.end) * factor(action.case);
-            loading.lines[action.piece] = loading.lines[action.piece] + line;
+            self.lines[action.piece] = self.lines[action.piece] + line;
         }
-        for action in &actions.weights {
-            let times = action.number * factor(action.case);
-            if times != 0.0 {
-                loading.add_weight(model, member, action.segment, action.layer, times);
+        if !actions.weights.is_empty() {
+            // On a member that rises, weight acts toward the start.
+            let gravity = -member.rise() * STANDARD_GRAVITY;
+            for action in &actions.weights {
+                let along = gravity * (action.number * factor(action.case));
+                self.add_weight(model, member, (action.segment, action.layer), along);
             }
         }
         for action in &actions.temperatures {
             let times = factor(action.case);
             if times != 0.0 {
                 let change = Curve::linear(action.start, action.end) * times;
-                loading.add_temperature(model, member, action.segment, action.layer, &change);
+                self.add_temperature(model, member, action.segment, action.layer, &change);
             }
         }
         for action in &actions.strains {
             let strain = action.strain * factor(action.case);
             for piece in pieces_of(member, action.segment) {
-                let at = loading.layers.of_piece[piece].start + action.layer;
-                loading.layers.all[at].imposed += strain;
+                let at = self.layers.of_piece[piece].start + action.layer;
+                self.layers.all[at].imposed += strain;
             }
         }
         for action in &actions.movements {
-            loading.movements[action.support] += action.movement * factor(action.case);
+            self.movements[action.support] += action.movement * factor(action.case);
         }
-        loading
     }
 
-    /// ρ g A (or the mass per length times g) along the axis.
+    /// ρ g A (or the mass per length times g), `along` being g along the axis.
     fn add_weight(
         &mut self,
         model: &Model,
         member: &Member,
-        segment: usize,
-        layer: usize,
-        times: f64,
+        (segment, layer): (usize, usize),
+        along: f64,
     ) {
-        // On a member that rises, weight acts toward the start.
-        let along = -member.rise() * STANDARD_GRAVITY * times;
+        if along == 0.0 {
+            return;
+        }
         for piece in pieces_of(member, segment) {
             let at = self.layers.of_piece[piece].start + layer;
             let per_length = |mass: crate::quantity::MassPerLength| -> ForcePerLength {

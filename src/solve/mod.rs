@@ -21,9 +21,10 @@ mod threshold;
 pub use threshold::Threshold;
 
 use crate::model::{Combination, Member, Model, Name, SegmentKind, Side, SupportKind};
-use crate::quantity::{Force, Length};
+use crate::quantity::{Flexibility, Force, Length};
 use crate::result::MemberResult;
 use chain::{Chain, Hold, Link, NoSolution, Solved, States};
+use contact::Pieces;
 use deformation::{PieceDeformation, PieceStiffness};
 use loading::{Layers, Loading};
 use recover::Recovered;
@@ -125,10 +126,11 @@ pub fn member(
         member,
         combination,
         &Stiffness::of(model, member, combination),
+        &mut Workspace::default(),
     )
 }
 
-/// [`member`], with its stiffness at hand.
+/// [`member`], with its stiffness at hand and in a workspace that was used before.
 ///
 /// # Errors
 /// As [`member`].
@@ -137,26 +139,32 @@ pub fn member_of(
     member: &Member,
     combination: &Combination,
     stiffness: &Stiffness,
+    workspace: &mut Workspace,
 ) -> Result<Solution, SolveError> {
-    let mut loading = Loading::of(model, member, combination, &stiffness.layers);
-    let prepared = Prepared::of(member, &mut loading, stiffness)?;
-    let (mut solved, mut states) = prepared
+    let Workspace {
+        loading,
+        prepared,
+        settled,
+        cold,
+    } = workspace;
+    loading.add_up(model, member, combination, &stiffness.layers);
+    prepared.prepare(member, loading, stiffness)?;
+    prepared
         .chain
-        .settle()
+        .settle(settled)
         .map_err(|reason| explain(member, reason))?;
-    let undecided = prepared
-        .chain
-        .share_between_equals(&mut solved, &mut states);
+    let undecided = prepared.chain.share_between_equals(settled);
+    let Settled { solved, states, .. } = &*settled;
     let recovered = Recovered {
         model,
         member,
-        loading: &loading,
-        prepared: &prepared,
-        solved: &solved,
-        states: &states,
+        loading,
+        prepared,
+        solved,
+        states,
     };
     let mut result = recovered.result()?;
-    result.restraint = restraint::share(member, &loading, &prepared, &solved);
+    result.restraint = restraint::share(member, prepared, settled, cold);
     let name = |station: usize| member.stations[station].name.clone();
     let free = solved
         .free
@@ -171,7 +179,27 @@ pub fn member_of(
     })
 }
 
+/// The memory that solving needs on its way, so that a job of many combinations asks for it once.
+/// What one combination leaves in it is of no matter to the next.
+#[derive(Default)]
+pub struct Workspace {
+    loading: Loading,
+    prepared: Prepared,
+    settled: Settled,
+    /// Without the temperature, for the share of restraint.
+    cold: Settled,
+}
+
+/// A chain solved in the states of its stops and joints.
+#[derive(Default)]
+struct Settled {
+    solved: Solved,
+    states: States,
+    pieces: Pieces,
+}
+
 /// A member's pieces and the chain that they condense to.
+#[derive(Default)]
 struct Prepared {
     /// One for each piece; `None` for a gap.
     pieces: Vec<Option<PieceDeformation>>,
@@ -179,44 +207,46 @@ struct Prepared {
 }
 
 impl Prepared {
-    fn of(
+    /// Condenses a member under its loading, in the place of what was condensed before.
+    fn prepare(
+        &mut self,
         member: &Member,
-        loading: &mut Loading,
+        loading: &Loading,
         stiffness: &Stiffness,
-    ) -> Result<Self, SolveError> {
-        let mut pieces = Vec::with_capacity(member.pieces.len());
-        let mut links = Vec::with_capacity(member.pieces.len());
+    ) -> Result<(), SolveError> {
+        let chain = &mut self.chain;
+        self.pieces.clear();
+        chain.links.clear();
         for (index, piece) in member.pieces.iter().enumerate() {
             let segment = &member.segments[piece.segment];
             let pointed = |_| SolveError::PointLoaded {
                 member: member.name.clone(),
                 segment: segment.name.clone(),
             };
-            let (deformation, link) = match (&segment.kind, &stiffness.pieces[index]) {
-                (SegmentKind::Gap(gap), _) => (None, joint(gap)),
+            match (&segment.kind, &stiffness.pieces[index]) {
+                (SegmentKind::Gap(gap), _) => {
+                    chain.links.push(joint(gap));
+                    self.pieces.push(None);
+                }
                 (_, None) => return Err(pointed(quotient::Unbounded)),
                 (_, Some(made)) => {
                     let layers = loading.layers.of_piece(index);
                     let piece = PieceDeformation::of(made, layers, loading.lines[index])
                         .map_err(pointed)?;
-                    let link = link(&piece).map_err(pointed)?;
-                    (Some(piece), link)
+                    chain.links.push(link(&piece).map_err(pointed)?);
+                    self.pieces.push(Some(piece));
                 }
-            };
-            pieces.push(deformation);
-            links.push(link);
+            }
         }
-        let holds = holds(member, loading);
-        let zero = threshold(&loading.forces, &links, &holds);
-        Ok(Prepared {
-            pieces,
-            chain: Chain {
-                loads: std::mem::take(&mut loading.forces),
-                links,
-                holds,
-                zero,
-            },
-        })
+        chain.loads.clone_from(&loading.forces);
+        chain.holds.clear();
+        let holds = 0..member.supports.len();
+        chain
+            .holds
+            .extend(holds.map(|support| hold(member, loading, support)));
+        chain.holds.sort_by_key(|hold| hold.station);
+        chain.zero = threshold(&chain.loads, &chain.links, &chain.holds);
+        Ok(())
     }
 }
 
@@ -247,91 +277,91 @@ fn link(piece: &PieceDeformation) -> Result<Link, quotient::Unbounded> {
     })
 }
 
-/// The supports in order of station, each with its face where movement and clearance put it.
-fn holds(member: &Member, loading: &Loading) -> Vec<Hold> {
-    let hold = |support: usize| {
-        let movement = loading.movements[support];
-        let station = member.supports[support].station;
-        match member.supports[support].kind {
-            SupportKind::Fixed => Hold {
+/// A support, its face where movement and clearance put it.
+fn hold(member: &Member, loading: &Loading, support: usize) -> Hold {
+    let movement = loading.movements[support];
+    let station = member.supports[support].station;
+    match member.supports[support].kind {
+        SupportKind::Fixed => Hold {
+            station,
+            support,
+            face: movement,
+            stiffness: None,
+            stop: None,
+        },
+        SupportKind::Spring(stiffness) => Hold {
+            station,
+            support,
+            face: movement,
+            stiffness: Some(stiffness),
+            stop: None,
+        },
+        SupportKind::Stop {
+            clearance,
+            side,
+            stiffness,
+        } => {
+            let face = match side {
+                Side::End => movement + clearance,
+                Side::Start => movement - clearance,
+            };
+            Hold {
                 station,
                 support,
-                face: movement,
-                stiffness: None,
-                stop: None,
-            },
-            SupportKind::Spring(stiffness) => Hold {
-                station,
-                support,
-                face: movement,
-                stiffness: Some(stiffness),
-                stop: None,
-            },
-            SupportKind::Stop {
-                clearance,
-                side,
+                face,
                 stiffness,
-            } => {
-                let face = match side {
-                    Side::End => movement + clearance,
-                    Side::Start => movement - clearance,
-                };
-                Hold {
-                    station,
-                    support,
-                    face,
-                    stiffness,
-                    stop: Some(side),
-                }
+                stop: Some(side),
             }
         }
-    };
-    let mut holds: Vec<Hold> = (0..member.supports.len()).map(hold).collect();
-    holds.sort_by_key(|hold| hold.station);
-    holds
+    }
 }
 
 /// What counts as zero, from the sizes of what comes together on the member.
 fn threshold(forces: &[Force], links: &[Link], holds: &[Hold]) -> Threshold {
-    let loads = forces
-        .iter()
-        .fold(Force::default(), |sum, force| sum + force.abs())
-        + links
-            .iter()
-            .fold(Force::default(), |sum, link| sum + link.load.abs());
-    let faces = holds
-        .iter()
-        .fold(Length::default(), |sum, hold| sum + hold.face.abs());
-    let free = links
-        .iter()
-        .fold(Length::default(), |sum, link| sum + link.free.abs());
-    let flexibility = links.iter().fold(
-        Default::default(),
-        |sum: crate::quantity::Flexibility, link| sum + link.flexibility,
-    );
+    let mut loads = Force::default();
+    for force in forces {
+        loads += force.abs();
+    }
+    let mut lengths = Length::default();
+    for hold in holds {
+        lengths += hold.face.abs();
+    }
+    let (mut free, mut flexibility) = (Length::default(), Flexibility::default());
+    for link in links {
+        loads += link.load.abs();
+        free += link.free.abs();
+        flexibility += link.flexibility;
+    }
     let restrained = if flexibility.value > 0.0 {
         free / flexibility
     } else {
         Force::default()
     };
-    Threshold::relative_to(loads + restrained, faces + free + flexibility * loads)
+    Threshold::relative_to(loads + restrained, lengths + free + flexibility * loads)
 }
 
 impl Chain {
-    /// Finds the states, solves, and lets go what bears with no force: an exact touch.
-    fn settle(&self) -> Result<(Solved, States), NoSolution> {
-        let mut states = contact::states(self)?;
+    /// Finds the states and solves.
+    fn settle(&self, settled: &mut Settled) -> Result<(), NoSolution> {
+        contact::find(self, &mut settled.states, &mut settled.pieces)?;
+        self.solve_and_release(settled)
+    }
+
+    /// Solves in the states that were found, and lets go what bears with no force: an exact touch.
+    fn solve_and_release(&self, settled: &mut Settled) -> Result<(), NoSolution> {
+        let Settled { solved, states, .. } = settled;
         loop {
-            let solved = self.solve(&states)?;
-            if !self.release_touching(&mut states, &solved) {
-                return Ok((solved, states));
+            self.solve(states, solved)?;
+            if !self.release_touching(states, solved) {
+                return Ok(());
             }
         }
     }
 
     /// Splits the reaction of a rigid stop evenly among all that stand at its face; gives the
     /// supports that share one.
-    fn share_between_equals(&self, solved: &mut Solved, states: &mut States) -> Vec<usize> {
+    fn share_between_equals(&self, settled: &mut Settled) -> Vec<usize> {
+        let Settled { solved, states, .. } = settled;
         let mut undecided = Vec::new();
         for bearing in 0..self.holds.len() {
             let hold = &self.holds[bearing];

@@ -7,10 +7,12 @@ use std::ops::{Add, Div, Mul, Sub};
 /// A curve over a curve that keeps one sign, along a piece from s = 0 to s = 1.
 ///
 /// Zeros that both have at an end (the tip of a cone, where N and A vanish together) are taken
-/// out when it is made, so that values at a tip are the limits there.
-pub(super) struct Quotient<A, B> {
-    numerator: Curve<A>,
-    denominator: Curve<B>,
+/// out before it is looked at, so that values at a tip are the limits there. The curves are
+/// borrowed: mostly nothing is taken out, and a curve is large.
+#[derive(Clone, Copy)]
+struct Quotient<'c, A, B> {
+    numerator: &'c Curve<A>,
+    denominator: &'c Curve<B>,
 }
 
 /// The denominator vanishes where the numerator does not: a point that carries force.
@@ -68,43 +70,78 @@ const GAUSS: [(f64, f64); 8] = [
 /// ρ⁻²ⁿ with ρ the half axes' sum of the largest ellipse without a zero, is below 10⁻¹⁶.
 const SPREAD: f64 = 3.0;
 
-impl<A, B> Quotient<A, B>
+/// `∫ ds` of one curve over another, to rounding.
+///
+/// Fails where the denominator vanishes at an end and the numerator does not as well.
+pub(super) fn integral<A, B>(
+    numerator: &Curve<A>,
+    denominator: &Curve<B>,
+) -> Result<<A as Div<B>>::Output, Unbounded>
 where
     A: Value + Div<B> + Div<A, Output = Ratio>,
     B: Value + Div<B, Output = Ratio>,
     <A as Div<B>>::Output: Value,
 {
-    /// Fails where the denominator vanishes at an end and the numerator does not as well.
-    pub(super) fn new(numerator: Curve<A>, denominator: Curve<B>) -> Result<Self, Unbounded> {
-        let zero = B::default();
-        if denominator.start() != zero && denominator.end() != zero {
-            return Ok(Quotient {
-                numerator,
-                denominator,
-            });
-        }
-        let (numerator, denominator) = cancelled(numerator, denominator)?;
-        let (numerator, denominator) = cancelled(numerator.reversed(), denominator.reversed())?;
-        Ok(Quotient {
-            numerator: numerator.reversed(),
-            denominator: denominator.reversed(),
-        })
-    }
+    looked_at(numerator, denominator, |quotient| quotient.integral())
+}
 
+/// The largest and the least value of one curve over another with their places; of equal ones the
+/// first.
+///
+/// Fails where the denominator vanishes at an end and the numerator does not as well.
+pub(super) fn extremes<A, B>(
+    numerator: &Curve<A>,
+    denominator: &Curve<B>,
+) -> Result<Extremes<<A as Div<B>>::Output>, Unbounded>
+where
+    A: Value + Div<B> + Div<A, Output = Ratio>,
+    B: Value + Div<B, Output = Ratio>,
+    <A as Div<B>>::Output: Value,
+{
+    looked_at(numerator, denominator, |quotient| quotient.extremes())
+}
+
+fn looked_at<A: Value, B: Value, R>(
+    numerator: &Curve<A>,
+    denominator: &Curve<B>,
+    look: impl FnOnce(Quotient<A, B>) -> R,
+) -> Result<R, Unbounded> {
+    let zero = B::default();
+    let reduced;
+    let (numerator, denominator) = if denominator.start() != zero && denominator.end() != zero {
+        (numerator, denominator)
+    } else {
+        let (numerator, denominator) = cancelled(*numerator, *denominator)?;
+        let (numerator, denominator) = cancelled(numerator.reversed(), denominator.reversed())?;
+        reduced = (numerator.reversed(), denominator.reversed());
+        (&reduced.0, &reduced.1)
+    };
+    Ok(look(Quotient {
+        numerator,
+        denominator,
+    }))
+}
+
+impl<A, B> Quotient<'_, A, B>
+where
+    A: Value + Div<B> + Div<A, Output = Ratio>,
+    B: Value + Div<B, Output = Ratio>,
+    <A as Div<B>>::Output: Value,
+{
     /// The value at `s`.
-    pub(super) fn at(&self, s: f64) -> <A as Div<B>>::Output {
+    fn at(&self, s: f64) -> <A as Div<B>>::Output {
         self.numerator.at(s) / self.denominator.at(s)
     }
 
     /// `∫ ds` over the piece, to rounding: exactly over a constant, else by Gauss points on parts
     /// that halve toward a zero of the denominator.
-    pub(super) fn integral(&self) -> <A as Div<B>>::Output {
+    fn integral(&self) -> <A as Div<B>>::Output {
         let first = self.denominator.start();
         if self.denominator.coefficients().iter().all(|&c| c == first) {
             return self.numerator.mean() / first;
         }
         let mut sum = <A as Div<B>>::Output::default();
-        let mut parts = vec![(self.numerator, self.denominator, 1.0)];
+        let mut parts = vec![(*self.numerator, *self.denominator, 1.0)];
         while let Some((numerator, denominator, width)) = parts.pop() {
             if spread(&denominator) <= SPREAD {
                 sum = sum + gauss(&numerator, &denominator) * width;
@@ -117,8 +154,8 @@ where
         sum
     }
 
-    /// The largest and the least value with their places; of equal ones the first.
-    pub(super) fn extremes(&self) -> Extremes<<A as Div<B>>::Output> {
+    /// The largest and the least value; where the ends are they, without a search.
+    fn extremes(&self) -> Extremes<<A as Div<B>>::Output> {
         let start = Extreme {
             value: self.numerator.start() / self.denominator.start(),
             at: 0.0,
@@ -126,26 +163,22 @@ where
         if self.numerator.degree() == 0 && self.denominator.degree() == 0 {
             return (start, start);
         }
-        let (mut most, mut least) = (start, start);
-        let mut look = |seen: Extreme<<A as Div<B>>::Output>| {
-            if seen.value > most.value {
-                most = seen;
-            }
-            if seen.value < least.value {
-                least = seen;
-            }
-        };
+        let mut seen = (start, start);
         if !self.is_monotone() {
             for at in sign_changes(&self.slope()) {
                 let value = self.at(at);
-                look(Extreme { value, at });
+                widen(&mut seen, Extreme { value, at });
             }
         }
-        look(Extreme {
-            value: self.numerator.end() / self.denominator.end(),
-            at: 1.0,
-        });
-        (most, least)
+        let end = self.numerator.end() / self.denominator.end();
+        widen(
+            &mut seen,
+            Extreme {
+                value: end,
+                at: 1.0,
+            },
+        );
+        seen
     }
 
     /// Whether the value surely rises or falls all along: over a constant, where the numerator's
@@ -159,13 +192,23 @@ where
 
     /// The numerator of the derivative, P′Q − PQ′, in numbers scaled to about 1.
     fn slope(&self) -> Curve<f64> {
-        let (most, size) = (largest(&self.numerator), largest(&self.denominator));
+        let (most, size) = (largest(self.numerator), largest(self.denominator));
         if most == A::default() {
             return Curve::constant(0.0);
         }
         let p: Curve<f64> = self.numerator.map(|c| Div::<A>::div(c, most).value);
         let q: Curve<f64> = self.denominator.map(|c| Div::<B>::div(c, size).value);
         p.derivative().times(&q) - p.times(&q.derivative())
+    }
+}
+
+/// Takes one more value into the extremes seen so far.
+fn widen<T: Value>((most, least): &mut Extremes<T>, seen: Extreme<T>) {
+    if seen.value > most.value {
+        *most = seen;
+    }
+    if seen.value < least.value {
+        *least = seen;
     }
 }
 
@@ -228,7 +271,7 @@ where
 
 #[cfg(test)]
 mod tests {
-    use super::Quotient;
+    use super::{extremes, integral, looked_at};
     use crate::quantity::{Area, Curve, Force, from_si};
     use approx::assert_relative_eq;
 
@@ -246,12 +289,9 @@ mod tests {
     fn a_round_taper_integrates_to_its_closed_form() {
         // ∫ ds / (a + (b - a) s)² = 1 / (a b)
         for ratio in [1.0 + 1e-7, 1.5, 4.0, 1e3, 1e6] {
-            let taper = Quotient::new(
-                force(&[1.0]),
-                area(&[1.0, 1.0 / ratio, 1.0 / (ratio * ratio)]),
-            )
-            .unwrap();
-            assert_relative_eq!(taper.integral().value, ratio, max_relative = 4e-15);
+            let taper = area(&[1.0, 1.0 / ratio, 1.0 / (ratio * ratio)]);
+            let stretch = integral(&force(&[1.0]), &taper).unwrap();
+            assert_relative_eq!(stretch.value, ratio, max_relative = 4e-15);
         }
     }
 
@@ -259,9 +299,9 @@ mod tests {
     fn a_flat_taper_integrates_to_its_closed_form() {
         // ∫ ds / (a + (b - a) s) = ln(b / a) / (b - a)
         for ratio in [1.5_f64, 4.0, 1e3, 1e6] {
-            let taper = Quotient::new(force(&[1.0]), area(&[1.0, ratio])).unwrap();
+            let stretch = integral(&force(&[1.0]), &area(&[1.0, ratio])).unwrap();
             assert_relative_eq!(
-                taper.integral().value,
+                stretch.value,
                 ratio.ln() / (ratio - 1.0),
                 max_relative = 4e-15
             );
@@ -271,19 +311,19 @@ mod tests {
     #[test]
     fn zeros_that_both_have_at_a_tip_cancel() {
         // (1 - s)³ / (1 - s)² = 1 - s
-        let cone = Quotient::new(force(&[1.0, 0.0, 0.0, 0.0]), area(&[1.0, 0.0, 0.0])).unwrap();
-        assert_relative_eq!(cone.integral().value, 0.5, max_relative = 1e-15);
-        assert_eq!(cone.at(1.0).value, 0.0);
-        assert!(Quotient::new(force(&[1.0]), area(&[1.0, 0.0, 0.0])).is_err());
-        assert!(Quotient::new(force(&[1.0, 0.0]), area(&[1.0, 0.0, 0.0])).is_err());
+        let (cubic, cone) = (force(&[1.0, 0.0, 0.0, 0.0]), area(&[1.0, 0.0, 0.0]));
+        let stretch = integral(&cubic, &cone).unwrap();
+        assert_relative_eq!(stretch.value, 0.5, max_relative = 1e-15);
+        let at_tip = looked_at(&cubic, &cone, |quotient| quotient.at(1.0)).unwrap();
+        assert_eq!(at_tip.value, 0.0);
+        assert!(integral(&force(&[1.0]), &cone).is_err());
+        assert!(integral(&force(&[1.0, 0.0]), &cone).is_err());
     }
 
     #[test]
     fn extremes_inside_a_piece_are_found_with_their_place() {
         // s (1 - s) over a constant: largest at the middle
-        let (most, least) = Quotient::new(force(&[0.0, 0.5, 0.0]), area(&[2.0]))
-            .unwrap()
-            .extremes();
+        let (most, least) = extremes(&force(&[0.0, 0.5, 0.0]), &area(&[2.0])).unwrap();
         assert_relative_eq!(most.value.value, 0.125, max_relative = 1e-15);
         assert_relative_eq!(most.at, 0.5, max_relative = 1e-12);
         assert_eq!(least.value.value, 0.0);

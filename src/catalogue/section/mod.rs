@@ -60,11 +60,7 @@ where
 
     /// The dimension as a curve, of degree 0 where it does not taper.
     pub fn curve(&self) -> Curve<Q> {
-        if self.start == self.end {
-            Curve::constant(self.start)
-        } else {
-            Curve::linear(self.start, self.end)
-        }
+        Curve::linear(self.start, self.end)
     }
 
     /// The larger of its ends.

@@ -8,10 +8,9 @@ use super::chain::{Solved, States};
 use super::loading::Loading;
 use super::{Prepared, SolveError};
 use crate::model::{Member, Model, Side, Station, Support, SupportKind};
-use crate::quantity::{Force, Length};
+use crate::quantity::{Length, Stress};
 use crate::result::{
-    MemberResult, MemberState, MemberTotals, SegmentResult, StationResult, SupportResult,
-    SupportWord,
+    MemberResult, MemberState, MemberTotals, StationResult, SupportResult, SupportWord,
 };
 
 /// A solved member with all that its results are made of.
@@ -27,41 +26,46 @@ pub(super) struct Recovered<'a> {
 impl Recovered<'_> {
     /// The finished results of the member, its share of restraint left out.
     pub(super) fn result(&self) -> Result<MemberResult, SolveError> {
-        let segments = (0..self.member.segments.len())
-            .map(|index| self.segment(index))
-            .collect::<Result<Vec<_>, _>>()?;
-        let sum = |part: fn(&SegmentResult) -> Length| {
-            segments
-                .iter()
-                .fold(Length::default(), |sum, s| sum + part(s))
-        };
-        let first = |beats: fn(&SegmentResult, &SegmentResult) -> bool| {
-            segments[1..].iter().fold(
-                &segments[0],
-                |best, s| if beats(s, best) { s } else { best },
-            )
-        };
-        let most = first(|a, b| a.force_max > b.force_max);
-        let least = first(|a, b| a.force_min < b.force_min);
-        let result = MemberResult {
+        let mut segments = Vec::with_capacity(self.member.segments.len());
+        let mut layers = Vec::new();
+        for index in 0..self.member.segments.len() {
+            segments.push(self.segment(index, &mut layers)?);
+        }
+        let (first, none) = (&segments[0], Length::default());
+        let mut result = MemberResult {
             name: self.member.name.clone(),
             state: MemberState::Taut,
             slack_by: None,
             restraint: None,
             misfit_found: None,
             totals: self.totals(),
-            elongation: sum(|s| s.elongation),
-            elongation_force: sum(|s| s.elongation_force),
-            elongation_temperature: sum(|s| s.elongation_temperature),
-            elongation_misfit: sum(|s| s.elongation_misfit),
-            force_max: most.force_max,
-            force_max_at: most.force_max_at,
-            force_min: least.force_min,
-            force_min_at: least.force_min_at,
+            elongation: none,
+            elongation_force: none,
+            elongation_temperature: none,
+            elongation_misfit: none,
+            force_max: first.force_max,
+            force_max_at: first.force_max_at,
+            force_min: first.force_min,
+            force_min_at: first.force_min_at,
             stations: self.stations(),
             supports: self.supports(),
-            segments,
+            segments: Vec::new(),
         };
+        for segment in &segments {
+            result.elongation += segment.elongation;
+            result.elongation_force += segment.elongation_force;
+            result.elongation_temperature += segment.elongation_temperature;
+            result.elongation_misfit += segment.elongation_misfit;
+            if segment.force_max > result.force_max {
+                result.force_max = segment.force_max;
+                result.force_max_at = segment.force_max_at;
+            }
+            if segment.force_min < result.force_min {
+                result.force_min = segment.force_min;
+                result.force_min_at = segment.force_min_at;
+            }
+        }
+        result.segments = segments;
         if is_finite(&result) {
             Ok(result)
         } else {
@@ -72,19 +76,17 @@ impl Recovered<'_> {
     }
 
     fn totals(&self) -> MemberTotals {
-        let add = |sum: Force, force: Force| sum + force;
-        let chain = &self.prepared.chain;
-        let forces = chain.loads.iter().copied();
-        let lines = chain.links.iter().map(|link| link.load);
-        MemberTotals {
-            applied: forces.chain(lines).fold(Force::default(), add),
-            reactions: self
-                .solved
-                .reactions
-                .iter()
-                .copied()
-                .fold(Force::default(), add),
+        let mut totals = MemberTotals::default();
+        for &load in &self.prepared.chain.loads {
+            totals.applied += load;
         }
+        for link in &self.prepared.chain.links {
+            totals.applied += link.load;
+        }
+        for &reaction in &self.solved.reactions {
+            totals.reactions += reaction;
+        }
+        totals
     }
 
     fn stations(&self) -> Vec<StationResult> {
@@ -142,20 +144,17 @@ impl Recovered<'_> {
 
 /// Whether every sum is a number: what feeds them is then as well.
 fn is_finite(result: &MemberResult) -> bool {
-    let stresses = result
-        .segments
-        .iter()
-        .flat_map(|s| [s.stress_max, s.stress_min])
-        .flatten();
-    let displacements = result.stations.iter().map(|s| s.displacement.value);
-    [
-        result.elongation.value,
-        result.force_max.value,
-        result.force_min.value,
-        result.totals.reactions.value,
-    ]
-    .into_iter()
-    .chain(stresses.map(|stress| stress.value))
-    .chain(displacements)
-    .all(f64::is_finite)
+    let finite = |stress: Option<Stress>| stress.is_none_or(|stress| stress.value.is_finite());
+    result.elongation.value.is_finite()
+        && result.force_max.value.is_finite()
+        && result.force_min.value.is_finite()
+        && result.totals.reactions.value.is_finite()
+        && result
+            .segments
+            .iter()
+            .all(|segment| finite(segment.stress_max) && finite(segment.stress_min))
+        && result
+            .stations
+            .iter()
+            .all(|station| station.displacement.value.is_finite())
 }

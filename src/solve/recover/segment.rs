@@ -9,28 +9,34 @@ use crate::result::{LayerResult, SegmentResult};
 use crate::solve::SolveError;
 use crate::solve::deformation::{Elongation, PieceDeformation};
 use crate::solve::loading::pieces_of;
-use crate::solve::quotient::{Extreme, Quotient, Unbounded};
+use crate::solve::quotient::{Extreme, Unbounded, extremes};
 
 /// What is gathered of a segment while its pieces are gone through.
-struct Gathered {
+struct Gathered<'a> {
     force: Range<Force>,
     elongation: Elongation,
     /// Of a gap: whether it bears.
     bears: Option<bool>,
-    layers: Vec<LayerRange>,
+    layers: &'a mut [LayerRange],
 }
 
 impl Recovered<'_> {
-    /// The results of the segment with this index.
-    pub(super) fn segment(&self, index: usize) -> Result<SegmentResult, SolveError> {
+    /// The results of the segment with this index. `layers` is memory that is used anew.
+    pub(super) fn segment(
+        &self,
+        index: usize,
+        layers: &mut Vec<LayerRange>,
+    ) -> Result<SegmentResult, SolveError> {
         let segment = &self.member.segments[index];
         let pieces = pieces_of(self.member, index);
         let (first, last) = (pieces.start, pieces.end - 1);
+        layers.clear();
+        layers.resize(segment.layers().len(), LayerRange::nothing());
         let mut gathered = Gathered {
             force: Range::NOTHING,
             elongation: Elongation::default(),
             bears: None,
-            layers: vec![LayerRange::nothing(); segment.layers().len()],
+            layers,
         };
         for piece in pieces {
             self.gather(segment, piece, &mut gathered)
@@ -87,9 +93,7 @@ impl Recovered<'_> {
         };
         let force = deformation.force(start, end);
         let one: Curve<Ratio> = Curve::constant(from_si(1.0));
-        gathered
-            .force
-            .take(Quotient::new(force, one)?.extremes(), from, length);
+        gathered.force.take(extremes(&force, &one)?, from, length);
         gathered.elongation.force += deformation.stretch(&force)?;
         gathered.elongation.temperature += deformation.thermal;
         gathered.elongation.misfit += deformation.imposed;
@@ -128,7 +132,7 @@ impl Recovered<'_> {
             _ => None,
         };
         let (mut net, mut gross) = (Range::NOTHING, Range::NOTHING);
-        for layer in &gathered.layers {
+        for layer in gathered.layers.iter() {
             net.widen(&layer.net);
             gross.widen(&layer.gross);
         }
@@ -168,7 +172,7 @@ impl Recovered<'_> {
             gross_stress_max_at,
             gross_stress_min,
             gross_stress_min_at,
-            layers: self.layer_results(segment, &gathered.layers),
+            layers: self.layer_results(segment, gathered.layers),
         }
     }
 

@@ -5,7 +5,7 @@ use crate::model::Layer;
 use crate::quantity::{Area, Curve, Force, Length, Ratio, Stress, from_si};
 use crate::solve::deformation::{PieceDeformation, strain_times_rigidity};
 use crate::solve::loading::LayerLoading;
-use crate::solve::quotient::{Quotient, Unbounded};
+use crate::solve::quotient::{Extremes, Unbounded, extremes};
 
 /// What is gathered of a layer while the pieces of its segment are gone through.
 #[derive(Clone, Copy)]
@@ -39,11 +39,11 @@ pub(super) struct LayerOfPiece<'a> {
 }
 
 impl LayerOfPiece<'_> {
-    /// The layer's force over the area A′ that its stress stands on: N / A′ of a single layer, else
-    /// E (ε − e0) A / A′.
-    fn over(&self, area: &Curve<Area>) -> Result<Quotient<Force, Area>, Unbounded> {
+    /// The extremes of the layer's force over the area A′ that its stress stands on: N / A′ of a
+    /// single layer, else E (ε − e0) A / A′.
+    fn extremes_over(&self, area: &Curve<Area>) -> Result<Extremes<Stress>, Unbounded> {
         if self.layers.len() == 1 {
-            return Quotient::new(self.force, *area);
+            return extremes(&self.force, area);
         }
         let own = &self.layers[self.which];
         let strain = strain_times_rigidity(self.layers, self.which, &self.force);
@@ -52,10 +52,10 @@ impl LayerOfPiece<'_> {
         let stiffness: Curve<Ratio> = rigidity.map(|rigidity| rigidity / (own.modulus * unit));
         if *area == own.area {
             // The area cancels: stress is E times strain, also where the layer runs to a point.
-            return Quotient::new(strain, stiffness.map(|ratio| unit * ratio));
+            return extremes(&strain, &stiffness.map(|ratio| unit * ratio));
         }
         let share: Curve<Ratio> = own.area.map(|area| area / unit);
-        Quotient::new(strain.times(&share), area.times(&stiffness))
+        extremes(&strain.times(&share), &area.times(&stiffness))
     }
 
     /// Takes the stresses into what is gathered of the layer. `cut` is the piece's part of the
@@ -67,13 +67,12 @@ impl LayerOfPiece<'_> {
         (x, length): (Length, Length),
         gathered: &mut LayerRange,
     ) -> Result<(), Unbounded> {
-        let gross = self.over(&layer.gross.part(cut.0, cut.1))?.extremes();
+        let gross = self.extremes_over(&layer.gross.part(cut.0, cut.1))?;
         gathered.gross.take(gross, x, length);
         match &layer.net {
             Some(net) => {
-                gathered
-                    .net
-                    .take(self.over(&net.part(cut.0, cut.1))?.extremes(), x, length)
+                let net = self.extremes_over(&net.part(cut.0, cut.1))?;
+                gathered.net.take(net, x, length);
             }
             None => gathered.net.take(gross, x, length),
         }
