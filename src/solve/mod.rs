@@ -14,7 +14,7 @@ mod quotient;
 mod recover;
 mod restraint;
 mod roots;
-#[allow(dead_code)] // the assembly that puts itself into it comes next
+#[allow(dead_code, unused_imports)] // the assembly that puts itself into it comes next
 mod system;
 mod threshold;
 
