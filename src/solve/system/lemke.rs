@@ -10,6 +10,10 @@
 /// A coefficient of a table with diagonals of about 1 that counts as none.
 const NOTHING: f64 = 1e-11;
 
+/// Steps that differ by no more of themselves are one, and what is left of the cover counts as none
+/// below this part of the largest constant.
+const SAME: f64 = 1e-12;
+
 /// Where the path ends.
 pub(super) enum End {
     /// At a solution: by pair, whether z is the one that is more than 0.
@@ -33,14 +37,15 @@ struct Table {
     others: Vec<usize>,
 }
 
-/// Follows the path. The table is by rows, positive semidefinite, with diagonals of about 1.
-pub(super) fn complement(coefficients: &[f64], constants: &[f64]) -> End {
+/// Follows the path of one of several covers. The table is by rows, positive semidefinite, with
+/// diagonals of about 1.
+pub(super) fn complement(coefficients: &[f64], constants: &[f64], cover: usize) -> End {
     let size = constants.len();
     let largest = constants.iter().fold(0.0_f64, |most, c| most.max(c.abs()));
     if constants.iter().all(|&c| c >= 0.0) {
         return End::Solved(vec![false; size]);
     }
-    let mut table = Table::new(size, coefficients, constants, largest);
+    let mut table = Table::new(size, coefficients, constants, largest, cover);
     let cover = 2 * size;
     let mut row = table.most_negative();
     let mut column = size;
@@ -73,12 +78,13 @@ pub(super) fn complement(coefficients: &[f64], constants: &[f64]) -> End {
 }
 
 impl Table {
-    fn new(size: usize, given: &[f64], constants: &[f64], largest: f64) -> Self {
+    fn new(size: usize, given: &[f64], constants: &[f64], largest: f64, cover: usize) -> Self {
         let mut coefficients = Vec::with_capacity(size * (size + 1));
         for (pair, row) in given.chunks_exact(size).enumerate() {
             coefficients.extend_from_slice(row);
             // Multiples of the golden ratio, less their whole part: distinct and evenly spread.
-            coefficients.push(1.0 + (0.618_033_988_749_895 * (pair + 1) as f64).fract());
+            coefficients
+                .push(1.0 + (0.618_033_988_749_895 * (pair + 1 + cover * size) as f64).fract());
         }
         Table {
             size,
@@ -102,8 +108,8 @@ impl Table {
         )
     }
 
-    /// The row whose variable vanishes first while that of the column grows; the cover before
-    /// others.
+    /// The row whose variable vanishes first while that of the column grows; the cover's, where it
+    /// vanishes with it.
     fn first_to_vanish(&self, column: usize, cover: usize) -> Option<usize> {
         let mut first: Option<(usize, f64, f64)> = None;
         for row in 0..self.size {
@@ -112,22 +118,21 @@ impl Table {
                 continue;
             }
             let step = self.constants[row].max(0.0) / falls;
-            let before = match first {
-                None => true,
-                Some((other, best, slope)) => {
-                    let close = (step - best).abs() <= 1e-13 * step.max(best);
-                    if close {
-                        self.basic[row] == cover || (self.basic[other] != cover && falls > slope)
-                    } else {
-                        step < best
-                    }
-                }
-            };
+            let before = first.is_none_or(|(_, best, slope)| {
+                let close = (step - best).abs() <= SAME * best;
+                if close { falls > slope } else { step < best }
+            });
             if before {
                 first = Some((row, step, falls));
             }
         }
-        first.map(|(row, _, _)| row)
+        let (row, step, _) = first?;
+        let covered = self.basic.iter().position(|&variable| variable == cover);
+        let uncovers = |&at: &usize| {
+            let left = self.constants[at] + step * self.at(at, column);
+            self.at(at, column) < -NOTHING && left <= SAME
+        };
+        covered.filter(uncovers).or(Some(row))
     }
 
     /// The variable of a row changes places with that of a column.

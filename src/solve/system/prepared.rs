@@ -113,22 +113,16 @@ impl Prepared {
         let tableau = self
             .tableau
             .get_or_insert_with(|| Tableau::of(&self.system, base));
-        let (mut acts, failure) = match tableau.states(&self.system, base, &settled, loads) {
-            Found::States(acts) => (acts, None),
-            Found::Motion(motion, acts) => (acts, Some(pushed(motion, loads))),
-            Found::Contradiction(parts, acts) => (acts, Some(contradiction(&parts))),
-        };
-        // The states of a failure are tried as well: it may lie within the threshold.
-        let rounds = if failure.is_some() {
-            1
-        } else {
-            2 + 2 * acts.len()
+        let mut acts = match tableau.states(&self.system, base, &settled, loads) {
+            Found::States(acts) => acts,
+            Found::Motion(motion) => return Err(pushed(motion, loads)),
+            Found::Contradiction(parts) => return Err(contradiction(&parts)),
         };
         let mut last = Failure::Contradiction {
             rigid: Vec::new(),
             one_way: Vec::new(),
         };
-        for _ in 0..rounds {
+        for _ in 0..2 + 2 * acts.len() {
             let held = self.keep(acts.clone());
             match self.judge(held, loads) {
                 Verdict::Stands(standing) => return Ok(standing),
@@ -150,7 +144,7 @@ impl Prepared {
                 }
             }
         }
-        Err(failure.unwrap_or(last))
+        Err(last)
     }
 
     /// An open part that a motion stretches, the most stretched one.

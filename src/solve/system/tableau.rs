@@ -14,6 +14,12 @@ use crate::quantity::{Length, from_si};
 /// An own answer that counts as none beside the part's stiffness.
 const NOTHING: f64 = 1e-12;
 
+/// A force of a self-stress that counts as none beside its largest.
+const NOISE: f64 = 1e-9;
+
+/// So many covers are tried where the path of one ends in rounding.
+const COVERS: usize = 4;
+
 /// The answers of one-way parts to each other.
 #[derive(Debug, Clone)]
 pub(super) struct Tableau {
@@ -26,10 +32,10 @@ pub(super) struct Tableau {
 pub(super) enum Found {
     /// These parts act.
     States(Vec<bool>),
-    /// Nothing stops this motion; and the states in which the search met it.
-    Motion(Row, Vec<bool>),
-    /// These rigid parts contradict each other; and the states in which the search met it.
-    Contradiction(Vec<Part>, Vec<bool>),
+    /// Nothing stops this motion, along which the loads push.
+    Motion(Row),
+    /// These rigid parts contradict each other.
+    Contradiction(Vec<Part>),
 }
 
 impl Tableau {
@@ -113,22 +119,28 @@ impl Tableau {
             let pairs = pairs.into_iter().zip(&base.acts);
             pairs.map(|(given, &in_base)| given != in_base).collect()
         };
-        match complement(&self.coefficients, &constants) {
-            End::Solved(pairs) => Found::States(acting(pairs)),
-            End::Ray { direction, pairs } => {
-                let given: Vec<f64> = direction
-                    .iter()
-                    .zip(&self.scale)
-                    .map(|(direction, scale)| direction * scale)
-                    .collect();
-                ray(system, base, &given, acting(pairs), loads)
+        let mut last = Vec::new();
+        for cover in 0..COVERS {
+            match complement(&self.coefficients, &constants, cover) {
+                End::Solved(pairs) => return Found::States(acting(pairs)),
+                End::Ray { direction, pairs } => {
+                    let scaled = direction.iter().zip(&self.scale);
+                    let given: Vec<f64> =
+                        scaled.map(|(direction, scale)| direction * scale).collect();
+                    if let Some(proven) = ray(system, base, &given, loads) {
+                        return proven;
+                    }
+                    last = acting(pairs);
+                }
             }
         }
+        Found::States(last)
     }
 }
 
-/// What a ray means: a motion along which the loads push, or rigid parts that contradict.
-fn ray(system: &System, base: &Held, given: &[f64], acts: Vec<bool>, loads: &Loads) -> Found {
+/// What a ray means: a motion along which the loads push, or rigid parts that contradict. Nothing
+/// where neither exceeds what counts as zero: then rounding has made the ray.
+fn ray(system: &System, base: &Held, given: &[f64], loads: &Loads) -> Option<Found> {
     let answer = |in_base: bool| {
         let mut along = no_loads(system);
         for (part, &size) in given.iter().enumerate() {
@@ -143,30 +155,34 @@ fn ray(system: &System, base: &Held, given: &[f64], acts: Vec<bool>, loads: &Loa
         if motion.iter().any(|&x| x != 0.0) {
             let motion = super::held::largest_to_one(&motion);
             if work(&motion, loads) > loads.zero.force.value {
-                return Found::Motion(motion, acts);
+                return Some(Found::Motion(motion));
             }
         }
     }
-    let mut parts = Vec::new();
-    if let Ok(mut pulled) = answer(false) {
-        let largest = given
-            .iter()
-            .zip(&base.acts)
-            .filter(|(_, in_base)| !**in_base)
-            .fold(0.0_f64, |most, (size, _)| most.max(*size));
-        let rigid = (0..system.rigid.len()).map(Part::Rigid);
-        let one_way = (0..system.one_way.len()).map(Part::OneWay);
-        for part in rigid.chain(one_way) {
-            let force = match part {
-                Part::OneWay(index) if !base.acts[index] => given[index],
-                _ => *pulled.force(part),
-            };
-            if force.abs() > 1e-9 * largest && largest > 0.0 {
-                parts.push(part);
-            }
+    let mut pulled = answer(false).ok()?;
+    for (part, &force) in given.iter().enumerate() {
+        if !base.acts[part] {
+            pulled.one_way[part] = force;
         }
     }
-    Found::Contradiction(parts, acts)
+    let rigid = (0..system.rigid.len()).map(Part::Rigid);
+    let one_way = (0..system.one_way.len())
+        .filter(|&part| system.one_way[part].stiffness.is_none())
+        .map(Part::OneWay);
+    let mut parts: Vec<(Part, f64)> = rigid
+        .chain(one_way)
+        .map(|part| (part, *pulled.force(part)))
+        .collect();
+    let largest = parts
+        .iter()
+        .fold(0.0_f64, |most, part| most.max(part.1.abs()));
+    parts.retain(|part| part.1.abs() > NOISE * largest);
+    let room: f64 = parts
+        .iter()
+        .map(|&(part, force)| force / largest * loads.rest(part))
+        .sum();
+    let parts = parts.into_iter().map(|entry| entry.0).collect();
+    (room < -loads.zero.length.value).then_some(Found::Contradiction(parts))
 }
 
 /// The work of the forces on a motion (N, where the motion has no dimension).
