@@ -1,7 +1,13 @@
 //! The residuals bite: a finished result that is changed by one part in a million, or whose decided
 //! stop or joint is turned over, does not pass as proven.
 
+#[path = "proof/by_hand.rs"]
+mod by_hand;
 mod common;
+#[path = "proof/corruptions.rs"]
+mod corruptions;
+#[path = "proof/hand.rs"]
+mod hand;
 
 use common::chain::Random;
 use lengthwise::model::Model;
