@@ -8,6 +8,10 @@ mod common;
 mod corruptions;
 #[path = "proof/hand.rs"]
 mod hand;
+#[path = "proof/rounding.rs"]
+mod rounding;
+#[path = "proof/shared_points.rs"]
+mod shared_points;
 
 use common::chain::Random;
 use lengthwise::model::Model;

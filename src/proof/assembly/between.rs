@@ -1,10 +1,10 @@
 //! A member between two points: what it puts on them, and what their movement asks of it.
 
+use super::one_way::stretch_by_weight;
 use super::space::{along, difference, size_along, toward};
-use crate::model::{Between, Carries, Combination, LineLoad, Member, Model, Spatial};
+use crate::model::{Between, Combination, Member, Model, Spatial};
 use crate::proof::acting::Acting;
 use crate::proof::member::{HeldBy, Proof};
-use crate::proof::piece::Piece;
 use crate::proof::residual::{Residual, Size, Work};
 use crate::quantity::{Flexibility, Force, ForcePerLength, Length};
 use crate::result::{MemberResult, MemberState};
@@ -46,84 +46,35 @@ impl Looked {
         (moves, slight): ([&Spatial<Length>; 2], Length),
     ) -> Self {
         let mut acting = Acting::on(model, member, combination);
+        let axis = &between.direction;
         let down = model.assembly.as_ref().map_or([0.0; 3], |a| a.down);
-        let across = difference(
-            down,
-            toward(&between.direction, along(&between.direction, &down)),
-        );
+        let across = difference(down, toward(axis, along(axis, &down)));
         let weights = lever_of_weight(&acting);
-        let mut lever = weights.map(|weight| toward(&across, weight));
+        let lump = weights[0] * -member.rise();
         let slack = member.carries.is_some() && result.state == MemberState::Slack;
-        let ends = moves.map(|by| along(&between.direction, by));
-        let end_sizes = moves.map(|by| size_along(&between.direction, by));
-        let mut decided = Residual::default();
-        // What is left of the weight along the axis when the lever rule has put its share on the
-        // start, and the stretch that this makes.
-        let lumped = weights[0] * -member.rise();
-        let by_weight = if slack {
-            let stretch = stretch_by_weight(&acting, lumped);
-            lever = weights.map(|weight| toward(&down, weight));
+        let (lever, by_weight, held_by) = if slack {
+            let stretch = stretch_by_weight(&acting, lump);
             acting.unload();
-            stretch
+            let lever = weights.map(|weight| toward(&down, weight));
+            (lever, stretch, HeldBy::PointsSlack)
         } else {
+            let mut lever = weights.map(|weight| toward(&across, weight));
             add_across(&acting, &across, &mut lever);
-            (Length::default(), Length::default())
-        };
-        let held_by = if slack {
-            HeldBy::PointsSlack
-        } else {
-            HeldBy::Points
+            (lever, Default::default(), HeldBy::Points)
         };
         let mut proof = Proof::of(acting, result, held_by);
         proof.take();
-        for (station, (end, size)) in [0, result.stations.len() - 1]
-            .into_iter()
-            .zip(ends.into_iter().zip(end_sizes))
-        {
-            let named = proof.displacement(station);
-            let sizes = named.abs() + size + slight;
-            proof.compatibility.take((named - end).over(sizes));
-        }
+        let ends = Ends {
+            moves: moves.map(|by| along(axis, by)),
+            sizes: moves.map(|by| size_along(axis, by) + slight),
+        };
+        proof.ends(&ends);
+        proof.state(&ends, lump, by_weight);
 
-        let (free, free_size) = proof.pieces.iter().fold(
-            (Length::default(), Length::default()),
-            |(free, size), piece| (free + piece.thermal + piece.imposed, size + piece.free_size),
-        );
-        let end_size = end_sizes[0] + end_sizes[1];
-        let apart = ends[1] - ends[0];
-        match (member.carries, result.state) {
-            (None, MemberState::Taut) => decided.take(unsaid(result.slack_by)),
-            (Some(way), MemberState::Slack) => {
-                let loose = free + by_weight.0 - apart;
-                let loose = match way {
-                    Carries::Tension => loose,
-                    Carries::Compression => -loose,
-                };
-                let sizes = free_size + by_weight.1 + end_size;
-                let named = result.slack_by.unwrap_or_default();
-                decided.take((loose - named).over(sizes + named.abs()));
-                decided.take(named.min(Length::default()).over(sizes));
-                proof.slack_stations();
-            }
-            (Some(Carries::Tension), MemberState::Taut)
-            | (Some(Carries::Compression), MemberState::Bearing) => {
-                decided.take(unsaid(result.slack_by));
-                let start = result.stations[0].force_after.unwrap_or_default();
-                let between = start - lumped;
-                let against = match member.carries {
-                    Some(Carries::Tension) => -between,
-                    _ => between,
-                };
-                proof.equilibrium.take(
-                    against
-                        .max(Force::default())
-                        .over(start.abs() + lumped.abs()),
-                );
-            }
-            _ => decided.take(f64::INFINITY),
-        }
-        proof.compatibility.take(decided.largest());
-
+        let free_size = proof
+            .pieces
+            .iter()
+            .fold(Length::default(), |size, piece| size + piece.free_size);
         let stretch = result.elongation.abs() + free_size;
         let flexibility = proof
             .pieces
@@ -132,7 +83,7 @@ impl Looked {
         let elastic = if flexibility == Flexibility::default() {
             Force::default()
         } else {
-            (end_size + stretch) / flexibility
+            (ends.sizes[0] + ends.sizes[1] + stretch) / flexibility
         };
         let last = proof.reactions.len() - 1;
         let (start, end) = (proof.reactions[0], proof.reactions[last]);
@@ -159,35 +110,23 @@ impl Looked {
     }
 }
 
-/// A distance from being taut that is given where there is none never passes.
-fn unsaid(slack_by: Option<Length>) -> f64 {
-    if slack_by.is_some() {
-        f64::INFINITY
-    } else {
-        0.0
-    }
+/// How the two ends of a member move along its axis.
+pub(super) struct Ends {
+    pub(super) moves: [Length; 2],
+    /// The sizes that these are to be held against.
+    pub(super) sizes: [Length; 2],
 }
 
 impl Proof<'_> {
-    /// The stations of a slack member lie as it hangs from its start, or as it stands on its end.
-    fn slack_stations(&mut self) {
+    /// The stations at a member's ends move as its points do.
+    fn ends(&mut self, ends: &Ends) {
         let last = self.result.stations.len() - 1;
-        let (start, end) = (self.displacement(0), self.displacement(last));
-        let pieces = || self.pieces.iter();
-        let whole = pieces().fold(Length::default(), |sum, piece| {
-            sum + piece.thermal + piece.imposed
-        });
-        let size = pieces().fold(start.abs() + end.abs(), |sum, piece| sum + piece.free_size);
-        let mut free = Length::default();
-        let mut left = Residual::default();
-        for station in 1..last {
-            let piece = &self.pieces[station - 1];
-            free += piece.thermal + piece.imposed;
+        for (end, station) in [0, last].into_iter().enumerate() {
             let named = self.displacement(station);
-            let (hung, stood) = (named - (start + free), named - (end - (whole - free)));
-            left.take(hung.abs().min(stood.abs()).over(size + named.abs()));
+            let sizes = named.abs() + ends.sizes[end];
+            self.compatibility
+                .take((named - ends.moves[end]).over(sizes));
         }
-        self.compatibility.take(left.largest());
     }
 }
 
@@ -242,43 +181,8 @@ fn add_across(acting: &Acting, across: &Spatial<f64>, lever: &mut [Spatial<Force
         add(ends, factors[force.case]);
     }
     for line in &member.actions.lines {
-        let (start, end) = across_at_ends(line);
+        let [start, end] = line.across;
         let ends = lever_of_line(member, line.piece, |s| start * (1.0 - s) + end * s);
         add(ends, factors[line.case]);
     }
-}
-
-/// A line load's part across the axis at its two ends, which goes as its part along it.
-fn across_at_ends(line: &LineLoad) -> (ForcePerLength, ForcePerLength) {
-    let greatest = if line.start.abs() > line.end.abs() {
-        line.start
-    } else {
-        line.end
-    };
-    if greatest == ForcePerLength::default() {
-        (line.across, line.across)
-    } else {
-        let at = |along: ForcePerLength| line.across * (along / greatest).value;
-        (at(line.start), at(line.end))
-    }
-}
-
-/// `∫ N/EA dx` of a member that only its own weight stresses, its lumps on its ends holding it, and
-/// the sum of the sizes.
-fn stretch_by_weight(acting: &Acting, lump: Force) -> (Length, Length) {
-    let mut force = lump;
-    let (mut stretch, mut size) = (Length::default(), Length::default());
-    for piece in 0..acting.member.pieces.len() {
-        if !acting.has_weight(piece) && force == Force::default() {
-            continue;
-        }
-        let load = Piece::of(acting, piece, (force, force)).load();
-        let after = force - load;
-        let along = Piece::of(acting, piece, (force, after));
-        let integrated = along.integrate(acting, piece, lump.abs() * crate::proof::DOUBT);
-        stretch += integrated.force;
-        size += integrated.force_size;
-        force = after;
-    }
-    (stretch, size)
 }

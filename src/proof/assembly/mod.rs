@@ -5,6 +5,7 @@ mod body;
 mod hinges;
 mod hold;
 mod loads;
+mod one_way;
 mod space;
 
 use super::residual::{Residual, Size, Work};
