@@ -118,7 +118,7 @@ fn a_slack_tie_below_two_inclined_ones() {
         carries: Some(Carries::Tension),
         slack_by: Some(warm + misfit + by_weight - hand.moves[2][1]),
         weighs: true,
-        loads: "{ temperature-change = \"+15 K\" }, { misfit = \"1 mm\" }",
+        loads: "{ temperature-change = \"+15 K\" }, { misfit = \"1 mm\" }".into(),
         ..Bar::of(
             (2, 3),
             "{ length = \"1 m\", section = { area = \"1 cm2\" }, material = \"m\", mass = \"10 kg/m\" },
@@ -159,7 +159,7 @@ fn a_platform_on_three_hangers() {
         "{ length = \"3 m\", section = { area = \"3 cm2\" }, material = \"m\" }",
     ];
     let mut bars: Vec<Bar> = (0..3).map(|i| Bar::of((i, 3 + i), sections[i])).collect();
-    bars[1].loads = "{ temperature-change = \"+20 K\" }";
+    bars[1].loads = "{ temperature-change = \"+20 K\" }".into();
     let mut holds: Vec<Held> = (0..3)
         .map(|i| Held::fixed(i, &[X, Y, Z], [0.0, 0.0, forces[i]]))
         .collect();

@@ -18,20 +18,20 @@ pub(crate) struct Bar {
     /// How far it is from being taut.
     pub(crate) slack_by: Option<f64>,
     /// Its segments as a job writes them.
-    pub(crate) segments: &'static str,
+    pub(crate) segments: String,
     /// Its loads but weight.
-    pub(crate) loads: &'static str,
+    pub(crate) loads: String,
     pub(crate) weighs: bool,
 }
 
 impl Bar {
-    pub(crate) fn of(between: (usize, usize), segments: &'static str) -> Self {
+    pub(crate) fn of(between: (usize, usize), segments: &str) -> Self {
         Bar {
             between,
             carries: None,
             slack_by: None,
-            segments,
-            loads: "",
+            segments: segments.into(),
+            loads: String::new(),
             weighs: false,
         }
     }
@@ -131,7 +131,7 @@ impl Hand {
                 loads.push("{ weight = 1.0 }".into());
             }
             if !bar.loads.is_empty() {
-                loads.push(bar.loads.into());
+                loads.push(bar.loads.clone());
             }
             text += &format!("load = [{}]\n", loads.join(", "));
             job::read(&text).unwrap_or_else(|problems| panic!("{problems:#?}\n{text}"))
@@ -161,7 +161,7 @@ impl Hand {
 
     /// The model and the result; `act` adds what acts on points, bodies and holds, all of it in
     /// case 0.
-    pub(crate) fn made(&self, act: impl Fn(&mut Assembly)) -> (Model, CombinationResult) {
+    pub(crate) fn made(&self, act: impl FnOnce(&mut Assembly)) -> (Model, CombinationResult) {
         let entries = |of: [f64; 3]| of[..self.coordinates].to_vec();
         let lengths = |of| -> Vec<Length> { entries(of).into_iter().map(from_si).collect() };
         let forces = |of| -> Vec<Force> { entries(of).into_iter().map(from_si).collect() };

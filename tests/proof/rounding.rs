@@ -9,10 +9,10 @@ const NONE: [f64; 3] = [0.0; 3];
 const X: [f64; 3] = [1.0, 0.0, 0.0];
 const Y: [f64; 3] = [0.0, 1.0, 0.0];
 
-fn two_ties(loads: &'static str, moves: [[f64; 3]; 3]) -> Hand {
+fn two_ties(loads: &str, moves: [[f64; 3]; 3]) -> Hand {
     let make_up = "{ length = \"5 m\", section = { area = \"5 cm2\" }, material = \"m\" }";
     let tie = |top: usize| Bar {
-        loads,
+        loads: loads.into(),
         ..Bar::of((top, 2), make_up)
     };
     Hand {

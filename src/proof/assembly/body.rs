@@ -1,7 +1,7 @@
 //! Bodies: they keep their shape, and all that acts on each cancels in force and in moment.
 
 use super::space::{difference, moment, size, sum, turned};
-use super::{SHARE, Together, hinges, spatial};
+use super::{Together, hinges, spatial};
 use crate::model::{Body, Spatial};
 use crate::proof::residual::Size;
 use crate::quantity::{Angle, Force, Length, Moment, from_si};
@@ -66,9 +66,8 @@ impl Together<'_> {
                 let turn = turned(&rotation, &arm);
                 // A rotation is held to what it does, however far the body moves as a whole.
                 let apart = difference(self.moves[point], by);
-                let whole = size(&self.moves[point]) + size(&by);
                 let turns: Length = from_si(size(&rotation).value * size(&arm).value);
-                let sizes = size(&apart) + turns + whole * SHARE + self.slight_move * SHARE;
+                let sizes = size(&apart) + turns + self.slight_move;
                 self.compatibility
                     .take(size(&difference(apart, turn)).over(sizes));
             }
