@@ -204,6 +204,13 @@ impl Solving<'_> {
         result.holds = solution.holds;
         result.bodies = solution.bodies;
         result.totals = Some(solution.totals);
+        let residuals = proof::assembly(self.model, combination, result);
+        if !residuals.prove() {
+            let place = &combination.place;
+            let problem = words::unproven("the assembly", residuals, combination, place);
+            outcome.problems.push(problem);
+        }
+        result.residuals = result.residuals.worse(residuals);
         // The proof has had the split of least size.
         for row in solution.undecided {
             let hold = &mut result.holds[row];
