@@ -6,34 +6,21 @@ use crate::quantity::{
     Area, Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress, TemperatureInterval,
     from_si,
 };
-use crate::result::MemberResult;
 
 /// The factored actions, by station, piece, layer and support.
 pub(super) struct Acting<'m> {
     model: &'m Model,
     pub(super) member: &'m Member,
-    combination: &'m Combination,
-    pub(super) stations: Vec<AtStation>,
-    /// Line load at the two ends of each piece, self-weight left out; empty where there is none.
+    pub(super) combination: &'m Combination,
+    /// Force at each station, and the sum of the sizes that it is made of.
+    pub(super) forces: Vec<(Force, Force)>,
+    /// Line load at the two ends of each piece, self-weight left out.
     lines: Vec<(ForcePerLength, ForcePerLength)>,
     /// For every layer of every segment: times self-weight, change of temperature at the segment's
     /// ends, imposed strain.
     layers: Vec<OnLayer>,
     first_layer: Vec<usize>,
-    /// Of what each support is fixed to; empty where none moves.
-    movements: Vec<Length>,
-    /// Standard gravity along the axis, + toward the end.
-    gravity: f64,
-}
-
-/// The forces that come together at a station, + toward the end, each with the sum of the sizes
-/// that it is made of.
-#[derive(Clone, Copy, Default)]
-pub(super) struct AtStation {
-    pub(super) load: Force,
-    pub(super) load_size: Force,
-    pub(super) reaction: Force,
-    pub(super) reaction_size: Force,
+    pub(super) movements: Vec<Length>,
 }
 
 #[derive(Clone, Copy, Default)]
@@ -58,13 +45,7 @@ pub(super) struct Local {
 }
 
 impl<'m> Acting<'m> {
-    /// Gathers what the combination puts on the member, and the reactions that the result names.
-    pub(super) fn on(
-        model: &'m Model,
-        member: &'m Member,
-        combination: &'m Combination,
-        result: &MemberResult,
-    ) -> Self {
+    pub(super) fn on(model: &'m Model, member: &'m Member, combination: &'m Combination) -> Self {
         let mut first_layer = Vec::with_capacity(member.segments.len());
         let mut count = 0;
         for segment in &member.segments {
@@ -75,22 +56,17 @@ impl<'m> Acting<'m> {
             model,
             member,
             combination,
-            stations: vec![AtStation::default(); member.stations.len()],
-            lines: Vec::new(),
+            forces: vec![Default::default(); member.stations.len()],
+            lines: vec![Default::default(); member.pieces.len()],
             layers: vec![OnLayer::default(); count],
             first_layer,
-            movements: Vec::new(),
-            gravity: -member.rise() * STANDARD_GRAVITY,
+            movements: vec![Length::default(); member.supports.len()],
         };
         let factor = |case: usize| combination.factors[case];
         for force in &member.actions.forces {
             let factored = force.force * factor(force.case);
-            let station = &mut acting.stations[force.station];
-            station.load += factored;
-            station.load_size += factored.abs();
-        }
-        if !member.actions.lines.is_empty() {
-            acting.lines = vec![Default::default(); member.pieces.len()];
+            acting.forces[force.station].0 += factored;
+            acting.forces[force.station].1 += factored.abs();
         }
         for line in &member.actions.lines {
             acting.lines[line.piece].0 += line.start * factor(line.case);
@@ -109,24 +85,10 @@ impl<'m> Acting<'m> {
             acting.layer_mut(strain.segment, strain.layer).imposed +=
                 strain.strain * factor(strain.case);
         }
-        for (support, result) in member.supports.iter().zip(&result.supports) {
-            let reaction = result.reaction.unwrap_or_default();
-            let station = &mut acting.stations[support.station];
-            station.reaction += reaction;
-            station.reaction_size += reaction.abs();
-        }
-        if !member.actions.movements.is_empty() {
-            acting.movements = vec![Length::default(); member.supports.len()];
-        }
         for movement in &member.actions.movements {
             acting.movements[movement.support] += movement.movement * factor(movement.case);
         }
         acting
-    }
-
-    /// How far what a support is fixed to has moved.
-    pub(super) fn movement(&self, support: usize) -> Length {
-        self.movements.get(support).copied().unwrap_or_default()
     }
 
     fn layer_mut(&mut self, segment: usize, layer: usize) -> &mut OnLayer {
@@ -143,20 +105,20 @@ impl<'m> Acting<'m> {
             * self.combination.modulus_factor(layer.material)
     }
 
-    /// The line load at the two ends of a piece, self-weight left out.
-    fn written_line(&self, piece: usize) -> (ForcePerLength, ForcePerLength) {
-        self.lines.get(piece).copied().unwrap_or_default()
-    }
-
     /// The line load at a fraction of a piece, self-weight included, + toward the end.
     pub(super) fn line(&self, piece: usize, s: f64) -> ForcePerLength {
-        let (start, end) = self.written_line(piece);
-        let mut line = start * (1.0 - s) + end * s;
+        let (start, end) = self.lines[piece];
+        start * (1.0 - s) + end * s - self.weight(piece, s) * self.member.rise()
+    }
+
+    /// The self-weight per length at a fraction of a piece, whichever way the member runs.
+    pub(super) fn weight(&self, piece: usize, s: f64) -> ForcePerLength {
         let index = self.member.pieces[piece].segment;
         let segment = &self.member.segments[index];
-        let along = self.gravity;
-        let mut add =
-            |per_length: f64, times: f64| line += from_si::<_, _>(per_length * along * times);
+        let mut weight = ForcePerLength::default();
+        let mut add = |per_length: f64, times: f64| {
+            weight += from_si::<_, _>(per_length * STANDARD_GRAVITY * times);
+        };
         match &segment.kind {
             SegmentKind::Solid { layers, .. } => {
                 for (which, layer) in layers.iter().enumerate() {
@@ -180,16 +142,29 @@ impl<'m> Acting<'m> {
             }
             SegmentKind::Gap(_) => {}
         }
-        line
+        weight
+    }
+
+    /// Whether the self-weight of a piece acts.
+    pub(super) fn has_weight(&self, piece: usize) -> bool {
+        let index = self.member.pieces[piece].segment;
+        let count = self.member.segments[index].layers().len().max(1);
+        (0..count).any(|layer| self.layer(index, layer).weight != 0.0)
+    }
+
+    /// Takes off everything that N would come from; free strains stay.
+    pub(super) fn unload(&mut self) {
+        self.forces.fill(Default::default());
+        self.lines.fill(Default::default());
+        for layer in &mut self.layers {
+            layer.weight = 0.0;
+        }
     }
 
     /// Whether any line load acts on a piece.
     pub(super) fn has_line(&self, piece: usize) -> bool {
         let none = ForcePerLength::default();
-        let index = self.member.pieces[piece].segment;
-        let count = self.member.segments[index].layers().len().max(1);
-        self.written_line(piece) != (none, none)
-            || (0..count).any(|layer| self.layer(index, layer).weight != 0.0)
+        self.lines[piece] != (none, none) || self.has_weight(piece)
     }
 
     /// The fraction of the segment's length at a fraction of the piece.

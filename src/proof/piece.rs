@@ -1,9 +1,9 @@
 //! A piece integrated from the model and the forces that the result names at its ends.
 
 use super::acting::{Acting, Local};
-use super::quadrature::{Node, one_point, tapered, three_points, two_points};
+use super::quadrature::{tapered, uniform};
 use crate::model::SegmentKind;
-use crate::quantity::{Energy, Force, ForcePerLength, Length, Ratio};
+use crate::quantity::{Energy, Flexibility, Force, ForcePerLength, Length, Ratio};
 
 /// What a piece's strain adds up to, with the sizes of what was added.
 #[derive(Debug, Clone, Copy, Default)]
@@ -14,6 +14,8 @@ pub(super) struct Integrated {
     pub(super) load_size: Force,
     /// `∫ N/EA dx`.
     pub(super) force: Length,
+    /// `∫ dx/EA`.
+    pub(super) flexibility: Flexibility,
     /// `∫ |N|/EA dx`.
     pub(super) force_size: Length,
     /// `∫ αΔT dx`.
@@ -41,115 +43,67 @@ pub(super) struct Piece {
     /// The forces that the result names at its start and its end.
     start: Force,
     end: Force,
-    line: Line,
+    /// The line load at its start, its middle and its end: a line load is linear and an area
+    /// quadratic, so that these tell it everywhere. `None` where there is none.
+    line: Option<[ForcePerLength; 3]>,
     /// Stiffness and free strains at its two ends.
     ends: [Local; 2],
     /// Whether stiffness is the same all along, and free strains linear with it.
     uniform: bool,
     /// A joint has no strain.
     joint: bool,
-    /// What its strain adds up to.
-    pub(super) sums: Integrated,
-}
-
-/// The line load along a piece, self-weight included.
-#[derive(Debug, Clone, Copy)]
-enum Line {
-    None,
-    /// The same all along, as the weight of a piece without a taper is.
-    Constant(ForcePerLength),
-    /// At the start, the middle and the end: a line load is linear and an area quadratic, so that
-    /// these tell it everywhere.
-    Varying([ForcePerLength; 3]),
-}
-
-impl Line {
-    fn of(acting: &Acting, piece: usize, uniform: bool) -> Self {
-        if !acting.has_line(piece) {
-            return Line::None;
-        }
-        let start = acting.line(piece, 0.0);
-        // Over a constant area the weight is constant, and the rest of a line load linear.
-        match (uniform, acting.line(piece, 1.0)) {
-            (true, end) if end == start => Line::Constant(start),
-            (true, end) => Line::Varying([start, (start + end) * 0.5, end]),
-            (false, end) => Line::Varying([start, acting.line(piece, 0.5), end]),
-        }
-    }
 }
 
 impl Piece {
-    /// A piece between the forces that the result names at its ends. `doubt` is a force below which
-    /// N is no more than what other forces leave of each other; it counts among the sizes, so that
-    /// such a remainder is not held against itself.
-    pub(super) fn of(
-        acting: &Acting,
-        piece: usize,
-        (start, end): (Force, Force),
-        doubt: Force,
-    ) -> Self {
+    pub(super) fn of(acting: &Acting, piece: usize, (start, end): (Force, Force)) -> Self {
         let uniform = acting.is_uniform(piece);
+        let line = acting.has_line(piece).then(|| {
+            let (start, end) = (acting.line(piece, 0.0), acting.line(piece, 1.0));
+            // Over a constant area the weight is constant, and the rest of a line load linear.
+            let middle = if uniform {
+                (start + end) * 0.5
+            } else {
+                acting.line(piece, 0.5)
+            };
+            [start, middle, end]
+        });
         let segment = &acting.member.segments[acting.member.pieces[piece].segment];
-        let mut along = Piece {
+        Piece {
             length: acting.member.pieces[piece].length,
             start,
             end,
-            line: Line::of(acting, piece, uniform),
+            line,
             ends: [0.0, 1.0].map(|s| acting.local(piece, s)),
             uniform,
             joint: matches!(segment.kind, SegmentKind::Gap(_)),
-            sums: Integrated::default(),
-        };
-        along.sums = along.integrate(acting, piece, doubt);
-        along
+        }
     }
 
     /// N at a fraction of the piece, carried from whichever end is weaker, so that it is exact at a
     /// tip.
     pub(super) fn force_at(&self, s: f64) -> Force {
         match &self.line {
-            Line::None => self.start,
-            _ if self.ends[1].rigidity < self.ends[0].rigidity => self.end + self.load_after(s),
-            Line::Constant(line) => self.start - *line * (self.length * s),
-            Line::Varying(line) => {
+            None => self.start,
+            Some(line) if self.ends[1].rigidity < self.ends[0].rigidity => {
+                self.end + self.rest_of(line, s)
+            }
+            Some(line) => {
                 let sum = line[0] + quadratic(line, 0.5 * s) * 4.0 + quadratic(line, s);
                 self.start - sum * (self.length * (s / 6.0))
             }
         }
     }
 
-    /// All of the line load from a fraction of the piece to its end: one that varies by Simpson's
-    /// rule, exact for a quadratic.
-    fn load_after(&self, s: f64) -> Force {
-        match &self.line {
-            Line::None => Force::default(),
-            Line::Constant(line) => *line * (self.length * (1.0 - s)),
-            Line::Varying(line) => {
-                let sum = quadratic(line, s) + quadratic(line, 0.5 * (1.0 + s)) * 4.0 + line[2];
-                sum * (self.length * ((1.0 - s) / 6.0))
-            }
-        }
+    /// All of the line load, + toward the end.
+    pub(super) fn load(&self) -> Force {
+        self.line
+            .map_or(Force::default(), |line| self.rest_of(&line, 0.0))
     }
 
-    /// The sum of the sizes of the line load.
-    fn load_size(&self) -> Force {
-        match &self.line {
-            Line::None => Force::default(),
-            Line::Constant(line) => line.abs() * self.length,
-            Line::Varying(line) => {
-                (line[0].abs() + line[1].abs() * 4.0 + line[2].abs()) * (self.length / 6.0)
-            }
-        }
-    }
-
-    /// Where to look at it so that `N²/EA` integrates exactly, or to rounding along a taper.
-    fn nodes(&self) -> &'static [Node] {
-        match (self.uniform, &self.line) {
-            (true, Line::None) => one_point(),
-            (true, Line::Constant(_)) => two_points(),
-            (true, Line::Varying(_)) => three_points(),
-            (false, _) => tapered(),
-        }
+    /// The line load from a fraction of the piece to its end: Simpson's rule, exact for a quadratic.
+    fn rest_of(&self, line: &[ForcePerLength; 3], s: f64) -> Force {
+        let sum = quadratic(line, s) + quadratic(line, 0.5 * (1.0 + s)) * 4.0 + line[2];
+        sum * (self.length * ((1.0 - s) / 6.0))
     }
 
     /// Stiffness and free strains at a fraction of a uniform piece.
@@ -164,7 +118,10 @@ impl Piece {
         }
     }
 
-    fn integrate(&self, acting: &Acting, piece: usize, doubt: Force) -> Integrated {
+    /// What its strain adds up to. `doubt` is a force below which N is no more than what other
+    /// forces leave of each other; it counts among the sizes, so that such a remainder is not held
+    /// against itself.
+    pub(super) fn integrate(&self, acting: &Acting, piece: usize, doubt: Force) -> Integrated {
         let mut sum = Integrated {
             most: self.start.max(self.end),
             least: self.start.min(self.end),
@@ -173,9 +130,16 @@ impl Piece {
         if self.joint {
             return sum;
         }
-        sum.load = self.load_after(0.0);
-        sum.load_size = self.load_size();
-        for node in self.nodes() {
+        if let Some(line) = &self.line {
+            sum.load = self.rest_of(line, 0.0);
+            let sizes = line.map(|q| q.abs());
+            sum.load_size = (sizes[0] + sizes[1] * 4.0 + sizes[2]) * (self.length / 6.0);
+        }
+        if self.uniform && self.line.is_none() {
+            sum.add(self.start, &self.between_ends(0.5), self.length, doubt);
+            return sum;
+        }
+        for node in if self.uniform { uniform() } else { tapered() } {
             let local = if self.uniform {
                 self.between_ends(node.s)
             } else {
@@ -187,7 +151,9 @@ impl Piece {
             let force = self.force_at(node.s);
             let dx = self.length * node.weight;
             let strain = sum.add(force, &local, dx, doubt);
-            sum.line_work += self.load_after(node.s) * (strain * dx);
+            if let Some(line) = &self.line {
+                sum.line_work += self.rest_of(line, node.s) * (strain * dx);
+            }
             sum.most = sum.most.max(force);
             sum.least = sum.least.min(force);
         }
@@ -200,6 +166,7 @@ impl Integrated {
     fn add(&mut self, force: Force, local: &Local, dx: Length, doubt: Force) -> Ratio {
         let (elastic, free): (Ratio, Ratio) =
             (force / local.rigidity, local.thermal + local.imposed);
+        self.flexibility += dx / local.rigidity;
         self.force += elastic * dx;
         self.force_size += (elastic.abs() + doubt / local.rigidity) * dx;
         self.thermal += local.thermal * dx;

@@ -1,6 +1,6 @@
 //! Supports and joints: each keeps its law, and what bears is told from what does not.
 
-use super::Proof;
+use super::member::Proof;
 use super::residual::Size;
 use crate::model::{SegmentKind, Side, SupportKind};
 use crate::quantity::{Force, Length};
@@ -27,6 +27,8 @@ impl Proof<'_> {
             self.equilibrium
                 .take(force.max(Force::default()).over(self.force_size(piece)));
         } else {
+            let overlap = left.min(Length::default());
+            self.compatibility.take(overlap.over(sizes));
             self.compatibility
                 .take((left - gap.width - stretch).over(left.abs() + sizes));
             self.equilibrium.take(force.over(self.force_size(piece)));
@@ -36,14 +38,15 @@ impl Proof<'_> {
     /// The size of the forces about a piece, against which one that should not be there is held.
     fn force_size(&self, station: usize) -> Force {
         let (before, after) = self.forces_at(station);
-        let at = &self.acting.stations[station];
-        before.abs() + after.abs() + at.load_size + at.reaction_size
+        let (_, load) = self.acting.forces[station];
+        let (_, reactions) = self.reactions[station];
+        before.abs() + after.abs() + load + reactions
     }
 
     /// A support keeps its law: fixed, spring, or a stop that only pushes and never overlaps.
     pub(super) fn support(&mut self, index: usize, result: &SupportResult) {
         let support = &self.acting.member.supports[index];
-        let moved = self.acting.movement(index);
+        let moved = self.acting.movements[index];
         let displacement = self.displacement(support.station);
         let Some(reaction) = result.reaction else {
             return;
@@ -82,6 +85,8 @@ impl Proof<'_> {
                     }
                 } else {
                     self.equilibrium.take(reaction.over(forces));
+                    let overlap = gap.min(Length::default());
+                    self.compatibility.take(overlap.over(sizes));
                     self.compatibility
                         .take((gap - open).over(gap.abs() + sizes));
                 }

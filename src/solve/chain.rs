@@ -81,7 +81,7 @@ pub(super) struct Solved {
     /// Groups of stations that nothing holds, first and last, whose displacement is free.
     pub(super) free: Vec<(usize, usize)>,
     /// What arrives at each station from its left, before its own load and holds.
-    arriving: Vec<Answer>,
+    pub(super) arriving: Vec<Answer>,
 }
 
 /// Why a chain has no solution.
