@@ -1,6 +1,6 @@
 //! The whole document: what one run found, job by job.
 
-use super::{CombinationResult, Envelope, Governing, Verdict};
+use super::{CombinationResult, Envelope, Governing, Verdict, Warning};
 use crate::model::Name;
 use crate::quantity::Units;
 use serde::{Deserialize, Serialize};
@@ -90,6 +90,8 @@ pub struct JobResult {
     pub errors: Vec<ErrorEntry>,
     /// How many there are.
     pub errors_total: usize,
+    /// Stresses over their limit or near it, the governing ones.
+    pub warnings: Vec<Warning>,
     pub cautions: Vec<Caution>,
     pub notes: Vec<Note>,
     pub materials: Vec<MaterialEntry>,
@@ -125,6 +127,7 @@ impl JobResult {
             status: JobStatus::Error,
             errors: Vec::new(),
             errors_total: 0,
+            warnings: Vec::new(),
             cautions: Vec::new(),
             notes: Vec::new(),
             materials: Vec::new(),
