@@ -25,3 +25,43 @@ pub fn warnings(governing: &[Governing]) -> Vec<Warning> {
     };
     governing.iter().filter(warned_of).map(warning).collect()
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::result::Unit;
+
+    fn governing(check: &str, on: &str, utilisation: f64) -> Governing {
+        Governing {
+            check: check.into(),
+            on: on.into(),
+            combination: "strength".into(),
+            at: None,
+            area: None,
+            demand: 300e6 * utilisation,
+            limit: 300e6,
+            unit: Unit::Pascal,
+            utilisation: Some(utilisation),
+            status: if utilisation > 1.0 {
+                Verdict::Fail
+            } else {
+                Verdict::Pass
+            },
+            source: None,
+            line: 1,
+        }
+    }
+
+    #[test]
+    fn a_stress_over_its_limit_or_near_it_is_warned_of_and_no_movement_is() {
+        let checks = [
+            governing("tension", "over", 1.14),
+            governing("compression", "near", 0.951),
+            governing("tension", "far", 0.949),
+            governing("elongation", "movement", 1.5),
+        ];
+        let found = warnings(&checks);
+        let on: Vec<&str> = found.iter().map(|warning| &*warning.on).collect();
+        assert_eq!(on, ["over", "near"]);
+    }
+}
