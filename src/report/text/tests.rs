@@ -77,13 +77,15 @@ warning      hanger.shank at 2850 mm, combination strength/live=1.5: tension of
              290.0 MPa against 300.0 MPa allowable, ratio 0.967";
     assert_eq!(block(&text, "warning"), expected);
 
-    // 94 % is not near, and a movement has no warning, however far over its limit.
     let mut job = sample::failing();
-    job.governing.remove(0);
-    job.governing[0].utilisation = Some(0.94);
-    job.governing[1].utilisation = Some(1.5);
-    job.governing[1].status = crate::result::Verdict::Fail;
-    assert!(!whole(&job, &PAGE).contains("warning"));
+    job.warnings[0].ratio = None;
+    job.warnings[0].allowable = 0.0;
+    let none = "tension of 342.0 MPa against 0 MPa allowable, where none is allowed";
+    assert!(
+        whole(&job, &PAGE)
+            .replace("\n             ", " ")
+            .contains(none)
+    );
 }
 
 #[test]
@@ -318,4 +320,10 @@ fn counts_say_what_was_looked_at() {
         String::from_utf8(out).unwrap(),
         "Looked at 2 files, 2 members, 1 combination and 4 checks: 3 pass, 1 fail; 2\nerrors.\n"
     );
+}
+
+#[test]
+fn zz_show() {
+    println!("{}", whole(&sample::assembly::plane(), &PAGE));
+    println!("{}", whole(&sample::assembly::space(), &PAGE));
 }
