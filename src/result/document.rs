@@ -150,23 +150,27 @@ impl JobResult {
         })
     }
 
-    /// The same among the checks of combinations that take members out: the loss that governs, if
-    /// there are several.
+    /// The loss that governs, where several combinations take members out, with its worst check: of
+    /// losses that fail alike in a yes-or-no check, that with the largest utilisation.
     pub fn governing_loss(&self) -> Option<(&CombinationResult, &CheckResult)> {
-        let losses = || {
-            let combinations = self.combinations.iter();
-            combinations.filter(|combination| !combination.without.is_empty())
+        let combinations = self.combinations.iter();
+        let losses = combinations.filter(|combination| !combination.without.is_empty());
+        losses.clone().nth(1)?;
+        let worst = |loss: &'_ CombinationResult| {
+            let checks = loss.checks.iter();
+            let ranked = checks.map(|check| rank(check.status, check.utilisation));
+            let used = loss.checks.iter().filter_map(|check| check.utilisation);
+            let first = ranked.enumerate().reduce(
+                |worst, next| {
+                    if next.1 > worst.1 { next } else { worst }
+                },
+            );
+            first.map(|(at, rank)| (at, (rank, used.fold(0.0, f64::max))))
         };
-        losses().nth(1)?;
-        let checks = losses().flat_map(|loss| loss.checks.iter().map(move |check| (loss, check)));
-        let rank = |check: &CheckResult| rank(check.status, check.utilisation);
-        checks.reduce(|first, next| {
-            if rank(next.1) > rank(first.1) {
-                next
-            } else {
-                first
-            }
-        })
+        let found = losses.filter_map(|loss| worst(loss).map(|(at, key)| (loss, at, key)));
+        let (loss, at, _) =
+            found.reduce(|worst, next| if next.2 > worst.2 { next } else { worst })?;
+        Some((loss, loss.checks.get(at)?))
     }
 }
 

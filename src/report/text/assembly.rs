@@ -158,11 +158,11 @@ impl<'a> Page<'a> {
         let AssemblyTotals { applied, reactions } = combination.totals.as_ref()?;
         let rows = [applied, reactions];
         let largest = largest(rows.iter().copied().flatten().map(|force| force.value));
-        let columns = self.along("sum", &rows, largest.max(self.force), "", |row| {
+        let columns = self.along("total", &rows, largest.max(self.force), "", |row| {
             Some(row.as_slice())
         });
-        let names = ["all applied forces", "all reactions of holds"];
-        Some(Table::of([Column::words("", names)]).block(columns))
+        let names = ["all applied forces", "all reactions"];
+        Some(Table::of([Column::words("sum of", names)]).block(columns))
     }
 
     fn members(&self, rows: &[MemberResult]) -> Option<Table> {
@@ -220,7 +220,7 @@ impl<'a> Page<'a> {
     }
 
     fn points(&self, rows: &[PointResult]) -> Option<Table> {
-        let columns = self.along("movement", rows, self.movement, "", |point| {
+        let columns = self.along("displacement", rows, self.movement, "", |point| {
             Some(&point.displacement)
         });
         let names = rows.iter().map(|point| &point.name);
@@ -231,7 +231,7 @@ impl<'a> Page<'a> {
         if rows.is_empty() {
             return None;
         }
-        let movements = self.along("movement", rows, self.movement, "", |body| {
+        let movements = self.along("displacement", rows, self.movement, "", |body| {
             Some(&body.displacement)
         });
         let turns = |heading: &str, of: fn(&BodyResult) -> Angle| {
@@ -264,7 +264,7 @@ impl<'a> Page<'a> {
             return None;
         }
         let value = rows.iter().map(|watch| match (watch.value, watch.unit) {
-            (None, _) => "not there".to_owned(),
+            (None, _) => "lost".to_owned(),
             (Some(value), Unit::Radian) => self.number::<Angle>(from_si(value), self.rotation),
             (Some(value), _) => self.number::<Length>(from_si(value), self.movement),
         });
@@ -274,7 +274,7 @@ impl<'a> Page<'a> {
         });
         Some(
             Table::of([Column::names("watch", rows.iter().map(|watch| &watch.name))]).block([
-                Column::number("reading", None, value),
+                Column::number("value", None, value),
                 Column::words("unit", unit),
             ]),
         )

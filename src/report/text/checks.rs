@@ -169,7 +169,7 @@ fn write_loss(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Resu
         None => String::new(),
     };
     let text = format!(
-        "Of the losses that of {} governs (combination {}): {} on {}, {used}{}.",
+        "Of the losses, that of {} governs (combination {}): {} on {}, {used}{}.",
         loss.without.join(" and "),
         loss.name,
         named(check),

@@ -51,9 +51,10 @@ const SIGNS: &str = "N and stress are + in tension, elongation + for growth, dis
      it is what has closed over what may close.";
 
 /// What is added to that where the job has points.
-const SIGNS_OF_POINTS: &str = "Movements of points and reactions of holds are + along +x, +y and \
+const SIGNS_OF_POINTS: &str = "Displacements of points and reactions of holds are + along +x, +y and \
      +z (up is +y in two coordinates, +z in three); rotations are right-handed, in two coordinates \
-     + anticlockwise. The movement of a body is that of its first point. A member between points \
+     + anticlockwise. The displacement of a body is that of its first \
+     point. A member between points \
      has its own signs along its axis, from its first point to its second.";
 
 /// What rounding leaves of numbers that cancel: a number smaller than this share of the largest of
