@@ -1,6 +1,7 @@
 //! Every combination of a job solved and proven: single members one by one, the assembly at once.
 
 use super::words;
+use crate::check;
 use crate::job::Problem;
 use crate::model::{Combination, Member, Model, Name, Remark};
 use crate::proof;
@@ -19,6 +20,8 @@ pub(super) struct Solved {
     pub(super) results: Vec<CombinationResult>,
     /// What counts as zero in each of a combination's members.
     pub(super) zeros: Vec<Vec<Threshold>>,
+    /// What counts as zero in the assembly.
+    pub(super) assembly_zeros: Vec<Threshold>,
     pub(super) problems: Vec<Problem>,
     pub(super) remarks: Vec<Remark>,
 }
@@ -33,7 +36,10 @@ pub(super) struct Said {
 /// What one combination came to.
 #[derive(Default)]
 struct Outcome {
-    result: Option<(CombinationResult, Vec<Threshold>)>,
+    result: Option<CombinationResult>,
+    /// What counts as zero in each member, and in the assembly.
+    zeros: Vec<Threshold>,
+    assembly_zero: Threshold,
     problems: Vec<Problem>,
     said: Vec<Said>,
 }
@@ -50,10 +56,11 @@ pub(super) fn combinations(model: &Model, style: Style) -> Solved {
     let mut solved = Solved::default();
     let mut known = HashSet::new();
     let mut take = |index: usize, outcome: Outcome| {
-        if let Some((result, zeros)) = outcome.result {
+        if let Some(result) = outcome.result {
             solved.indices.push(index);
             solved.results.push(result);
-            solved.zeros.push(zeros);
+            solved.zeros.push(outcome.zeros);
+            solved.assembly_zeros.push(outcome.assembly_zero);
         }
         solved.problems.extend(outcome.problems);
         for Said { what, remark } in outcome.said {
@@ -144,13 +151,14 @@ impl Solving<'_> {
         if !outcome.problems.is_empty() {
             return outcome;
         }
-        let zeros = members.iter().map(|&(.., zero)| zero).collect();
+        outcome.zeros = members.iter().map(|&(.., zero)| zero).collect();
         let members = members.into_iter().map(|(_, member, _)| member).collect();
         let mut result = result_of(model, combination, members, residuals);
         if let Some(solution) = assembly {
             self.join(solution, combination, &mut result, &mut outcome);
         }
-        outcome.result = Some((result, zeros));
+        result.watches = check::watches(model, combination, &result);
+        outcome.result = Some(result);
         outcome
     }
 
@@ -204,6 +212,7 @@ impl Solving<'_> {
         result: &mut CombinationResult,
         outcome: &mut Outcome,
     ) {
+        outcome.assembly_zero = solution.zero;
         let said = words::of_assembly(self.model, combination, &solution, self.style);
         outcome.said.extend(said);
         result.points = solution.points;
