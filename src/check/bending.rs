@@ -70,7 +70,7 @@ fn is_loaded_across(look: &Look) -> bool {
     let forces = actions.forces.iter();
     let mut forces = forces.filter(|force| force.across.value != 0.0);
     let lines = actions.lines.iter();
-    let mut lines = lines.filter(|line| line.across.value != 0.0);
+    let mut lines = lines.filter(|line| line.across.iter().any(|across| across.value != 0.0));
     forces.any(|force| acts(look, force.case)) || lines.any(|line| acts(look, line.case))
 }
 
@@ -145,7 +145,9 @@ fn bent_by(model: &Model, member: &Member, combination: &Combination, share: f64
     for load in &member.actions.lines {
         let piece = &member.pieces[load.piece];
         let middle = member.stations[load.piece].x + piece.length / 2.0;
-        add(load.across * piece.length * factor(load.case), middle);
+        let [start, end] = load.across;
+        let greatest = start.abs().max(end.abs());
+        add(greatest * piece.length * factor(load.case), middle);
     }
     (moment, force)
 }
