@@ -2,8 +2,9 @@
 
 use super::Observed;
 use super::caution::Look;
-use crate::model::{Between, Combination, Member, Model, Remark, SegmentKind};
+use crate::model::{Between, Body, Combination, Member, Model, Remark, SegmentKind};
 use crate::quantity::{Dimension, Force, Length, STANDARD_GRAVITY, Style, Units, from_si};
+use std::collections::BTreeSet;
 
 /// What acts across a member in some combination.
 pub(super) fn member(look: &Look) -> Option<Remark> {
@@ -27,21 +28,19 @@ pub(super) fn bodies(model: &Model, observed: &[Observed]) -> Vec<Remark> {
             .map(|seen| model.combinations[seen.index].factors[case]);
         factors.any(|factor| factor != 0.0)
     };
-    let weights = &assembly.actions.weights;
-    let heavy = assembly.bodies.iter().enumerate().filter(|(at, _)| {
-        weights
-            .iter()
-            .any(|weight| weight.body == *at && weight.number != 0.0 && acts(weight.case))
-    });
-    let caution = |(_, body): (usize, &crate::model::Body)| {
+    let weights = assembly.actions.weights.iter();
+    let weights = weights.filter(|weight| weight.number != 0.0 && acts(weight.case));
+    let heavy: BTreeSet<usize> = weights.map(|weight| weight.body).collect();
+    let caution = |at: usize| {
+        let body: &Body = &assembly.bodies[at];
         Remark {
-        about: format!("body.{}", body.name),
-        text: "its weight acts across x as well as along it: the part across is not carried by this computation".into(),
-        place: Some(body.place.clone()),
-        caution: true,
-    }
+            about: format!("body.{}", body.name),
+            text: "its weight acts across x as well as along it: the part across is not carried by this computation".into(),
+            place: Some(body.place.clone()),
+            caution: true,
+        }
     };
-    heavy.map(caution).collect()
+    heavy.into_iter().map(caution).collect()
 }
 
 /// Loads across a sloping or level member with supports of its own, which the axial computation

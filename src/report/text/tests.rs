@@ -414,10 +414,11 @@ H1        144.0  service/without=H2  81.00  service         kN";
 fn a_body_in_space_turns_about_three_axes() {
     let text = whole(&sample::assembly::space(), &PAGE);
     let rotation = "\
-       rotation  rotation  rotation
-        about x   about y   about z
-body      [deg]     [deg]     [deg]
------------------------------------
-plate   0.05730   -0.1146    0";
+       displacement  displacement  displacement  rotation  rotation  rotation
+            along x       along y       along z   about x   about y   about z
+body           [mm]          [mm]          [mm]     [deg]     [deg]     [deg]
+-----------------------------------------------------------------------------
+plate         1.000        -2.000         3.000   0.05730   -0.1146         0
+";
     assert!(text.contains(rotation), "{text}");
 }
