@@ -105,7 +105,11 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         largest(stations.map(|s| &mut s.displacement.value))
     }),
     ("elongation", |r| {
-        largest(members(r).map(|m| &mut m.elongation.value))
+        // That of a member may be all rounding, where its segments' cancel.
+        largest(members(r).flat_map(|m| {
+            let segments = m.segments.iter_mut().map(|s| &mut s.elongation.value);
+            segments.chain([&mut m.elongation.value])
+        }))
     }),
     ("elongation from force", |r| {
         largest(segments(r).map(|s| &mut s.elongation_force.value))
