@@ -11,13 +11,24 @@ pub(crate) type Corruption = (&'static str, fn(&mut CombinationResult) -> bool);
 
 /// Changes the largest by size of some numbers; false where all are 0.
 fn largest<'r>(numbers: impl Iterator<Item = &'r mut f64>) -> bool {
+    largest_over(0.0, numbers)
+}
+
+/// The same, but false where none is over a size under which it may be nothing but rounding.
+fn largest_over<'r>(floor: f64, numbers: impl Iterator<Item = &'r mut f64>) -> bool {
     match numbers.max_by(|a, b| a.abs().total_cmp(&b.abs())) {
-        Some(number) if *number != 0.0 => {
+        Some(number) if number.abs() > floor => {
             *number *= PART;
             true
         }
         _ => false,
     }
+}
+
+/// A thousandth of the largest movement of a point (m; of a rotation, at an arm of 1 m).
+fn slight(r: &CombinationResult) -> f64 {
+    let moves = r.points.iter().flat_map(|p| &p.displacement);
+    1e-3 * moves.fold(0.0, |most: f64, by| most.max(by.value.abs()))
 }
 
 fn length(of: &mut Length) -> &mut f64 {
@@ -53,7 +64,9 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         )
     }),
     ("movement of a body", |r| {
-        largest(
+        let floor = slight(r);
+        largest_over(
+            floor,
             r.bodies
                 .iter_mut()
                 .flat_map(|b| &mut b.displacement)
@@ -61,7 +74,11 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         )
     }),
     ("rotation of a body", |r| {
-        largest(r.bodies.iter_mut().flat_map(|b| angles(&mut b.rotation)))
+        let floor = slight(r);
+        largest_over(
+            floor,
+            r.bodies.iter_mut().flat_map(|b| angles(&mut b.rotation)),
+        )
     }),
     ("reaction of a hold", |r| {
         let reactions = r.holds.iter_mut().filter_map(|h| h.reaction.as_mut());
@@ -72,7 +89,9 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         largest(reactions.flatten().map(force))
     }),
     ("gap of a hold", |r| {
-        largest(
+        let floor = slight(r);
+        largest_over(
+            floor,
             r.holds
                 .iter_mut()
                 .filter_map(|h| h.gap.as_mut())
@@ -121,7 +140,11 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         largest(segments(r).map(|s| &mut s.elongation_misfit.value))
     }),
     ("distance from being taut", |r| {
-        largest(members(r).filter_map(|m| m.slack_by.as_mut()).map(length))
+        let floor = slight(r);
+        largest_over(
+            floor,
+            members(r).filter_map(|m| m.slack_by.as_mut()).map(length),
+        )
     }),
 ];
 
