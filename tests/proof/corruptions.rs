@@ -31,6 +31,12 @@ fn slight(r: &CombinationResult) -> f64 {
     1e-3 * moves.fold(0.0, |most: f64, by| most.max(by.value.abs()))
 }
 
+/// A hundredth of all reactions by size: a total of forces that cancel is held to what cancels.
+fn of_reactions(r: &CombinationResult) -> f64 {
+    let reactions = r.holds.iter().flat_map(|h| h.reaction.iter().flatten());
+    1e-2 * reactions.map(|reaction| reaction.value.abs()).sum::<f64>()
+}
+
 fn length(of: &mut Length) -> &mut f64 {
     &mut of.value
 }
@@ -99,10 +105,16 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         )
     }),
     ("total applied", |r| {
-        largest(r.totals.iter_mut().flat_map(|t| &mut t.applied).map(force))
+        let floor = of_reactions(r);
+        largest_over(
+            floor,
+            r.totals.iter_mut().flat_map(|t| &mut t.applied).map(force),
+        )
     }),
     ("total of reactions", |r| {
-        largest(
+        let floor = of_reactions(r);
+        largest_over(
+            floor,
             r.totals
                 .iter_mut()
                 .flat_map(|t| &mut t.reactions)
