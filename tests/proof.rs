@@ -1,11 +1,15 @@
 //! The residuals bite: a finished result that is changed by one part in a million, or whose decided
 //! stop or joint is turned over, does not pass as proven.
 
+#[path = "proof/assemblies.rs"]
+mod assemblies;
 #[path = "proof/by_hand.rs"]
 mod by_hand;
 mod common;
 #[path = "proof/corruptions.rs"]
 mod corruptions;
+#[path = "proof/frames.rs"]
+mod frames;
 #[path = "proof/hand.rs"]
 mod hand;
 #[path = "proof/rounding.rs"]

@@ -6,7 +6,11 @@ use super::piece::{Integrated, Piece};
 use super::residual::{Residual, Size, Work};
 use crate::model::{Member, SegmentKind};
 use crate::quantity::{Force, Length};
-use crate::result::{MemberResult, SegmentResult};
+use crate::result::MemberResult;
+
+/// The share at which strains of a member between points count beside the movement of its stations:
+/// enough for the rounding of what cancels, and for that of the quadrature over steep tapers.
+const OF_STRAINS: f64 = 1e-2;
 
 /// What holds a member, and so what its two ends can be measured against.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -50,7 +54,12 @@ pub(super) struct Proof<'p> {
     pub(super) acting: Acting<'p>,
     pub(super) result: &'p MemberResult,
     pub(super) held_by: HeldBy,
-    along: Vec<Piece>,
+    /// Counts beside every force: 0 but where all of the member may move far as one, so that a force
+    /// in it may be nothing but the rounding of that.
+    pub(super) slight: Force,
+    /// Counts so beside every movement.
+    pub(super) slight_move: Length,
+    pub(super) along: Vec<Piece>,
     pub(super) pieces: Vec<Integrated>,
     /// The reactions at each station, and the sum of their sizes.
     pub(super) reactions: Vec<(Force, Force)>,
@@ -88,6 +97,8 @@ impl<'p> Proof<'p> {
             acting,
             result,
             held_by,
+            slight: Force::default(),
+            slight_move: Length::default(),
             along,
             pieces,
             reactions,
@@ -128,7 +139,7 @@ impl<'p> Proof<'p> {
             let (reaction, size) = self.reactions[station];
             let (before, after) = self.forces_at(station);
             let (load, load_size) = self.acting.forces[station];
-            let sizes = before.abs() + after.abs() + load_size + size;
+            let sizes = before.abs() + after.abs() + load_size + size + self.slight;
             self.equilibrium
                 .take((after - before + load + reaction).over(sizes));
         }
@@ -151,6 +162,7 @@ impl<'p> Proof<'p> {
             reaction_size += size;
         }
         let totals = &self.result.totals;
+        let (size, reaction_size) = (size + self.slight, reaction_size + self.slight);
         self.equilibrium
             .take((applied + reactions).over(size + reaction_size));
         self.equilibrium
@@ -163,7 +175,7 @@ impl<'p> Proof<'p> {
     fn along_pieces(&mut self, pieces: &[Integrated]) {
         for (index, piece) in pieces.iter().enumerate() {
             let ((_, start), (end, _)) = (self.forces_at(index), self.forces_at(index + 1));
-            let sizes = start.abs() + end.abs() + piece.load_size;
+            let sizes = start.abs() + end.abs() + piece.load_size + self.slight;
             self.equilibrium
                 .take((end - start + piece.load).over(sizes));
             let (from, to) = (self.displacement(index), self.displacement(index + 1));
@@ -171,7 +183,8 @@ impl<'p> Proof<'p> {
             let strained = !matches!(segment.kind, SegmentKind::Gap(_));
             if strained && self.held_by != HeldBy::PointsSlack {
                 let parts = piece.force + piece.thermal + piece.imposed;
-                let sizes = from.abs() + to.abs() + piece.force_size + piece.free_size;
+                let strained = piece.force_size + piece.free_size;
+                let sizes = from.abs() + to.abs() + parts.abs() + self.of_strains(strained);
                 self.compatibility.take((to - from - parts).over(sizes));
             }
         }
@@ -210,7 +223,7 @@ impl<'p> Proof<'p> {
             self.compatibility.take(m.against(result.elongation_misfit));
             let parts =
                 result.elongation_force + result.elongation_temperature + result.elongation_misfit;
-            let sizes = f.size + t.size + m.size + result.elongation.abs();
+            let sizes = self.of_strains(f.size + t.size + m.size) + result.elongation.abs();
             self.compatibility
                 .take((result.elongation - parts).over(sizes));
             let ((_, start), (end, _)) = (self.forces_at(first), self.forces_at(at));
@@ -244,7 +257,8 @@ impl<'p> Proof<'p> {
             self.displacement(0),
             self.displacement(result.stations.len() - 1),
         );
-        let parts = force.size + thermal.size + imposed.size + result.elongation.abs();
+        let parts = force.size + thermal.size + imposed.size;
+        let parts = self.of_strains(parts) + result.elongation.abs();
         let sum =
             result.elongation_force + result.elongation_temperature + result.elongation_misfit;
         self.compatibility
@@ -257,85 +271,21 @@ impl<'p> Proof<'p> {
         self.member_extremes();
     }
 
+    /// What strains count for beside the displacements that they leave: between points these may be
+    /// small beside them.
+    fn of_strains(&self, size: Length) -> Length {
+        match self.held_by {
+            HeldBy::Supports => size,
+            HeldBy::Points | HeldBy::PointsSlack => size * OF_STRAINS + self.slight_move,
+        }
+    }
+
     /// What two displacements count for beside their difference: between points all of it may move
     /// far as one.
     fn size_of_ends(&self, from: Length, to: Length) -> Length {
         match self.held_by {
             HeldBy::Supports => Length::default(),
-            HeldBy::Points | HeldBy::PointsSlack => from.abs() + to.abs(),
-        }
-    }
-
-    /// The extremes of N of a segment against what the proof saw along it. Its places are the ends
-    /// and the nodes, so that an extreme between them may only be larger. `size` is that of the
-    /// terms which N is the sum of.
-    fn extremes(&mut self, result: &SegmentResult, most: Force, least: Force, size: Force) {
-        let under = (most - result.force_max).max(Force::default());
-        let over = (result.force_min - least).max(Force::default());
-        self.equilibrium.take(under.over(size));
-        self.equilibrium.take(over.over(size));
-        for (named, x) in [
-            (result.force_max, result.force_max_at),
-            (result.force_min, result.force_min_at),
-        ] {
-            let there = self.force_at(x, named);
-            self.equilibrium
-                .take((named - there).over(named.abs() + size));
-        }
-    }
-
-    /// N at a place from the nearest station before it; of two at a cut the one nearer to `named`.
-    fn force_at(&self, x: Length, named: Force) -> Force {
-        let stations = &self.result.stations;
-        let next = stations.partition_point(|station| station.x <= x);
-        let after = next.saturating_sub(1).min(stations.len() - 2);
-        let at = |piece: usize| {
-            let length = self.acting.member.pieces[piece].length;
-            let s = ((x - stations[piece].x) / length).value.clamp(0.0, 1.0);
-            self.along[piece].force_at(s)
-        };
-        let (here, before) = (at(after), at(after.saturating_sub(1)));
-        if (before - named).abs() < (here - named).abs() {
-            before
-        } else {
-            here
-        }
-    }
-
-    fn member_extremes(&mut self) {
-        let segments = &self.result.segments;
-        let most = segments
-            .iter()
-            .map(|s| s.force_max)
-            .fold(None, |m: Option<Force>, f| Some(m.map_or(f, |m| m.max(f))));
-        let least = segments
-            .iter()
-            .map(|s| s.force_min)
-            .fold(None, |m: Option<Force>, f| Some(m.map_or(f, |m| m.min(f))));
-        for (named, seen) in [
-            (self.result.force_max, most),
-            (self.result.force_min, least),
-        ] {
-            let seen = seen.unwrap_or_default();
-            self.equilibrium
-                .take((named - seen).over(named.abs() + seen.abs()));
-        }
-    }
-
-    /// The layers of a segment carry N together.
-    fn layers(&mut self, result: &SegmentResult) {
-        if result.layers.is_empty() {
-            return;
-        }
-        let layers = || result.layers.iter();
-        let starts: Vec<Force> = layers().map(|layer| layer.force_start).collect();
-        let ends: Vec<Force> = layers().map(|layer| layer.force_end).collect();
-        for (whole, parts) in [(result.force_start, starts), (result.force_end, ends)] {
-            let sum = parts.iter().fold(Force::default(), |sum, &part| sum + part);
-            let size = parts
-                .iter()
-                .fold(whole.abs(), |size, part| size + part.abs());
-            self.equilibrium.take((whole - sum).over(size));
+            HeldBy::Points | HeldBy::PointsSlack => from.abs() + to.abs() + self.slight_move,
         }
     }
 

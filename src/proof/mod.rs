@@ -7,6 +7,7 @@
 
 mod acting;
 mod assembly;
+mod extremes;
 mod member;
 mod piece;
 mod quadrature;

@@ -40,7 +40,7 @@ impl Proof<'_> {
         let (before, after) = self.forces_at(station);
         let (_, load) = self.acting.forces[station];
         let (_, reactions) = self.reactions[station];
-        before.abs() + after.abs() + load + reactions
+        before.abs() + after.abs() + load + reactions + self.slight
     }
 
     /// A support keeps its law: fixed, spring, or a stop that only pushes and never overlaps.

@@ -11,13 +11,30 @@ pub(crate) type Corruption = (&'static str, fn(&mut CombinationResult) -> bool);
 
 /// Changes the largest by size of some numbers; false where all are 0.
 fn largest<'r>(numbers: impl Iterator<Item = &'r mut f64>) -> bool {
+    largest_over(0.0, numbers)
+}
+
+/// The same, but false where none is over a size under which it may be nothing but rounding.
+fn largest_over<'r>(floor: f64, numbers: impl Iterator<Item = &'r mut f64>) -> bool {
     match numbers.max_by(|a, b| a.abs().total_cmp(&b.abs())) {
-        Some(number) if *number != 0.0 => {
+        Some(number) if number.abs() > floor => {
             *number *= PART;
             true
         }
         _ => false,
     }
+}
+
+/// A thousandth of the largest movement of a point (m; of a rotation, at an arm of 1 m).
+fn slight(r: &CombinationResult) -> f64 {
+    let moves = r.points.iter().flat_map(|p| &p.displacement);
+    1e-3 * moves.fold(0.0, |most: f64, by| most.max(by.value.abs()))
+}
+
+/// A hundredth of all reactions by size: a total of forces that cancel is held to what cancels.
+fn of_reactions(r: &CombinationResult) -> f64 {
+    let reactions = r.holds.iter().flat_map(|h| h.reaction.iter().flatten());
+    1e-2 * reactions.map(|reaction| reaction.value.abs()).sum::<f64>()
 }
 
 fn length(of: &mut Length) -> &mut f64 {
@@ -53,7 +70,9 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         )
     }),
     ("movement of a body", |r| {
-        largest(
+        let floor = slight(r);
+        largest_over(
+            floor,
             r.bodies
                 .iter_mut()
                 .flat_map(|b| &mut b.displacement)
@@ -61,7 +80,11 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         )
     }),
     ("rotation of a body", |r| {
-        largest(r.bodies.iter_mut().flat_map(|b| angles(&mut b.rotation)))
+        let floor = slight(r);
+        largest_over(
+            floor,
+            r.bodies.iter_mut().flat_map(|b| angles(&mut b.rotation)),
+        )
     }),
     ("reaction of a hold", |r| {
         let reactions = r.holds.iter_mut().filter_map(|h| h.reaction.as_mut());
@@ -72,7 +95,9 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         largest(reactions.flatten().map(force))
     }),
     ("gap of a hold", |r| {
-        largest(
+        let floor = slight(r);
+        largest_over(
+            floor,
             r.holds
                 .iter_mut()
                 .filter_map(|h| h.gap.as_mut())
@@ -80,10 +105,16 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         )
     }),
     ("total applied", |r| {
-        largest(r.totals.iter_mut().flat_map(|t| &mut t.applied).map(force))
+        let floor = of_reactions(r);
+        largest_over(
+            floor,
+            r.totals.iter_mut().flat_map(|t| &mut t.applied).map(force),
+        )
     }),
     ("total of reactions", |r| {
-        largest(
+        let floor = of_reactions(r);
+        largest_over(
+            floor,
             r.totals
                 .iter_mut()
                 .flat_map(|t| &mut t.reactions)
@@ -105,7 +136,11 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         largest(stations.map(|s| &mut s.displacement.value))
     }),
     ("elongation", |r| {
-        largest(members(r).map(|m| &mut m.elongation.value))
+        // That of a member may be all rounding, where its segments' cancel.
+        largest(members(r).flat_map(|m| {
+            let segments = m.segments.iter_mut().map(|s| &mut s.elongation.value);
+            segments.chain([&mut m.elongation.value])
+        }))
     }),
     ("elongation from force", |r| {
         largest(segments(r).map(|s| &mut s.elongation_force.value))
@@ -117,7 +152,11 @@ pub(crate) const CORRUPTIONS: [Corruption; 17] = [
         largest(segments(r).map(|s| &mut s.elongation_misfit.value))
     }),
     ("distance from being taut", |r| {
-        largest(members(r).filter_map(|m| m.slack_by.as_mut()).map(length))
+        let floor = slight(r);
+        largest_over(
+            floor,
+            members(r).filter_map(|m| m.slack_by.as_mut()).map(length),
+        )
     }),
 ];
 

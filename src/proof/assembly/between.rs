@@ -1,5 +1,6 @@
 //! A member between two points: what it puts on them, and what their movement asks of it.
 
+use super::SHARE;
 use super::one_way::stretch_by_weight;
 use super::space::{along, difference, size_along, toward};
 use crate::model::{Between, Combination, Member, Model, Spatial};
@@ -63,28 +64,18 @@ impl Looked {
             (lever, Default::default(), HeldBy::Points)
         };
         let mut proof = Proof::of(acting, result, held_by);
-        proof.take();
         let ends = Ends {
             moves: moves.map(|by| along(axis, by)),
             sizes: moves.map(|by| size_along(axis, by) + slight),
         };
+        let (_, free_size) = proof.free();
+        let stretch = result.elongation.abs() + free_size;
+        let elastic = proof.stiff(ends.sizes[0] + ends.sizes[1] + stretch);
+        proof.slight = elastic * SHARE;
+        proof.slight_move = slight;
+        proof.take();
         proof.ends(&ends);
         proof.state(&ends, lump, by_weight);
-
-        let free_size = proof
-            .pieces
-            .iter()
-            .fold(Length::default(), |size, piece| size + piece.free_size);
-        let stretch = result.elongation.abs() + free_size;
-        let flexibility = proof
-            .pieces
-            .iter()
-            .fold(Flexibility::default(), |sum, piece| sum + piece.flexibility);
-        let elastic = if flexibility == Flexibility::default() {
-            Force::default()
-        } else {
-            (ends.sizes[0] + ends.sizes[1] + stretch) / flexibility
-        };
         let last = proof.reactions.len() - 1;
         let (start, end) = (proof.reactions[0], proof.reactions[last]);
         let mut carried = (Force::default(), Force::default());
@@ -118,6 +109,17 @@ pub(super) struct Ends {
 }
 
 impl Proof<'_> {
+    /// The force with which the member answers a change of length.
+    fn stiff(&self, stretch: Length) -> Force {
+        let pieces = self.pieces.iter();
+        let flexibility = pieces.fold(Flexibility::default(), |sum, piece| sum + piece.flexibility);
+        if flexibility == Flexibility::default() {
+            Force::default()
+        } else {
+            stretch / flexibility
+        }
+    }
+
     /// The stations at a member's ends move as its points do.
     fn ends(&mut self, ends: &Ends) {
         let last = self.result.stations.len() - 1;

@@ -33,7 +33,7 @@ impl Proof<'_> {
                 } else {
                     between
                 };
-                let sizes = start.abs() + lump.abs();
+                let sizes = start.abs() + lump.abs() + self.slight;
                 self.equilibrium
                     .take(wrong.max(Force::default()).over(sizes));
             }
@@ -65,7 +65,7 @@ impl Proof<'_> {
     }
 
     /// What the member would change its length by itself, and the sum of the sizes.
-    fn free(&self) -> (Length, Length) {
+    pub(super) fn free(&self) -> (Length, Length) {
         let none = (Length::default(), Length::default());
         self.pieces.iter().fold(none, |(free, size), piece| {
             (free + piece.thermal + piece.imposed, size + piece.free_size)
