@@ -2,7 +2,7 @@
 
 use super::Sketch;
 use super::draw::Draw;
-use crate::solve::system::Prepared;
+use crate::solve::system::{Prepared, Row};
 use nalgebra::{DMatrix, DVector};
 
 /// The displacements and the forces of rigid rows with these one-way parts acting, where the state
@@ -18,11 +18,11 @@ fn stands(sketch: &Sketch, acts: &[bool]) -> Option<DVector<f64>> {
         .zip(&loads.rigid_value)
         .map(|(row, value)| (row.as_slice(), value.value))
         .collect();
-    let mut springs: Vec<(&[(usize, f64)], f64, f64)> = system
+    let mut springs: Vec<(&Row, f64, f64)> = system
         .elastic
         .iter()
         .zip(&loads.elastic_rest)
-        .map(|(part, rest)| (part.row.as_slice(), part.stiffness.value, rest.value))
+        .map(|(part, rest)| (&part.row, part.stiffness.value, rest.value))
         .collect();
     for (index, part) in system.one_way.iter().enumerate().filter(|(i, _)| acts[*i]) {
         let rest = loads.one_way_rest[index].value;
