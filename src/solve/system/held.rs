@@ -14,6 +14,9 @@ const STILL: f64 = 8.0 * f64::EPSILON;
 /// Refinement that goes on for so long would not end.
 const ROUNDS: usize = 10;
 
+/// Of so many pushed motions the one pushed most is looked for; beyond it any of them tells enough.
+const MIXED: usize = 32;
+
 /// Which part a row belongs to.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord)]
 pub(super) enum Part {
@@ -234,16 +237,14 @@ impl Held {
             .collect()
     }
 
-    /// Of all free motions the one along which the loads push most, for its size.
+    /// Of the free motions that are pushed the mixture that is pushed most, for its size.
     pub(super) fn pushed_motion(&self, loads: &Loads) -> Row {
         // The forces less what is square to all motions: a projection on a basis made square.
         let mut square: Vec<Vec<f64>> = Vec::new();
         let mut along = vec![0.0; self.unknowns];
         let dot = |a: &[f64], b: &[f64]| a.iter().zip(b).map(|(a, b)| a * b).sum::<f64>();
-        for motion in &self.motions {
-            if work(motion, loads).abs() <= loads.zero.force.value {
-                continue;
-            }
+        let pushed = |motion: &&Row| work(motion, loads).abs() > loads.zero.force.value;
+        for motion in self.motions.iter().filter(pushed).take(MIXED) {
             let mut rest = vec![0.0; self.unknowns];
             for &(unknown, share) in motion {
                 rest[unknown] = share;
