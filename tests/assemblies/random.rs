@@ -1,0 +1,329 @@
+//! Random assemblies against dense arithmetic and the enumeration of all states. The source of the
+//! values is statics and compatibility written out as one linear system per state, in `dense.rs`.
+
+use super::assembly::{Assembly, HoldKind, Vector, Way, plus};
+use super::dense::{Contact, Found, State, System};
+use super::generator;
+use crate::common::chain::Random;
+use crate::common::checked;
+use lengthwise::quantity::{Force, Length};
+use lengthwise::result::{CombinationResult, JobResult, MemberState};
+
+/// What came of the assemblies, so that the test cannot become empty unnoticed.
+#[derive(Debug, Default)]
+struct Tally {
+    solved: usize,
+    acting: usize,
+    resting: usize,
+    unsolvable: usize,
+    unclear: usize,
+    losses: usize,
+    lost_too_much: usize,
+}
+
+/// To this share of the largest of a kind.
+const NEAR: f64 = 1e-10;
+
+fn run(coordinates: usize, seed: u64) {
+    let mut random = Random(seed);
+    let mut tally = Tally::default();
+    for number in 0..2_000 {
+        let mut assembly = generator::assembly(&mut random, coordinates);
+        if number % 10 == 0 {
+            assembly.lose_each = (0..assembly.members.len()).collect();
+        }
+        let job = assembly.job();
+        let result = checked("random.toml", &job);
+        let about = format!("assembly {number} in {coordinates}");
+        judge(&about, "intact", &assembly, &result, &mut tally);
+        for &member in &assembly.lose_each {
+            let less = assembly.without(member);
+            let name = format!("loss/without=m{}", member + 1);
+            let before = (tally.solved, tally.unsolvable);
+            judge(&about, &name, &less, &result, &mut tally);
+            tally.losses += tally.solved - before.0;
+            tally.lost_too_much += tally.unsolvable - before.1;
+        }
+    }
+    println!("{coordinates}: {tally:?}");
+    assert!(tally.solved >= 2_000, "{tally:?}");
+    assert!(tally.acting >= 1_000 && tally.resting >= 1_000, "{tally:?}");
+    assert!(tally.unsolvable >= 100, "{tally:?}");
+    assert!(tally.unclear <= 100, "{tally:?}");
+    assert!(
+        tally.losses >= 300 && tally.lost_too_much >= 50,
+        "{tally:?}"
+    );
+}
+
+#[test]
+fn states_and_values_in_one_coordinate_are_those_of_the_enumeration() {
+    run(1, 20_261_201);
+}
+
+#[test]
+fn states_and_values_in_two_coordinates_are_those_of_the_enumeration() {
+    run(2, 20_261_202);
+}
+
+#[test]
+fn states_and_values_in_three_coordinates_are_those_of_the_enumeration() {
+    run(3, 20_261_203);
+}
+
+/// One combination of a result against an assembly.
+fn judge(about: &str, name: &str, assembly: &Assembly, result: &JobResult, tally: &mut Tally) {
+    let system = System::of(assembly);
+    let found = result.combinations.iter().find(|c| &*c.name == name);
+    match system.enumerate() {
+        Found::One(state) => {
+            let combination = found.unwrap_or_else(|| {
+                panic!(
+                    "{about}: `{name}` is not solved: {:#?}\n{}",
+                    result.errors,
+                    assembly.job()
+                )
+            });
+            compare(&format!("{about}, {name}"), &system, &state, combination);
+            tally.solved += 1;
+            let acting = state.acts.iter().filter(|&&a| a).count();
+            tally.acting += acting;
+            tally.resting += state.acts.len() - acting;
+        }
+        Found::None => {
+            assert!(
+                found.is_none(),
+                "{about}: `{name}` has no state in balance, yet it was solved\n{}",
+                assembly.job()
+            );
+            let named = |e: &lengthwise::result::ErrorEntry| e.combination.as_deref() == Some(name);
+            assert!(
+                result.errors.iter().any(named),
+                "{about}: no error of `{name}`"
+            );
+            tally.unsolvable += 1;
+        }
+        Found::Unclear => tally.unclear += 1,
+    }
+}
+
+/// Compares numbers of one kind.
+struct Near<'a> {
+    about: &'a str,
+    system: &'a System<'a>,
+    scale: f64,
+}
+
+impl Near<'_> {
+    fn hold(&self, what: &str, found: f64, expected: f64) {
+        assert!(
+            (found - expected).abs() <= NEAR * self.scale,
+            "{}: {what} is {found:e}, the enumeration has {expected:e} (largest {:e})\n{}",
+            self.about,
+            self.scale,
+            self.system.assembly.job()
+        );
+    }
+
+    fn vector(&self, what: &str, found: impl ExactSizeIterator<Item = f64>, expected: Vector) {
+        assert_eq!(found.len(), self.system.assembly.coordinates, "{what}");
+        for (found, expected) in found.zip(expected) {
+            self.hold(what, found, expected);
+        }
+    }
+}
+
+/// Every displacement, elongation and gap, every force and rotation, and every state.
+pub(super) fn compare(about: &str, system: &System, state: &State, found: &CombinationResult) {
+    let assembly = system.assembly;
+    let lengths = Near {
+        about,
+        system,
+        scale: system.largest_length(state).max(1e-6),
+    };
+    let loads = system.bars.iter().map(|b| super::assembly::size(b.applied));
+    let forces = Near {
+        about,
+        system,
+        scale: loads.fold(system.largest_force(state), f64::max),
+    };
+    let turns = Near {
+        about,
+        system,
+        scale: lengths.scale, // over 1 m
+    };
+    let acts = |contact: Contact| {
+        let index = system.contacts.iter().position(|&c| c == contact);
+        index.map(|i| (state.acts[i], state.clearance[i]))
+    };
+    for (i, point) in found.points.iter().enumerate() {
+        let moved = point.displacement.iter().map(|u: &Length| u.value);
+        lengths.vector(&point.name, moved, state.displacement[i]);
+        let holds = assembly.holds.iter().zip(&state.reaction);
+        let own: Vec<Vector> = holds
+            .filter(|(h, _)| h.point == i)
+            .map(|(_, &r)| r)
+            .collect();
+        match &point.reaction {
+            Some(reaction) => {
+                let sum = own.iter().fold([0.0; 3], |sum, &r| plus(sum, r));
+                forces.vector(&point.name, reaction.iter().map(|r: &Force| r.value), sum);
+            }
+            None => assert!(own.is_empty(), "{about}: {} has a hold", point.name),
+        }
+    }
+    for (i, body) in found.bodies.iter().enumerate() {
+        let first = assembly.bodies[i].points[0];
+        let moved = body.displacement.iter().map(|u| u.value);
+        lengths.vector(&body.name, moved, state.displacement[first]);
+        let turned = body.rotation.spatial().map(|a| a.value);
+        let expected = match *state.rotation[i] {
+            [x, y, z] => [x, y, z],
+            [z] => [0.0, 0.0, z],
+            _ => [0.0; 3],
+        };
+        for (found, expected) in turned.into_iter().zip(expected) {
+            turns.hold(&body.name, found, expected);
+        }
+    }
+    for (i, hold) in found.holds.iter().enumerate() {
+        let reaction = hold.reaction.as_ref().expect("nothing is shared here");
+        forces.vector(
+            &hold.name,
+            reaction.iter().map(|r| r.value),
+            state.reaction[i],
+        );
+        if let HoldKind::Stop { .. } = assembly.holds[i].kind {
+            let (bears, gap) = acts(Contact::Stop(i)).expect("a stop");
+            assert_eq!(
+                hold.bears,
+                Some(bears),
+                "{about}: {}\n{}",
+                hold.name,
+                assembly.job()
+            );
+            lengths.hold(&hold.name, hold.gap.expect("a stop has a gap").value, gap);
+        }
+    }
+    assert_eq!(found.members.len(), assembly.members.len());
+    for (i, member) in found.members.iter().enumerate() {
+        let (taut, slack_by) = acts(Contact::Member(i)).unwrap_or((true, 0.0));
+        let state_word = match (assembly.members[i].carries, taut) {
+            (_, false) => MemberState::Slack,
+            (Some(Way::Compression), true) => MemberState::Bearing,
+            _ => MemberState::Taut,
+        };
+        assert_eq!(
+            member.state,
+            state_word,
+            "{about}: {}\n{}",
+            member.name,
+            assembly.job()
+        );
+        assert_eq!(member.slack_by.is_some(), !taut, "{about}: {}", member.name);
+        if let Some(found) = member.slack_by {
+            lengths.hold(&member.name, found.value, slack_by);
+        }
+        let stations = &state.station[i];
+        let stretch = match taut {
+            true => stations[stations.len() - 1] - stations[0],
+            false => system.bars[i].growth(),
+        };
+        lengths.hold(&member.name, member.elongation.value, stretch);
+        along(&lengths, &forces, system, state, i, taut, member);
+    }
+    let totals = found.totals.as_ref().expect("an assembly has totals");
+    let reactions = state.reaction.iter().fold([0.0; 3], |sum, &r| plus(sum, r));
+    forces.vector(
+        "totals",
+        totals.reactions.iter().map(|r| r.value),
+        reactions,
+    );
+    let against = reactions.map(|r| -r);
+    forces.vector("totals", totals.applied.iter().map(|r| r.value), against);
+    let most = found.residuals.largest();
+    assert!(
+        most <= 1e-12,
+        "{about}: residual {most:e}\n{}",
+        assembly.job()
+    );
+}
+
+/// Stations and forces along a member.
+fn along(
+    lengths: &Near,
+    forces: &Near,
+    system: &System,
+    state: &State,
+    i: usize,
+    taut: bool,
+    member: &lengthwise::result::MemberResult,
+) {
+    let bar = &system.bars[i];
+    assert_eq!(member.stations.len(), state.station[i].len());
+    let last = member.stations.len() - 1;
+    for (s, station) in member.stations.iter().enumerate() {
+        if taut || s == 0 || s == last {
+            lengths.hold(
+                &station.name,
+                station.displacement.value,
+                state.station[i][s],
+            );
+        }
+        let before = s.checked_sub(1).map(|e| match taut {
+            true => state.force[i][e] - bar.elements[e].load,
+            false => 0.0,
+        });
+        let after = (s < last).then(|| state.force[i][s]);
+        for (found, expected) in [(station.force_before, before), (station.force_after, after)] {
+            assert_eq!(found.is_some(), expected.is_some(), "{}", station.name);
+            let (found, expected) = (found.map_or(0.0, |f| f.value), expected.unwrap_or(0.0));
+            forces.hold(&station.name, found, expected);
+        }
+    }
+    for (s, segment) in member.segments.iter().enumerate() {
+        let elements = bar
+            .elements
+            .iter()
+            .enumerate()
+            .filter(|(_, e)| e.segment == s);
+        let stretch: f64 = elements
+            .map(|(e, element)| match taut {
+                true => state.station[i][e + 1] - state.station[i][e],
+                false => element.growth,
+            })
+            .sum();
+        lengths.hold(&segment.name, segment.elongation.value, stretch);
+        assert_eq!(segment.gap.is_some(), segment.bears.is_some());
+        if let Some(gap) = segment.gap {
+            let contact = system.contacts.iter().position(|&c| c == Contact::Gap(i));
+            let contact = contact.expect("a gap acts one way");
+            lengths.hold(&segment.name, gap.value, state.clearance[contact]);
+            assert_eq!(segment.bears, Some(state.acts[contact]), "{}", member.name);
+        }
+    }
+}
+
+#[test]
+fn temp_reference_only() {
+    for coordinates in 1..=3 {
+        let t = std::time::Instant::now();
+        let mut random = Random(20_261_200 + coordinates as u64);
+        let mut tally = [0usize; 4];
+        let mut size = 0;
+        for number in 0..2_000 {
+            let assembly = generator::assembly(&mut random, coordinates);
+            let system = System::of(&assembly);
+            match system.enumerate() {
+                Found::One(s) => {
+                    tally[0] += 1;
+                    tally[3] += s.acts.iter().filter(|&&a| a).count();
+                }
+                Found::None => tally[1] += 1,
+                Found::Unclear => tally[2] += 1,
+            }
+            size = size.max(number);
+        }
+        println!("{coordinates} {tally:?} {:?}", t.elapsed());
+    }
+}
