@@ -7,7 +7,7 @@
 
 use super::assembly::{Assembly, Hold, HoldKind, Vector, Way, dot, plus, scaled, size};
 use super::elements::Bar;
-use super::numbers::refined;
+use super::numbers::{refined, solved};
 use super::stiff::Stiff;
 use nalgebra::{DMatrix, DVector};
 
@@ -130,6 +130,9 @@ impl<'a> System<'a> {
             let acts: Vec<bool> = (0..self.contacts.len())
                 .map(|c| mask >> c & 1 == 1)
                 .collect();
+            if self.is_clearly_wrong(&acts) {
+                continue;
+            }
             match self.state(&acts) {
                 Some((_, clear)) if clear.abs() < TOUCH => return Found::Unclear,
                 Some((state, clear)) if clear > 0.0 => {
@@ -150,6 +153,15 @@ impl<'a> System<'a> {
         let state = self.read(&x, acts);
         let clear = self.clearly(&state, acts);
         Some((state, clear))
+    }
+
+    /// Whether rounding cannot make this state the right one; seen without refinement.
+    fn is_clearly_wrong(&self, acts: &[bool]) -> bool {
+        let (a, b) = self.equations(acts);
+        let Some(x) = solved(&a, &b) else {
+            return true;
+        };
+        self.clearly(&self.read(&x, acts), acts) < -1e-4
     }
 
     fn acts(&self, acts: &[bool], contact: Contact) -> bool {

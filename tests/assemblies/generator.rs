@@ -193,10 +193,20 @@ fn body(random: &mut Random, made: &mut Assembly) {
     }
 }
 
-/// Something that keeps a point from moving one way: a member to an earlier point, or a hold.
-/// Points of a body are held by springs only: rigid holds could share what nothing decides.
+/// Something that keeps a point from moving one way: a member to an earlier point that does not move
+/// with it, or a hold. Points of a body are held by springs only: rigid holds could share what
+/// nothing decides.
 fn tie(random: &mut Random, made: &mut Assembly, point: usize, earlier: usize, of_body: bool) {
-    if random.chance(0.15) {
+    let together = |other: usize| {
+        let mut bodies = made.bodies.iter();
+        let mut members = made.members.iter();
+        bodies.any(|b| b.points.contains(&point) && b.points.contains(&other))
+            || members.any(|m| m.ends == [point, other])
+    };
+    let others: Vec<usize> = (0..earlier)
+        .filter(|&p| p != point && !together(p))
+        .collect();
+    if others.is_empty() || random.chance(0.15) {
         let along = vec![direction(random, made.coordinates)];
         let rigid = !of_body && random.chance(0.4) && !made.holds.iter().any(|h| h.point == point);
         let kind = match rigid {
@@ -206,7 +216,7 @@ fn tie(random: &mut Random, made: &mut Assembly, point: usize, earlier: usize, o
         hold(random, made, point, along, kind);
         return;
     }
-    let other = random.below(earlier);
+    let other = others[random.below(others.len())];
     let two_way = member(random, made, [point, other]);
     made.members.push(two_way);
 }
@@ -228,6 +238,8 @@ fn contact(random: &mut Random, made: &mut Assembly) {
         return;
     }
     let mut new = member(random, made, [point, other]);
+    // Between points that do not move it would touch exactly.
+    new.segments[0].misfit = signed(random, 1e-5, 2e-3);
     match random.chance(0.3) {
         true => open(random, &mut new),
         false => one_way_only(random, &mut new),

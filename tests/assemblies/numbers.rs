@@ -1,22 +1,30 @@
 //! Dense solutions to rounding.
 
-use nalgebra::{DMatrix, DVector};
+use nalgebra::{DMatrix, DVector, Dyn, LU};
 
 /// Pivots below this share of the largest are 0: the equations have no single solution.
 const NO_PIVOT: f64 = 1e-11;
 
-/// LU solution, refined until the residual, formed in doubled precision, is at rounding; `None`
-/// where there is no single solution.
-pub(crate) fn refined(a: &DMatrix<f64>, b: &DVector<f64>) -> Option<DVector<f64>> {
+/// LU factors; `None` where there is no single solution.
+fn factors(a: &DMatrix<f64>) -> Option<LU<f64, Dyn, Dyn>> {
     let factors = a.clone().lu();
     let packed = factors.lu_internal();
-    let pivots = || (0..b.len()).map(|i| packed[(i, i)].abs());
+    let pivots = || (0..a.nrows()).map(|i| packed[(i, i)].abs());
     let largest = pivots().fold(0.0, f64::max);
-    if pivots().any(|pivot| pivot <= NO_PIVOT * largest) {
-        return None;
-    }
+    let single = pivots().all(|pivot| pivot > NO_PIVOT * largest);
+    single.then_some(factors)
+}
+
+/// LU solution as it comes.
+pub(crate) fn solved(a: &DMatrix<f64>, b: &DVector<f64>) -> Option<DVector<f64>> {
+    factors(a)?.solve(b)
+}
+
+/// LU solution, refined until the residual, formed in doubled precision, is at rounding.
+pub(crate) fn refined(a: &DMatrix<f64>, b: &DVector<f64>) -> Option<DVector<f64>> {
+    let factors = factors(a)?;
     let mut x = factors.solve(b)?;
-    for _ in 0..2 {
+    for _ in 0..3 {
         let residual = DVector::from_fn(b.len(), |row, _| {
             let products = (0..b.len())
                 .filter(|&column| a[(row, column)] != 0.0)

@@ -66,7 +66,9 @@ pub(crate) fn turned_outcome(outcome: &Outcome, turn: Turn) -> Outcome {
     for vector in other.displacement.iter_mut().chain(&mut other.reaction) {
         let whole = std::array::from_fn(|axis| vector.get(axis).copied().unwrap_or(0.0));
         let turned = turn.of(whole);
-        vector.copy_from_slice(&turned[..vector.len()]);
+        for (entry, turned) in vector.iter_mut().zip(turned) {
+            *entry = turned;
+        }
     }
     for rotation in &mut other.rotation {
         *rotation = turn.of(*rotation);
