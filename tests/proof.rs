@@ -1,7 +1,17 @@
 //! The residuals bite: a finished result that is changed by one part in a million, or whose decided
 //! stop or joint is turned over, does not pass as proven.
 
+#[path = "proof/by_hand.rs"]
+mod by_hand;
 mod common;
+#[path = "proof/corruptions.rs"]
+mod corruptions;
+#[path = "proof/hand.rs"]
+mod hand;
+#[path = "proof/rounding.rs"]
+mod rounding;
+#[path = "proof/shared_points.rs"]
+mod shared_points;
 
 use common::chain::Random;
 use lengthwise::model::Model;

@@ -327,10 +327,9 @@ impl Look<'_> {
             .forces
             .iter()
             .any(|force| force.across.value != 0.0 && factors_of(force.case))
-            || actions
-                .lines
-                .iter()
-                .any(|line| line.across.value != 0.0 && factors_of(line.case));
+            || actions.lines.iter().any(|line| {
+                line.across.iter().any(|across| across.value != 0.0) && factors_of(line.case)
+            });
         if !heavy && !loaded {
             return None;
         }

@@ -23,7 +23,9 @@ pub struct PointForce {
     pub case: usize,
     pub station: usize,
     pub force: Force,
-    /// Its part across the axis, which this calculation does not carry.
+    /// Its part across the axis, + in the direction of down less its part along the axis. A member
+    /// between points hands it to its two ends; of a single member this calculation does not carry
+    /// it.
     pub across: Force,
 }
 
@@ -35,8 +37,10 @@ pub struct LineLoad {
     pub piece: usize,
     pub start: ForcePerLength,
     pub end: ForcePerLength,
-    /// Its greatest part across the axis, which this calculation does not carry.
-    pub across: ForcePerLength,
+    /// Its part across the axis at its start and its end, + in the direction of down less its part
+    /// along the axis. A member between points hands it to its two ends; of a single member this
+    /// calculation does not carry it.
+    pub across: [ForcePerLength; 2],
 }
 
 /// Self-weight of a layer (or of a part known by its stiffness, whose layer is 0) times a number.

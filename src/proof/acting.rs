@@ -11,7 +11,7 @@ use crate::quantity::{
 pub(super) struct Acting<'m> {
     model: &'m Model,
     pub(super) member: &'m Member,
-    combination: &'m Combination,
+    pub(super) combination: &'m Combination,
     /// Force at each station, and the sum of the sizes that it is made of.
     pub(super) forces: Vec<(Force, Force)>,
     /// Line load at the two ends of each piece, self-weight left out.
@@ -21,8 +21,6 @@ pub(super) struct Acting<'m> {
     layers: Vec<OnLayer>,
     first_layer: Vec<usize>,
     pub(super) movements: Vec<Length>,
-    /// Standard gravity along the axis, + toward the end.
-    gravity: f64,
 }
 
 #[derive(Clone, Copy, Default)]
@@ -63,7 +61,6 @@ impl<'m> Acting<'m> {
             layers: vec![OnLayer::default(); count],
             first_layer,
             movements: vec![Length::default(); member.supports.len()],
-            gravity: -member.rise() * STANDARD_GRAVITY,
         };
         let factor = |case: usize| combination.factors[case];
         for force in &member.actions.forces {
@@ -111,12 +108,17 @@ impl<'m> Acting<'m> {
     /// The line load at a fraction of a piece, self-weight included, + toward the end.
     pub(super) fn line(&self, piece: usize, s: f64) -> ForcePerLength {
         let (start, end) = self.lines[piece];
-        let mut line = start * (1.0 - s) + end * s;
+        start * (1.0 - s) + end * s - self.weight(piece, s) * self.member.rise()
+    }
+
+    /// The self-weight per length at a fraction of a piece, whichever way the member runs.
+    pub(super) fn weight(&self, piece: usize, s: f64) -> ForcePerLength {
         let index = self.member.pieces[piece].segment;
         let segment = &self.member.segments[index];
-        let along = self.gravity;
-        let mut add =
-            |per_length: f64, times: f64| line += from_si::<_, _>(per_length * along * times);
+        let mut weight = ForcePerLength::default();
+        let mut add = |per_length: f64, times: f64| {
+            weight += from_si::<_, _>(per_length * STANDARD_GRAVITY * times);
+        };
         match &segment.kind {
             SegmentKind::Solid { layers, .. } => {
                 for (which, layer) in layers.iter().enumerate() {
@@ -140,16 +142,29 @@ impl<'m> Acting<'m> {
             }
             SegmentKind::Gap(_) => {}
         }
-        line
+        weight
+    }
+
+    /// Whether the self-weight of a piece acts.
+    pub(super) fn has_weight(&self, piece: usize) -> bool {
+        let index = self.member.pieces[piece].segment;
+        let count = self.member.segments[index].layers().len().max(1);
+        (0..count).any(|layer| self.layer(index, layer).weight != 0.0)
+    }
+
+    /// Takes off everything that N would come from; free strains stay.
+    pub(super) fn unload(&mut self) {
+        self.forces.fill(Default::default());
+        self.lines.fill(Default::default());
+        for layer in &mut self.layers {
+            layer.weight = 0.0;
+        }
     }
 
     /// Whether any line load acts on a piece.
     pub(super) fn has_line(&self, piece: usize) -> bool {
         let none = ForcePerLength::default();
-        let index = self.member.pieces[piece].segment;
-        let count = self.member.segments[index].layers().len().max(1);
-        self.lines[piece] != (none, none)
-            || (0..count).any(|layer| self.layer(index, layer).weight != 0.0)
+        self.lines[piece] != (none, none) || self.has_weight(piece)
     }
 
     /// The fraction of the segment's length at a fraction of the piece.

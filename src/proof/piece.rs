@@ -3,7 +3,7 @@
 use super::acting::{Acting, Local};
 use super::quadrature::{tapered, uniform};
 use crate::model::SegmentKind;
-use crate::quantity::{Energy, Force, ForcePerLength, Length, Ratio};
+use crate::quantity::{Energy, Flexibility, Force, ForcePerLength, Length, Ratio};
 
 /// What a piece's strain adds up to, with the sizes of what was added.
 #[derive(Debug, Clone, Copy, Default)]
@@ -14,6 +14,8 @@ pub(super) struct Integrated {
     pub(super) load_size: Force,
     /// `∫ N/EA dx`.
     pub(super) force: Length,
+    /// `∫ dx/EA`.
+    pub(super) flexibility: Flexibility,
     /// `∫ |N|/EA dx`.
     pub(super) force_size: Length,
     /// `∫ αΔT dx`.
@@ -92,6 +94,12 @@ impl Piece {
         }
     }
 
+    /// All of the line load, + toward the end.
+    pub(super) fn load(&self) -> Force {
+        self.line
+            .map_or(Force::default(), |line| self.rest_of(&line, 0.0))
+    }
+
     /// The line load from a fraction of the piece to its end: Simpson's rule, exact for a quadratic.
     fn rest_of(&self, line: &[ForcePerLength; 3], s: f64) -> Force {
         let sum = quadratic(line, s) + quadratic(line, 0.5 * (1.0 + s)) * 4.0 + line[2];
@@ -158,6 +166,7 @@ impl Integrated {
     fn add(&mut self, force: Force, local: &Local, dx: Length, doubt: Force) -> Ratio {
         let (elastic, free): (Ratio, Ratio) =
             (force / local.rigidity, local.thermal + local.imposed);
+        self.flexibility += dx / local.rigidity;
         self.force += elastic * dx;
         self.force_size += (elastic.abs() + doubt / local.rigidity) * dx;
         self.thermal += local.thermal * dx;

@@ -1,5 +1,6 @@
 //! The largest of many relative leftovers.
 
+use crate::quantity::Energy;
 use uom::si::{Dimension, Quantity, SI};
 
 /// The largest leftover seen.
@@ -19,6 +20,37 @@ impl Residual {
 
     pub(super) fn largest(self) -> f64 {
         self.0
+    }
+}
+
+/// Works that must cancel, and the sum of their sizes.
+#[derive(Debug, Clone, Copy, Default)]
+pub(super) struct Work {
+    balance: Energy,
+    size: Energy,
+}
+
+impl Work {
+    /// Adds a work by its own size.
+    pub(super) fn take(&mut self, work: Energy) {
+        self.add(work, work.abs());
+    }
+
+    /// Adds a work that terms of this size add up to.
+    pub(super) fn add(&mut self, work: Energy, size: Energy) {
+        self.balance += work;
+        self.size += size;
+    }
+
+    /// Both together.
+    pub(super) fn and(mut self, other: Work) -> Work {
+        self.add(other.balance, other.size);
+        self
+    }
+
+    /// What is left over, relative to the sizes.
+    pub(super) fn left(&self) -> f64 {
+        self.balance.over(self.size)
     }
 }
 

@@ -1,6 +1,6 @@
 //! Supports and joints: each keeps its law, and what bears is told from what does not.
 
-use super::Proof;
+use super::member::Proof;
 use super::residual::Size;
 use crate::model::{SegmentKind, Side, SupportKind};
 use crate::quantity::{Force, Length};
@@ -27,6 +27,8 @@ impl Proof<'_> {
             self.equilibrium
                 .take(force.max(Force::default()).over(self.force_size(piece)));
         } else {
+            let overlap = left.min(Length::default());
+            self.compatibility.take(overlap.over(sizes));
             self.compatibility
                 .take((left - gap.width - stretch).over(left.abs() + sizes));
             self.equilibrium.take(force.over(self.force_size(piece)));
@@ -83,6 +85,8 @@ impl Proof<'_> {
                     }
                 } else {
                     self.equilibrium.take(reaction.over(forces));
+                    let overlap = gap.min(Length::default());
+                    self.compatibility.take(overlap.over(sizes));
                     self.compatibility
                         .take((gap - open).over(gap.abs() + sizes));
                 }

@@ -11,7 +11,7 @@ pub(super) struct PieceStiffness {
     /// EA = Σ E A over the layers.
     rigidity: Curve<Force>,
     /// `∫ dx / EA`: L/AE, for any taper; 0 for a piece that runs to a point, which no force reaches.
-    flexibility: Flexibility,
+    pub(super) flexibility: Flexibility,
 }
 
 impl PieceStiffness {

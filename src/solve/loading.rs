@@ -3,7 +3,7 @@
 
 use crate::model::{Combination, Member, Model, SegmentKind};
 use crate::quantity::{
-    Area, Curve, Force, ForcePerLength, Length, Ratio, STANDARD_GRAVITY, Stress,
+    Area, Curve, Force, ForcePerLength, Length, MassPerLength, Ratio, STANDARD_GRAVITY, Stress,
     TemperatureInterval, from_si,
 };
 use std::ops::Range;
@@ -84,6 +84,35 @@ impl Layers {
     pub(super) fn of_piece(&self, piece: usize) -> &[LayerLoading] {
         &self.all[self.of_piece[piece].clone()]
     }
+
+    /// Mass per length (given, or density times area) of a layer along a piece, times an
+    /// acceleration; `None` where it has no mass.
+    pub(super) fn weight(
+        &self,
+        model: &Model,
+        member: &Member,
+        piece: usize,
+        layer: usize,
+        acceleration: f64,
+    ) -> Option<Curve<ForcePerLength>> {
+        let per_length =
+            |mass: MassPerLength| -> ForcePerLength { from_si(mass.value * acceleration) };
+        match &member.segments[member.pieces[piece].segment].kind {
+            SegmentKind::Solid { layers, .. } => {
+                let made = &layers[layer];
+                match (made.mass, model.materials[made.material].density) {
+                    (Some(mass), _) => Some(Curve::constant(per_length(mass))),
+                    (None, Some(density)) => {
+                        let area = &self.of_piece(piece)[layer].area;
+                        Some(area.map(|area| per_length(density * area)))
+                    }
+                    (None, None) => None,
+                }
+            }
+            SegmentKind::Stiffness(part) => Some(Curve::constant(per_length(part.mass?))),
+            SegmentKind::Gap(_) => None,
+        }
+    }
 }
 
 impl LayerLoading {
@@ -147,7 +176,6 @@ impl Loading {
         loading
     }
 
-    /// ρ g A (or the mass per length times g) along the axis.
     fn add_weight(
         &mut self,
         model: &Model,
@@ -159,28 +187,9 @@ impl Loading {
         // On a member that rises, weight acts toward the start.
         let along = -member.rise() * STANDARD_GRAVITY * times;
         for piece in pieces_of(member, segment) {
-            let at = self.layers.of_piece[piece].start + layer;
-            let per_length = |mass: crate::quantity::MassPerLength| -> ForcePerLength {
-                from_si(mass.value * along)
-            };
-            let weight = match &member.segments[segment].kind {
-                SegmentKind::Solid { layers, .. } => {
-                    let layer = &layers[layer];
-                    match (layer.mass, model.materials[layer.material].density) {
-                        (Some(mass), _) => Curve::constant(per_length(mass)),
-                        (None, Some(density)) => self.layers.all[at]
-                            .area
-                            .map(|area| per_length(density * area)),
-                        (None, None) => continue,
-                    }
-                }
-                SegmentKind::Stiffness(part) => match part.mass {
-                    Some(mass) => Curve::constant(per_length(mass)),
-                    None => continue,
-                },
-                SegmentKind::Gap(_) => continue,
-            };
-            self.lines[piece] = self.lines[piece] + weight;
+            if let Some(weight) = self.layers.weight(model, member, piece, layer, along) {
+                self.lines[piece] = self.lines[piece] + weight;
+            }
         }
     }
 

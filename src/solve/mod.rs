@@ -5,19 +5,22 @@
 //! (`contact`), the chain is solved, and its segments are recovered (`recover`). No I/O, no
 //! global state, one thread: the same input gives the same bits.
 
+mod assembly;
 mod chain;
 mod contact;
 mod deformation;
+mod error;
 mod loading;
 mod placing;
 mod quotient;
 mod recover;
 mod restraint;
 mod roots;
-#[allow(dead_code)] // the assembly that puts itself into it comes next
 mod system;
 mod threshold;
 
+pub use assembly::{AssemblySolution, FreeMotion, Motion, Mover, Moving, PreparedAssembly, Way};
+pub use error::SolveError;
 pub use threshold::Threshold;
 
 use crate::model::{Combination, Member, Model, Name, SegmentKind, Side, SupportKind};
@@ -40,53 +43,6 @@ pub struct Solution {
     /// Supports, by index, that share a force in a way that nothing decides: rigid stops with one
     /// face. Their reactions are the split of least size.
     pub undecided: Vec<usize>,
-}
-
-/// Why a member cannot be solved in a combination.
-#[derive(Debug, Clone, PartialEq, thiserror::Error)]
-pub enum SolveError {
-    /// A free motion that a load pushes.
-    #[error(
-        "nothing holds member `{member}` {part}against {newtons} N toward its {toward}: it would slide away"
-    )]
-    Pushed {
-        /// The member.
-        member: Name,
-        /// `` or `from a to b `.
-        part: String,
-        /// The size of the force that nothing takes.
-        newtons: f64,
-        /// `start` or `end`.
-        toward: &'static str,
-    },
-    /// Rigid supports that are moved against each other with nothing between that gives.
-    #[error(
-        "the supports of member `{member}` from `{first}` to `{last}` contradict each other: nothing between them can give way to their movements"
-    )]
-    Contradiction {
-        /// The member.
-        member: Name,
-        /// The first station.
-        first: Name,
-        /// The last station.
-        last: Name,
-    },
-    /// A taper's point that would have to carry force.
-    #[error(
-        "segment `{segment}` of member `{member}` runs to a point that would have to carry force or stress"
-    )]
-    PointLoaded {
-        /// The member.
-        member: Name,
-        /// The segment.
-        segment: Name,
-    },
-    /// A number ran out of the range of double precision.
-    #[error("member `{member}` leads to numbers beyond the range of double precision")]
-    OutOfRange {
-        /// The member.
-        member: Name,
-    },
 }
 
 /// A member's stiffness: what does not change from one combination to the next while these have no

@@ -105,13 +105,12 @@ impl<'w, 't> Laying<'_, 'w, 't> {
                 };
                 let start = written.value.at(share(piece));
                 let end = written.value.at(share(piece + 1));
-                let greatest = if start.abs() > end.abs() { start } else { end };
                 self.actions.lines.push(LineLoad {
                     case,
                     piece,
                     start: start * slope.along,
                     end: end * slope.along,
-                    across: greatest * slope.across,
+                    across: [start * slope.across, end * slope.across],
                 });
             }
         }

@@ -7,6 +7,21 @@
 //! only while stretched beyond their rest. The answer is the state of least potential energy, found
 //! in finitely many steps, with free motions, undecided forces and contradictions told apart.
 
+mod choice;
+mod dense;
+mod held;
+mod lemke;
+mod prepared;
+mod rigid;
+mod singular;
+mod split;
+mod tableau;
+#[cfg(test)]
+mod tests;
+mod twofold;
+
+pub(super) use prepared::Prepared;
+
 use super::threshold::Threshold;
 use crate::quantity::{Force, ForcePerLength, Length};
 
@@ -93,8 +108,8 @@ pub(super) struct Answer {
 /// A motion that nothing resists in the state that was found.
 #[derive(Debug, Clone, PartialEq)]
 pub(super) struct FreeMotion {
-    /// Its share of every unknown; the largest is 1 in size.
-    pub(super) motion: Vec<f64>,
+    /// The unknowns that move in it and their shares; the largest is 1 in size.
+    pub(super) motion: Row,
     /// One-way parts that touch without force and so block it one way: the system is on the point
     /// of tipping.
     pub(super) touching: Vec<usize>,
@@ -105,8 +120,9 @@ pub(super) struct FreeMotion {
 pub(super) enum Failure {
     /// The loads do work on a motion that nothing resists.
     Pushed {
-        /// The motion, along which the loads push; the largest entry is 1 in size.
-        motion: Vec<f64>,
+        /// The motion, along which the loads push: the unknowns that move in it and their shares; the
+        /// largest is 1 in size.
+        motion: Row,
         /// The work of the loads over that motion's size.
         force: Force,
     },

@@ -1,0 +1,335 @@
+//! From a system and its loads to the answer.
+//!
+//! States that were found before, or the base itself, are tried first: the energy is convex, so that
+//! states whose signs all hold are the answer, whatever they were guessed from. Otherwise they are
+//! found along Lemke's path and checked in the same way.
+
+use super::choice::{amounts, tipping};
+use super::held::{Held, Part, Settled, stretch};
+use super::split::{Split, split};
+use super::tableau::{Found, Tableau, work};
+use super::{Answer, Failure, FreeMotion, Loads, Row, System};
+use crate::quantity::from_si;
+
+/// Sets of states whose factors are kept, beside the base.
+const KEPT: usize = 8;
+
+/// A system made ready for loads: what depends on it alone is done once.
+#[derive(Debug, Clone)]
+pub(in crate::solve) struct Prepared {
+    system: System,
+    /// The base first, then states that were met.
+    states: Vec<Held>,
+    /// The states that stood last.
+    last: usize,
+    /// The one to make room next.
+    oldest: usize,
+    tableau: Option<Tableau>,
+}
+
+/// States that stand, and all in them that is decided.
+#[derive(Debug)]
+pub(super) struct Standing {
+    pub(super) settled: Settled,
+    clearance: Vec<f64>,
+    /// Which of the kept states.
+    held: usize,
+}
+
+/// What a set of states comes to.
+enum Verdict {
+    Stands(Standing),
+    /// All signs hold, but these act without a force.
+    Touching(Standing, Vec<usize>),
+    /// A part that pushes, or that is stretched without acting; one whose state must change.
+    Falls(usize),
+    /// A motion is pushed that nothing resists in these states.
+    Pushed(Row),
+    Contradiction(Vec<Part>),
+}
+
+impl Prepared {
+    /// Factors the system in its base: all one-way parts act that are elastic, and of the rigid
+    /// ones those without which something could move.
+    pub(in crate::solve) fn of(system: System) -> Self {
+        let elastic = |one_way: &super::OneWay| one_way.stiffness.is_some();
+        let acts: Vec<bool> = system.one_way.iter().map(elastic).collect();
+        let mut base = Held::of(&system, acts);
+        let needed = base.needed(&system);
+        if !needed.is_empty() {
+            let mut acts = base.acts;
+            for part in needed {
+                acts[part] = true;
+            }
+            base = Held::of(&system, acts);
+        }
+        Prepared {
+            system,
+            states: vec![base],
+            last: 0,
+            oldest: 0,
+            tableau: None,
+        }
+    }
+
+    /// The state of least energy under `loads`.
+    ///
+    /// # Errors
+    ///
+    /// [`Failure::Pushed`] where the energy has no least, [`Failure::Contradiction`] where no
+    /// displacements keep what the rigid parts ask for.
+    pub(in crate::solve) fn solve(&mut self, loads: &Loads) -> Result<Answer, Failure> {
+        let standing = self.stand(loads)?;
+        Ok(self.answer(standing, loads))
+    }
+
+    /// The states that stand under `loads`.
+    pub(super) fn stand(&mut self, loads: &Loads) -> Result<Standing, Failure> {
+        let first = self.judge(self.last, loads);
+        let base = match first {
+            Verdict::Stands(standing) => return Ok(standing),
+            Verdict::Touching(standing, touching) => {
+                return Ok(self.let_go(standing, &touching, loads));
+            }
+            first if self.last == 0 => first,
+            _ => self.judge(0, loads),
+        };
+        match base {
+            Verdict::Stands(standing) => Ok(standing),
+            Verdict::Touching(standing, touching) => Ok(self.let_go(standing, &touching, loads)),
+            Verdict::Contradiction(parts) => Err(contradiction(&parts)),
+            // In the base even the one-way parts that hold a motion hold it both ways.
+            Verdict::Pushed(motion) => Err(pushed(motion, loads)),
+            Verdict::Falls(_) => self.search(loads),
+        }
+    }
+
+    /// Finds the states along the path, and mends what rounding may have left in them.
+    fn search(&mut self, loads: &Loads) -> Result<Standing, Failure> {
+        let base = &self.states[0];
+        let settled = base
+            .settle(&self.system, loads)
+            .map_err(|parts| contradiction(&parts))?;
+        let tableau = self
+            .tableau
+            .get_or_insert_with(|| Tableau::of(&self.system, base));
+        let mut acts = match tableau.states(&self.system, base, &settled, loads) {
+            Found::States(acts) => acts,
+            Found::Motion(motion) => return Err(pushed(motion, loads)),
+            Found::Contradiction(parts) => return Err(contradiction(&parts)),
+        };
+        let mut last = Failure::Contradiction {
+            rigid: Vec::new(),
+            one_way: Vec::new(),
+        };
+        for _ in 0..2 + 2 * acts.len() {
+            let held = self.keep(acts.clone());
+            match self.judge(held, loads) {
+                Verdict::Stands(standing) => return Ok(standing),
+                Verdict::Touching(standing, touching) => {
+                    return Ok(self.let_go(standing, &touching, loads));
+                }
+                Verdict::Falls(part) => acts[part] = !acts[part],
+                Verdict::Contradiction(parts) => {
+                    last = contradiction(&parts);
+                    break;
+                }
+                Verdict::Pushed(motion) => {
+                    let stops = self.first_to_stop(&acts, &motion);
+                    last = pushed(motion, loads);
+                    match stops {
+                        Some(part) => acts[part] = true,
+                        None => break,
+                    }
+                }
+            }
+        }
+        Err(last)
+    }
+
+    /// An open part that a motion stretches, the most stretched one.
+    fn first_to_stop(&self, acts: &[bool], motion: &[(usize, f64)]) -> Option<usize> {
+        let mut dense = vec![0.0; self.system.places.len()];
+        for &(unknown, share) in motion {
+            dense[unknown] = share;
+        }
+        let mut most = (None, 1e-9);
+        for (part, one_way) in self.system.one_way.iter().enumerate() {
+            let along: f64 = one_way.row.iter().map(|&(u, b)| b * dense[u]).sum();
+            if !acts[part] && along > most.1 {
+                most = (Some(part), along);
+            }
+        }
+        most.0
+    }
+
+    /// Takes parts that touch without force out of the acting ones.
+    fn let_go(&mut self, standing: Standing, touching: &[usize], loads: &Loads) -> Standing {
+        let mut acts = self.states[standing.held].acts.clone();
+        for &part in touching {
+            acts[part] = false;
+        }
+        let held = self.keep(acts);
+        match self.judge(held, loads) {
+            Verdict::Stands(released) => released,
+            // Below the threshold both are right; then the one that stands is taken.
+            _ => standing,
+        }
+    }
+
+    /// The place of a set of states among those kept; factored when it is new.
+    fn keep(&mut self, acts: Vec<bool>) -> usize {
+        if let Some(known) = self.states.iter().position(|held| held.acts == acts) {
+            return known;
+        }
+        let held = Held::of(&self.system, acts);
+        if self.states.len() <= KEPT {
+            self.states.push(held);
+            return self.states.len() - 1;
+        }
+        self.oldest = self.oldest % KEPT + 1;
+        self.states[self.oldest] = held;
+        self.oldest
+    }
+
+    fn judge(&mut self, index: usize, loads: &Loads) -> Verdict {
+        let held = &self.states[index];
+        let mut settled = match held.settle(&self.system, loads) {
+            Ok(settled) => settled,
+            Err(parts) => return Verdict::Contradiction(parts),
+        };
+        let zero = loads.zero.force.value;
+        if held
+            .motions
+            .iter()
+            .any(|motion| work(motion, loads).abs() > zero)
+        {
+            return Verdict::Pushed(held.pushed_motion(loads));
+        }
+        let mut touching = Vec::new();
+        let mut worst = (None, -zero);
+        for (part, &force) in settled
+            .one_way
+            .iter()
+            .enumerate()
+            .filter(|(part, _)| held.acts[*part])
+        {
+            if force < worst.1 {
+                worst = (Some(part), force);
+            }
+            if force <= zero {
+                touching.push(part);
+            }
+        }
+        if let (Some(part), _) = worst {
+            return Verdict::Falls(part);
+        }
+        if !held.motions.is_empty() {
+            match amounts(&self.system, held, &settled, loads) {
+                Ok(moved) => settled.displacements = moved,
+                Err(part) => return Verdict::Falls(part),
+            }
+        }
+        let mut worst = (None, -loads.zero.length.value);
+        let mut clearance = vec![0.0; self.system.one_way.len()];
+        for (part, one_way) in self
+            .system
+            .one_way
+            .iter()
+            .enumerate()
+            .filter(|(part, _)| !held.acts[*part])
+        {
+            let rest = loads.one_way_rest[part].value;
+            let open = -stretch(&one_way.row, &settled.displacements)
+                .plus(-rest)
+                .value();
+            if open < worst.1 {
+                worst = (Some(part), open);
+            }
+            clearance[part] = if open > loads.zero.length.value {
+                open
+            } else {
+                0.0
+            };
+        }
+        if let (Some(part), _) = worst {
+            return Verdict::Falls(part);
+        }
+        self.last = index;
+        let standing = Standing {
+            settled,
+            clearance,
+            held: index,
+        };
+        if touching.is_empty() {
+            Verdict::Stands(standing)
+        } else {
+            Verdict::Touching(standing, touching)
+        }
+    }
+
+    fn answer(&self, standing: Standing, loads: &Loads) -> Answer {
+        let held = &self.states[standing.held];
+        let mut settled = standing.settled;
+        let mut acts = held.acts.clone();
+        let Split {
+            undecided_rigid,
+            undecided_one_way,
+        } = split(
+            &self.system,
+            held,
+            &standing.clearance,
+            &mut settled,
+            &mut acts,
+            loads,
+        );
+        let free: Vec<FreeMotion> = if held.motions.is_empty() {
+            Vec::new()
+        } else {
+            tipping(&self.system, held, &standing.clearance)
+        };
+        let forces = |values: Vec<f64>| values.into_iter().map(from_si).collect();
+        Answer {
+            displacements: settled
+                .displacements
+                .iter()
+                .map(|u| from_si(u.value()))
+                .collect(),
+            elastic: forces(settled.elastic),
+            rigid: forces(settled.rigid),
+            one_way: settled
+                .one_way
+                .into_iter()
+                .zip(&acts)
+                .map(|(force, &acts)| from_si(if acts { force.max(0.0) } else { 0.0 }))
+                .collect(),
+            clearance: standing.clearance.into_iter().map(from_si).collect(),
+            acts,
+            free,
+            undecided_rigid,
+            undecided_one_way,
+            condition: held.condition,
+        }
+    }
+}
+
+fn pushed(motion: Row, loads: &Loads) -> Failure {
+    Failure::Pushed {
+        force: from_si(work(&motion, loads)),
+        motion,
+    }
+}
+
+fn contradiction(parts: &[Part]) -> Failure {
+    let (mut rigid, mut one_way) = (Vec::new(), Vec::new());
+    for &part in parts {
+        match part {
+            Part::Rigid(index) => rigid.push(index),
+            Part::OneWay(index) => one_way.push(index),
+            Part::Elastic(_) => {}
+        }
+    }
+    rigid.sort_unstable();
+    one_way.sort_unstable();
+    Failure::Contradiction { rigid, one_way }
+}
