@@ -334,7 +334,7 @@ fn beam_on_three(movement: &str, load: &str) -> String {
         point = "b"
         along = ["y"]
         [[hold]]
-        name = "end"
+        name = "far"
         point = "c"
         along = ["y"]
         [[load]]
@@ -352,7 +352,7 @@ fn beam_on_three(movement: &str, load: &str) -> String {
 #[test]
 fn three_rigid_holds_in_a_line_show_no_reaction_and_ask_for_a_spring() {
     let result = solved("three.toml", &beam_on_three("0 mm", ""));
-    for name in ["prop", "end"] {
+    for name in ["prop", "far"] {
         assert_eq!(hold(&result, name).reaction, None, "{name}");
     }
     let points = &only(&result).points;
@@ -379,12 +379,12 @@ fn three_rigid_holds_in_a_line_show_no_reaction_and_ask_for_a_spring() {
 /// they contradict.
 #[test]
 fn movements_of_rigid_holds_that_contradict_are_an_error() {
-    let end = "[[load]]\nhold = \"end\"\nmovement = [\"0 mm\", \"-6 mm\"]";
-    let result = solved("agree.toml", &beam_on_three("-2 mm", end));
+    let far = "[[load]]\nhold = \"far\"\nmovement = [\"0 mm\", \"-6 mm\"]";
+    let result = solved("agree.toml", &beam_on_three("-2 mm", far));
     let turned = only(&result).bodies[0].rotation.spatial()[2].value;
     assert_abs_diff_eq!(turned, -1e-3, epsilon = 1e-14);
 
-    let result = checked("contradict.toml", &beam_on_three("-1 mm", end));
+    let result = checked("contradict.toml", &beam_on_three("-1 mm", far));
     assert_eq!(result.status, JobStatus::Error);
     assert!(result.combinations.is_empty());
     let errors = result.errors.iter().map(|e| e.message.clone());

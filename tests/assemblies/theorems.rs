@@ -120,10 +120,14 @@ impl Pull {
 /// the two exchanged.
 #[test]
 fn movements_are_reciprocal() {
+    let mut compared = 0;
     for (made, mut random) in assemblies(1) {
         let assembly = bare(made);
         let pulls = [0; 2].map(|_| Pull::random(&mut random, &assembly));
-        let [a, b] = pulls.map(|p| Outcome::try_of(&p.on(&assembly)).expect("it is held"));
+        // Some hang on what acts one way alone.
+        let [Some(a), Some(b)] = pulls.map(|p| Outcome::try_of(&p.on(&assembly))) else {
+            continue;
+        };
         let (one, other) = (pulls[1].work(&a), pulls[0].work(&b));
         let scale = pulls[0]
             .work(&a)
@@ -135,13 +139,16 @@ fn movements_are_reciprocal() {
             "{one:e} and {other:e} of {scale:e}\n{}",
             pulls[0].on(&assembly).job()
         );
+        compared += 1;
     }
+    assert!(compared >= 130, "{compared}");
 }
 
 /// Clapeyron: the loads do twice the work that members and springs store.
 #[test]
 fn the_work_of_loads_is_twice_the_energy_stored() {
     use super::assembly::HoldKind;
+    let mut compared = 0;
     for (made, mut random) in assemblies(2) {
         let assembly = bare(made);
         let pulls = [0; 3].map(|_| Pull::random(&mut random, &assembly));
@@ -158,7 +165,9 @@ fn the_work_of_loads_is_twice_the_energy_stored() {
             loaded = pull.on(&loaded);
             acting.push(pull);
         }
-        let found = Outcome::try_of(&loaded).expect("it is held");
+        let Some(found) = Outcome::try_of(&loaded) else {
+            continue;
+        };
         let work: f64 = acting.iter().map(|p| p.work(&found)).sum();
         let system = System::of(&loaded);
         let members = system.bars.iter().zip(&found.force).map(|(bar, force)| {
@@ -178,7 +187,9 @@ fn the_work_of_loads_is_twice_the_energy_stored() {
             "{work:e} and {stored:e}\n{}",
             loaded.job()
         );
+        compared += 1;
     }
+    assert!(compared >= 130, "{compared}");
 }
 
 /// No neighbouring position has less potential energy than the one found, states included.
