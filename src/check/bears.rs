@@ -2,28 +2,20 @@
 
 use super::{Case, Finding};
 use crate::model::Target;
-use crate::result::{Unit, Verdict};
 
 pub(super) fn judge(case: &Case) -> Option<Finding> {
     let (bears, at) = match case.limit.target {
-        Target::Support { member, support } => {
-            let model = &case.model.members[member];
-            let at = model.stations[model.supports[support].station].x;
-            (case.member.supports[support].bears?, at)
+        Target::Support { member, .. } => {
+            let (support, result) = case.support()?;
+            let at = case.model.members[member].stations[support.station].x;
+            (result.bears?, Some(at))
         }
         Target::Segment { segment, .. } => {
-            let joint = &case.member.segments[segment];
-            (joint.bears?, joint.from)
+            let joint = &case.member()?.0.segments[segment];
+            (joint.bears?, Some(joint.from))
         }
+        Target::Hold { .. } => (case.hold()?.1.bears?, None),
         _ => return None,
     };
-    Some(Finding {
-        at: Some(at.value),
-        demand: f64::from(u8::from(bears)),
-        limit: 1.0,
-        unit: Unit::None,
-        utilisation: None,
-        status: if bears { Verdict::Pass } else { Verdict::Fail },
-        details: serde_json::Map::new(),
-    })
+    Some(Finding::yes_or_no(bears, at.map(|at| at.value)))
 }

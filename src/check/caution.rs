@@ -1,11 +1,12 @@
 //! What a report warns of, each where its condition holds.
 
+use super::{Observed, bending, doubtful, large};
 use crate::catalogue::{Section, Shape};
-use crate::model::{Layer, Limit, LimitKind, Member, Model, Place, Remark, ShareFactor};
+use crate::model::{Layer, Member, Model, Place, Remark};
 use crate::quantity::{Dimension, Force, Length, Stress, Style};
-use crate::result::{CombinationResult, MemberResult};
+use crate::result::MemberResult;
 use crate::solve::Threshold;
-use std::collections::{BTreeMap, BTreeSet, HashSet};
+use std::collections::BTreeMap;
 
 /// Slenderness L/r above which a member in compression is called slender (AISC 360-22, user note
 /// to E2).
@@ -15,22 +16,11 @@ const SLENDER_IN_COMPRESSION: f64 = 200.0;
 /// hangers out).
 const SLENDER_IN_TENSION: f64 = 300.0;
 
-/// A share of a strength below this holds a safety factor of allowable-stress design (0.6 yield,
-/// 0.5 ultimate); resistance and partial factors lie above (0.75 is a resistance factor, 1/1.1 a
-/// partial factor) and go with factored loads. Common practice.
-const HOLDS_A_SAFETY_FACTOR: f64 = 0.7;
-
-/// A movement of this share of the member's length is no small displacement any more.
-const LARGE_MOVEMENT: f64 = 1.0 / 50.0;
-
-/// A solved combination with what counts as zero in each of its members.
-pub struct Observed<'a> {
-    /// Its index in the model.
-    pub index: usize,
-    /// Its results.
-    pub result: &'a CombinationResult,
-    /// One threshold a member.
-    pub zeros: &'a [Threshold],
+/// The result of a member in one combination.
+pub(super) struct Solved<'a> {
+    pub(super) member: &'a MemberResult,
+    pub(super) combination: &'a str,
+    zero: Threshold,
 }
 
 /// A temperature that is off a material's range.
@@ -60,31 +50,27 @@ pub fn cautions(model: &Model, observed: &[Observed]) -> Vec<Remark> {
         remarks.extend(look.compression());
         remarks.extend(look.slenderness());
         remarks.extend(look.yielding());
-        remarks.extend(look.movement());
+        remarks.extend(large::member(&look));
         remarks.extend(look.temperature());
-        remarks.extend(look.across());
+        remarks.extend(bending::member(&look));
     }
-    // One literal may limit many segments: it is said once.
-    let mut said = HashSet::new();
-    for limit in &model.limits {
-        if said.insert(limit.place.start) {
-            remarks.extend(factored_share(model, limit));
-            remarks.extend(counted_from_itself(model, limit));
-        }
-    }
+    remarks.extend(large::assembly(model, observed, style));
+    remarks.extend(bending::bodies(model, observed));
+    remarks.extend(doubtful::limits(model));
     remarks
 }
 
-struct Look<'a> {
-    model: &'a Model,
-    member: &'a Member,
+/// A member of the model in all combinations that have it.
+pub(super) struct Look<'a> {
+    pub(super) model: &'a Model,
+    pub(super) member: &'a Member,
     index: usize,
     observed: &'a [Observed<'a>],
-    style: Style,
+    pub(super) style: Style,
 }
 
-impl Look<'_> {
-    fn caution(&self, text: String, place: Option<Place>) -> Option<Remark> {
+impl<'a> Look<'a> {
+    pub(super) fn caution(&self, text: String, place: Option<Place>) -> Option<Remark> {
         let place = place.or_else(|| Some(self.member.place.clone()));
         Some(Remark {
             about: format!("member.{}", self.member.name),
@@ -94,35 +80,46 @@ impl Look<'_> {
         })
     }
 
-    fn results(&self) -> impl Iterator<Item = (&MemberResult, &str, Threshold)> {
-        let index = self.index;
-        self.observed.iter().map(move |seen| {
-            (
-                &seen.result.members[index],
-                seen.result.name.as_ref(),
-                seen.zeros[index],
-            )
-        })
+    /// The combinations that do not take it out.
+    pub(super) fn combinations(&self) -> impl Iterator<Item = (&'a Observed<'a>, Solved<'a>)> {
+        let (model, index) = (self.model, self.index);
+        let solved = move |seen: &'a Observed<'a>| {
+            let (member, zero) = seen.member(model, index)?;
+            let solved = Solved {
+                member,
+                combination: seen.result.name.as_ref(),
+                zero,
+            };
+            Some((seen, solved))
+        };
+        self.observed.iter().filter_map(solved)
+    }
+
+    fn results(&self) -> impl Iterator<Item = Solved<'a>> {
+        self.combinations().map(|(_, solved)| solved)
     }
 
     /// The worst by `of` over all combinations, with the name of the combination.
-    fn worst<T: PartialOrd + Copy>(
+    pub(super) fn worst<T: PartialOrd + Copy>(
         &self,
-        of: impl Fn(&MemberResult, Threshold) -> Option<T>,
-    ) -> Option<(T, &str)> {
+        of: impl Fn(&Observed, &Solved) -> Option<T>,
+    ) -> Option<(T, &'a str)> {
         let mut worst: Option<(T, &str)> = None;
-        for (result, name, zero) in self.results() {
-            if let Some(value) = of(result, zero)
+        for (seen, solved) in self.combinations() {
+            if let Some(value) = of(seen, &solved)
                 && worst.is_none_or(|(known, _)| value > known)
             {
-                worst = Some((value, name));
+                worst = Some((value, solved.combination));
             }
         }
         worst
     }
 
     fn greatest_compression(&self) -> Option<(Force, &str)> {
-        self.worst(|result, zero| (-result.force_min > zero.force).then_some(-result.force_min))
+        self.worst(|_, solved| {
+            let pushed = -solved.member.force_min;
+            (pushed > solved.zero.force).then_some(pushed)
+        })
     }
 
     fn compression(&self) -> Option<Remark> {
@@ -195,8 +192,9 @@ impl Look<'_> {
                 let Some(limit) = material.yield_at(layer.section.thickness()) else {
                     continue;
                 };
-                for (result, name, _) in self.results() {
-                    let result = &result.segments[which];
+                for solved in self.results() {
+                    let name = solved.combination;
+                    let result = &solved.member.segments[which];
                     let (most, least) = match result.layers.get(layer_index) {
                         Some(layer) => (layer.stress_max, layer.stress_min),
                         None => (result.stress_max, result.stress_min),
@@ -225,25 +223,6 @@ impl Look<'_> {
         )
     }
 
-    fn movement(&self) -> Option<Remark> {
-        let large = self.member.length() * LARGE_MOVEMENT;
-        let (moved, combination) = self.worst(|result, _| {
-            let stations = result
-                .stations
-                .iter()
-                .map(|station| station.displacement.abs());
-            stations
-                .chain([result.elongation.abs()])
-                .reduce(Length::max)
-                .filter(|&moved| moved > large)
-        })?;
-        let moved = self.style.quantity(Dimension::Length, moved.value);
-        self.caution(
-            format!("movement of {moved} in `{combination}` is over 1/50 of the length: the computation is for small displacements"),
-            None,
-        )
-    }
-
     /// Temperatures outside the range for which a material's values hold: of each material the
     /// worst, with its place.
     fn temperature(&self) -> Vec<Remark> {
@@ -251,7 +230,7 @@ impl Look<'_> {
         let Some(datum) = self.member.datum else {
             return Vec::new();
         };
-        for seen in self.observed {
+        for (seen, _) in self.combinations() {
             let factors = &self.model.combinations[seen.index].factors;
             for (which, segment) in self.member.segments.iter().enumerate() {
                 for (layer_index, layer) in segment.layers().iter().enumerate() {
@@ -307,112 +286,4 @@ impl Look<'_> {
         );
         self.caution(text, Some(segment.layers()[outside.layer].place.clone()))
     }
-
-    /// Loads across a sloping or level member, which the axial computation leaves out.
-    fn across(&self) -> Option<Remark> {
-        let level = self.member.runs?.value.cos().abs();
-        let actions = &self.member.actions;
-        let factors_of = |case: usize| {
-            self.observed
-                .iter()
-                .any(|seen| self.model.combinations[seen.index].factors[case] != 0.0)
-        };
-        // The cosine of a right angle is not quite 0 in double precision.
-        let heavy = level > 1e-12
-            && actions
-                .weights
-                .iter()
-                .any(|weight| weight.number != 0.0 && factors_of(weight.case));
-        let loaded = actions
-            .forces
-            .iter()
-            .any(|force| force.across.value != 0.0 && factors_of(force.case))
-            || actions.lines.iter().any(|line| {
-                line.across.iter().any(|across| across.value != 0.0) && factors_of(line.case)
-            });
-        if !heavy && !loaded {
-            return None;
-        }
-        self.caution(
-            "weight acts across this member as well as along it: the part across, and the bending that it makes, is not carried by this computation".into(),
-            None,
-        )
-    }
-}
-
-/// A share of a strength that already holds a safety factor, read with factored loads.
-fn factored_share(model: &Model, limit: &Limit) -> Option<Remark> {
-    let (LimitKind::Tension { share, .. } | LimitKind::Compression { share, .. }) = limit.kind
-    else {
-        return None;
-    };
-    let ShareFactor(share) = share?;
-    if share >= HOLDS_A_SAFETY_FACTOR {
-        return None;
-    }
-    let member = &model.members[limit.target.member()?];
-    let acting = cases_on(member);
-    let factored = |factors: &[f64]| acting.iter().any(|&case| factors[case].abs() > 1.0);
-    let (_, combination) = model
-        .combinations
-        .iter()
-        .enumerate()
-        .find(|(index, combination)| {
-            super::reads(limit, *index, combination) && factored(&combination.factors)
-        })?;
-    Some(Remark {
-        about: format!("member.{}", member.name),
-        text: format!(
-            "the limit on {} is {share:.3} of a strength and so may hold a safety factor already, and `{}` has factored loads: safety may be counted twice",
-            super::word(&limit.kind),
-            combination.name,
-        ),
-        place: Some(limit.place.clone()),
-        caution: true,
-    })
-}
-
-/// The cases that put anything on a member.
-fn cases_on(member: &Member) -> BTreeSet<usize> {
-    let actions = &member.actions;
-    let forces = actions.forces.iter().map(|action| action.case);
-    let lines = actions.lines.iter().map(|action| action.case);
-    let weights = actions.weights.iter().map(|action| action.case);
-    let temperatures = actions.temperatures.iter().map(|action| action.case);
-    let strains = actions.strains.iter().map(|action| action.case);
-    let movements = actions.movements.iter().map(|action| action.case);
-    forces
-        .chain(lines)
-        .chain(weights)
-        .chain(temperatures)
-        .chain(strains)
-        .chain(movements)
-        .collect()
-}
-
-/// A movement that no combination reads but the one that it is counted from.
-fn counted_from_itself(model: &Model, limit: &Limit) -> Option<Remark> {
-    let since = limit.since?;
-    let mut reading = model
-        .combinations
-        .iter()
-        .enumerate()
-        .filter(|(index, combination)| super::reads(limit, *index, combination));
-    if reading.any(|(index, _)| index != since) {
-        return None;
-    }
-    let about = match limit.target.member() {
-        Some(member) => format!("member.{}", model.members[member].name),
-        None => limit.on.to_string(),
-    };
-    Some(Remark {
-        about,
-        text: format!(
-            "no combination reads this limit on {} but `{}`, from which it is counted: nothing is checked by it",
-            super::word(&limit.kind),
-            model.combinations[since].name,
-        ),
-        place: Some(limit.place.clone()),
-        caution: true,
-    })
 }

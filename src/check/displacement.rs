@@ -1,6 +1,6 @@
 //! Displacement of a station.
 
-use super::{Case, Finding, moved};
+use super::{Case, Finding};
 use crate::model::{Bounds, Target};
 use crate::quantity::Length;
 use crate::result::Unit;
@@ -9,16 +9,14 @@ pub(super) fn judge(case: &Case, limit: &Bounds<Length>) -> Option<Finding> {
     let Target::Station { station, .. } = case.limit.target else {
         return None;
     };
-    let before = case
-        .since
-        .map(|member| member.stations[station].displacement);
-    let here = &case.member.stations[station];
-    let demand = moved(here.displacement, before);
+    let (member, zero) = case.member()?;
+    let demand = case.moved(|member| Some(member.stations[station].displacement))?;
+    let at = member.stations[station].x.value;
     Some(Finding::signed(
         demand,
-        Some(here.x.value),
+        Some(at),
         limit,
-        case.zero.length,
+        zero.length,
         Unit::Metre,
     ))
 }

@@ -6,19 +6,20 @@ use crate::quantity::Force;
 use crate::result::Unit;
 
 pub(super) fn judge(case: &Case, limit: &Bounds<Force>) -> Option<Finding> {
+    let (member, zero) = case.member()?;
     let ((most, most_at), (least, least_at)) = match case.limit.target {
-        Target::Member { .. } => {
-            let m = case.member;
-            ((m.force_max, m.force_max_at), (m.force_min, m.force_min_at))
-        }
+        Target::Member { .. } => (
+            (member.force_max, member.force_max_at),
+            (member.force_min, member.force_min_at),
+        ),
         Target::Segment { segment, .. } => {
-            let s = &case.member.segments[segment];
+            let s = &member.segments[segment];
             ((s.force_max, s.force_max_at), (s.force_min, s.force_min_at))
         }
         _ => return None,
     };
     let side = |force, at: crate::quantity::Length| {
-        Finding::signed(force, Some(at.value), limit, case.zero.force, Unit::Newton)
+        Finding::signed(force, Some(at.value), limit, zero.force, Unit::Newton)
     };
     // The larger size first: of two with equal utilisation that is the one to show.
     let (first, second) = if least.abs() > most.abs() {

@@ -1,31 +1,35 @@
 //! What must stay open at a stop or a joint, and not more.
 
 use super::{Case, Finding, ROUNDING};
-use crate::model::{SegmentKind, SupportKind, Target};
+use crate::model::{SegmentKind, Target};
 use crate::quantity::Length;
 use crate::result::{Unit, Verdict};
 
 pub(super) fn judge(case: &Case, min: Option<Length>, max: Option<Length>) -> Option<Finding> {
-    let (gap, drawn, at) = match case.limit.target {
-        Target::Support { member, support } => {
-            let model = &case.model.members[member];
-            let SupportKind::Stop { clearance, .. } = model.supports[support].kind else {
-                return None;
-            };
-            let at = model.stations[model.supports[support].station].x;
-            (case.member.supports[support].gap?, clearance, at)
+    let (gap, drawn, at, zero) = match case.limit.target {
+        Target::Support { member, .. } => {
+            let (support, result) = case.support()?;
+            let (_, zero) = case.member()?;
+            let at = case.model.members[member].stations[support.station].x;
+            (result.gap?, case.clearance()?, Some(at), zero)
+        }
+        Target::Hold { .. } => {
+            let (_, result) = case.hold()?;
+            (result.gap?, case.clearance()?, None, case.now.assembly)
         }
         Target::Segment { member, segment } => {
             let model = &case.model.members[member].segments[segment];
             let SegmentKind::Gap(gap) = model.kind else {
                 return None;
             };
-            (case.member.segments[segment].gap?, gap.width, model.from)
+            let (member, zero) = case.member()?;
+            let remains = member.segments[segment].gap?;
+            (remains, gap.width, Some(model.from), zero)
         }
         _ => return None,
     };
     let finding = |limit: Length, utilisation, holds| Finding {
-        at: Some(at.value),
+        at: at.map(|at| at.value),
         demand: gap.value,
         limit: limit.value,
         unit: Unit::Metre,
@@ -33,7 +37,7 @@ pub(super) fn judge(case: &Case, min: Option<Length>, max: Option<Length>) -> Op
         status: if holds { Verdict::Pass } else { Verdict::Fail },
         details: details(drawn, min, max),
     };
-    let zero = case.zero.length;
+    let zero = zero.length;
     let least = min.map(|min| {
         // Used over available: what has closed of what may close.
         let (used, available) = (drawn - gap, drawn - min);

@@ -4,23 +4,34 @@
 //! over limit by size. A new kind is one new file and one line in `judge`.
 
 mod bears;
+mod bending;
 mod caution;
 mod displacement;
+mod doubtful;
 mod elongation;
 mod envelope;
 mod force;
 mod gap;
 mod governing;
+mod large;
 mod reaction;
+mod reading;
+mod slack;
 mod stress;
+mod warning;
+mod watch;
 
-pub use caution::{Observed, cautions};
+pub use caution::cautions;
 pub use envelope::envelope;
 pub use governing::governing;
+pub use reading::watches;
+pub use warning::warnings;
 
-use crate::model::{Bounds, Combination, Limit, LimitKind, Model, Name, Reads};
-use crate::quantity::{Dimension, from_si};
-use crate::result::{CheckResult, CombinationResult, MemberResult, Unit, Verdict};
+use crate::model::{Bounds, Combination, Hold, HoldKind, Limit, LimitKind, Model, Name};
+use crate::model::{Reads, Support, SupportKind, Target};
+use crate::quantity::{Dimension, Length, from_si};
+use crate::result::{CheckResult, CombinationResult, HoldResult, MemberResult, SupportResult};
+use crate::result::{Unit, Verdict};
 use crate::solve::Threshold;
 use std::sync::LazyLock;
 use uom::si::{Quantity, SI};
@@ -29,14 +40,96 @@ use uom::si::{Quantity, SI};
 /// never more than a reader can see.
 const ROUNDING: f64 = 1e-12;
 
+/// A solved combination with what counts as zero in it.
+#[derive(Debug, Clone, Copy)]
+pub struct Observed<'a> {
+    /// Its index in the model.
+    pub index: usize,
+    /// Its results.
+    pub result: &'a CombinationResult,
+    /// One threshold for each of its members.
+    pub zeros: &'a [Threshold],
+    /// The threshold of its points, bodies and holds; of no matter in a job without points.
+    pub assembly: Threshold,
+}
+
+impl<'a> Observed<'a> {
+    /// The result of a member of the model with its threshold; none where it is taken out.
+    pub(crate) fn member(
+        &self,
+        model: &Model,
+        member: usize,
+    ) -> Option<(&'a MemberResult, Threshold)> {
+        let position = model.combinations[self.index].position(member)?;
+        Some((&self.result.members[position], self.zeros[position]))
+    }
+}
+
 /// One limit in one combination, with all that a check may look at.
 pub(crate) struct Case<'a> {
     model: &'a Model,
     limit: &'a Limit,
-    member: &'a MemberResult,
-    zero: Threshold,
-    /// The same member in the combination that the limit counts from.
-    since: Option<&'a MemberResult>,
+    /// The combination that is checked.
+    now: Observed<'a>,
+    /// The combination that the limit counts from.
+    since: Option<Observed<'a>>,
+    /// The row of the first point of each hold.
+    hold_rows: &'a [usize],
+}
+
+impl<'a> Case<'a> {
+    /// The member that the limit stands on, with what counts as zero in it.
+    fn member(&self) -> Option<(&'a MemberResult, Threshold)> {
+        self.now.member(self.model, self.limit.target.member()?)
+    }
+
+    /// What `of` finds in the member now, less what it found in the combination that the limit
+    /// counts from; nothing where either lacks it.
+    fn moved(&self, of: impl Fn(&MemberResult) -> Option<Length>) -> Option<Length> {
+        let member = self.limit.target.member()?;
+        let read = |seen: &Observed| of(seen.member(self.model, member)?.0);
+        let now = read(&self.now)?;
+        match &self.since {
+            None => Some(now),
+            Some(since) => Some(now - read(since)?),
+        }
+    }
+
+    /// The support that the limit stands on.
+    fn support(&self) -> Option<(&'a Support, &'a SupportResult)> {
+        let Target::Support { member, support } = self.limit.target else {
+            return None;
+        };
+        let (result, _) = self.member()?;
+        Some((
+            &self.model.members[member].supports[support],
+            &result.supports[support],
+        ))
+    }
+
+    /// The hold that the limit stands on, at the one of its points that it means.
+    fn hold(&self) -> Option<(&'a Hold, &'a HoldResult)> {
+        let Target::Hold { hold, point } = self.limit.target else {
+            return None;
+        };
+        let row = self.hold_rows.get(hold)? + point;
+        let hold = &self.model.assembly.as_ref()?.holds[hold];
+        Some((hold, self.now.result.holds.get(row)?))
+    }
+
+    /// The clearance of the limit's stop as drawn.
+    fn clearance(&self) -> Option<Length> {
+        if let Some((hold, _)) = self.hold() {
+            return match hold.kind {
+                HoldKind::Stop { clearance, .. } => Some(clearance),
+                _ => None,
+            };
+        }
+        match self.support()?.0.kind {
+            SupportKind::Stop { clearance, .. } => Some(clearance),
+            _ => None,
+        }
+    }
 }
 
 /// What a check found; the rest of its row comes from the limit.
@@ -58,53 +151,59 @@ pub fn reads(limit: &Limit, index: usize, combination: &Combination) -> bool {
     }
 }
 
-/// Every check that reads the combination with this index.
+/// Every check that reads the combination at the place `at` of `observed`.
 ///
-/// `zeros` are the thresholds of its members, `since` tells where in `all` the results of a
-/// combination of the model stand, and `lines` are the lines of the model's limits in the job file.
-/// A limit that counts from a combination without a result is passed over, since the job is an
-/// error then in any case.
+/// `observed` are all solved combinations in the order of the model, and `lines` are the lines of
+/// the model's limits in the job file. A limit on a member that the combination takes out does not
+/// read it. One that counts from a combination without a result is passed over, since the job is
+/// an error then in any case.
 pub fn combination(
     model: &Model,
-    index: usize,
-    result: &CombinationResult,
-    zeros: &[Threshold],
-    since: &dyn Fn(usize) -> Option<usize>,
-    all: &[CombinationResult],
+    observed: &[Observed],
+    at: usize,
     lines: &[usize],
 ) -> Vec<CheckResult> {
+    let now = observed[at];
+    let hold_rows = hold_rows(model);
     let mut checks = Vec::new();
     for (limit, &line) in model.limits.iter().zip(lines) {
         // A movement counted from this very combination is nothing to check.
-        if limit.since == Some(index) || !reads(limit, index, &model.combinations[index]) {
+        if limit.since == Some(now.index)
+            || !reads(limit, now.index, &model.combinations[now.index])
+        {
             continue;
         }
-        let Some(member) = limit
-            .target
-            .member()
-            .and_then(|member| model.combinations[index].position(member))
-        else {
-            continue;
-        };
-        let reference = match limit.since {
+        let since = match limit.since {
             None => None,
-            Some(from) => match since(from) {
-                Some(position) => Some(&all[position].members[member]),
-                None => continue,
+            Some(from) => match observed.binary_search_by_key(&from, |seen| seen.index) {
+                Ok(position) => Some(observed[position]),
+                Err(_) => continue,
             },
         };
         let case = Case {
             model,
             limit,
-            member: &result.members[member],
-            zero: zeros[member],
-            since: reference,
+            now,
+            since,
+            hold_rows: &hold_rows,
         };
         if let Some(finding) = judge(&case) {
             checks.push(finding.row(limit, line));
         }
     }
     checks
+}
+
+/// Where the rows of each hold begin among the results: one row for each of its points.
+fn hold_rows(model: &Model) -> Vec<usize> {
+    let holds = model.assembly.iter().flat_map(|assembly| &assembly.holds);
+    let mut next = 0;
+    let row = |hold: &Hold| {
+        let first = next;
+        next += hold.points.len();
+        first
+    };
+    holds.map(row).collect()
 }
 
 fn judge(case: &Case) -> Option<Finding> {
@@ -116,7 +215,9 @@ fn judge(case: &Case) -> Option<Finding> {
         LimitKind::Reaction(limit) => reaction::judge(case, &limit),
         LimitKind::Gap { min, max } => gap::judge(case, min, max),
         LimitKind::Bears => bears::judge(case),
-        LimitKind::Slack | LimitKind::Watch(_) | LimitKind::Rotation(_) => None,
+        LimitKind::Slack => slack::judge(case),
+        LimitKind::Watch(limit) => watch::judge(case, &limit, Unit::Metre),
+        LimitKind::Rotation(limit) => watch::judge(case, &limit, Unit::Radian),
     }
 }
 
@@ -204,6 +305,19 @@ impl Finding {
         }
     }
 
+    /// An answer to a question that must be answered with yes.
+    fn yes_or_no(answer: bool, at: Option<f64>) -> Self {
+        Finding {
+            at,
+            demand: f64::from(u8::from(answer)),
+            limit: 1.0,
+            unit: Unit::None,
+            utilisation: None,
+            status: if answer { Verdict::Pass } else { Verdict::Fail },
+            details: serde_json::Map::new(),
+        }
+    }
+
     /// The one of two that is worse: a failure before a pass, then the larger utilisation.
     fn worse(self, other: Self) -> Self {
         if rank(other.status, other.utilisation) > rank(self.status, self.utilisation) {
@@ -243,14 +357,6 @@ fn utilisation(demand: f64, limit: f64, counts: bool) -> (Option<f64>, Verdict) 
             Verdict::Fail
         },
     )
-}
-
-/// The movement in this combination, less that in the one that the limit counts from.
-fn moved(
-    now: crate::quantity::Length,
-    since: Option<crate::quantity::Length>,
-) -> crate::quantity::Length {
-    now - since.unwrap_or_else(|| from_si(0.0))
 }
 
 impl Unit {

@@ -18,7 +18,8 @@ pub(super) fn judge(case: &Case) -> Option<Finding> {
     let demand = if pulls { stress } else { -stress };
     let demand = demand.max(Stress::default());
     // What counts as no force is no stress on any area of the layer.
-    let counts = demand * reference_area(case)? > case.zero.force;
+    let (_, zero) = case.member()?;
+    let counts = demand * reference_area(case)? > zero.force;
     let demand = if counts { demand } else { Stress::default() };
     let (utilisation, status) = utilisation(demand.value, limit.value, counts);
     Some(Finding {
@@ -34,9 +35,10 @@ pub(super) fn judge(case: &Case) -> Option<Finding> {
 
 /// The largest stress of the limit's layer with its sign, on the area that the limit says.
 fn extreme(case: &Case, area: AreaUsed, pulls: bool) -> Option<(Stress, Length)> {
+    let (member, _) = case.member()?;
     let (most, least): (Place, Place) = match case.limit.target {
         Target::Segment { segment, .. } => {
-            let s = &case.member.segments[segment];
+            let s = &member.segments[segment];
             match area {
                 AreaUsed::Net => (
                     (s.stress_max, s.stress_max_at),
@@ -49,7 +51,7 @@ fn extreme(case: &Case, area: AreaUsed, pulls: bool) -> Option<(Stress, Length)>
             }
         }
         Target::Layer { segment, layer, .. } => {
-            let l = &case.member.segments[segment].layers[layer];
+            let l = &member.segments[segment].layers[layer];
             match area {
                 AreaUsed::Net => (
                     (l.stress_max, l.stress_max_at),

@@ -4,7 +4,8 @@
 //! that something does not exist. The guard walks over what would be written and writes nothing.
 
 use serde::ser::{
-    self, Impossible, Serialize, SerializeMap, SerializeSeq, SerializeStruct, Serializer,
+    self, Impossible, Serialize, SerializeMap, SerializeSeq, SerializeStruct, SerializeTuple,
+    Serializer,
 };
 use std::fmt::Display;
 
@@ -48,7 +49,7 @@ impl Serializer for &mut Guard {
     type Ok = ();
     type Error = NotFinite;
     type SerializeSeq = Self;
-    type SerializeTuple = Impossible<(), NotFinite>;
+    type SerializeTuple = Self;
     type SerializeTupleStruct = Impossible<(), NotFinite>;
     type SerializeTupleVariant = Impossible<(), NotFinite>;
     type SerializeMap = Self;
@@ -125,8 +126,9 @@ impl Serializer for &mut Guard {
         Ok(self)
     }
 
-    fn serialize_tuple(self, _: usize) -> Result<Self::SerializeTuple, NotFinite> {
-        Err(ser::Error::custom("results hold no tuples"))
+    // A list of known length: a rotation about x, y and z.
+    fn serialize_tuple(self, _: usize) -> Result<Self, NotFinite> {
+        Ok(self)
     }
 
     fn serialize_tuple_struct(
@@ -134,7 +136,7 @@ impl Serializer for &mut Guard {
         _: &'static str,
         _: usize,
     ) -> Result<Self::SerializeTupleStruct, NotFinite> {
-        Err(ser::Error::custom("results hold no tuples"))
+        Err(ser::Error::custom("results hold no tuples with names"))
     }
 
     fn serialize_tuple_variant(
@@ -144,7 +146,7 @@ impl Serializer for &mut Guard {
         _: &'static str,
         _: usize,
     ) -> Result<Self::SerializeTupleVariant, NotFinite> {
-        Err(ser::Error::custom("results hold no tuples"))
+        Err(ser::Error::custom("results hold no tuples with names"))
     }
 
     fn serialize_struct_variant(
@@ -159,6 +161,19 @@ impl Serializer for &mut Guard {
 }
 
 impl SerializeSeq for &mut Guard {
+    type Ok = ();
+    type Error = NotFinite;
+
+    fn serialize_element<T: Serialize + ?Sized>(&mut self, value: &T) -> Result<(), NotFinite> {
+        value.serialize(&mut **self)
+    }
+
+    fn end(self) -> Result<(), NotFinite> {
+        Ok(())
+    }
+}
+
+impl SerializeTuple for &mut Guard {
     type Ok = ();
     type Error = NotFinite;
 
@@ -211,10 +226,13 @@ mod tests {
     use super::*;
     use crate::quantity::from_si;
     use crate::report::sample;
+    use crate::result::Rotation;
 
     #[test]
     fn a_finished_result_passes() {
         assert_eq!(all_finite(&sample::failing()), Ok(()));
+        assert_eq!(all_finite(&sample::assembly::plane()), Ok(()));
+        assert_eq!(all_finite(&sample::assembly::space()), Ok(()));
     }
 
     #[test]
@@ -232,5 +250,14 @@ mod tests {
             .factors
             .insert("dead".into(), f64::NAN);
         assert_eq!(all_finite(&factor), Err(NotFinite::Number("factors")));
+
+        let mut turned = sample::assembly::space();
+        let nowhere = [0.0, 0.0, f64::NAN].map(from_si);
+        turned.combinations[0].bodies[0].rotation = Rotation::Spatial(nowhere);
+        assert_eq!(all_finite(&turned), Err(NotFinite::Number("rotation")));
+
+        let mut watched = sample::assembly::plane();
+        watched.combinations[0].watches[0].value = Some(f64::INFINITY);
+        assert_eq!(all_finite(&watched), Err(NotFinite::Number("value")));
     }
 }

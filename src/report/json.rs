@@ -48,11 +48,17 @@ pub fn digest(bytes: &[u8]) -> String {
 mod tests {
     use super::*;
     use crate::report::sample;
-    use serde_json::Value;
+    use serde_json::{Value, json};
     use std::collections::BTreeSet;
 
     fn written() -> (Document, String) {
-        let jobs = vec![sample::failing(), sample::unchecked(), sample::unreadable()];
+        let jobs = vec![
+            sample::failing(),
+            sample::unchecked(),
+            sample::unreadable(),
+            sample::assembly::plane(),
+            sample::assembly::space(),
+        ];
         let mut counts = Counts::default();
         jobs.iter().for_each(|job| counts.add(job));
         let document = document(jobs, counts, digest(b""));
@@ -108,6 +114,7 @@ mod tests {
         let job = &document["jobs"][0];
         let combination = &job["combinations"][0];
         let member = &combination["members"][1];
+        let assembly = &document["jobs"][3]["combinations"][0];
         let promised = [
             (&document, "format tool units jobs counts"),
             (&document["tool"], "name version catalogue"),
@@ -122,7 +129,11 @@ mod tests {
             (
                 job,
                 "file digest title reference prepared_by checked_by date datum units status \
-                 errors cautions notes materials combinations governing envelope",
+                 errors warnings cautions notes materials combinations governing envelope",
+            ),
+            (
+                &job["warnings"][0],
+                "check on at combination stress allowable ratio status line",
             ),
             (
                 &document["jobs"][2]["errors"][0],
@@ -171,6 +182,11 @@ mod tests {
                 "check on combination demand limit unit utilisation status",
             ),
             (&job["envelope"][0], "result unit max max_in min min_in"),
+            (&assembly["points"][0], "name displacement reaction"),
+            (&assembly["holds"][0], "name point kind reaction gap bears"),
+            (&assembly["bodies"][0], "name displacement rotation"),
+            (&assembly["watches"][0], "name value unit"),
+            (&assembly["totals"], "applied reactions"),
         ];
         for (value, names) in promised {
             let written: BTreeSet<&str> = value
@@ -185,6 +201,24 @@ mod tests {
         }
     }
 
+    #[test]
+    fn lists_have_an_entry_for_each_coordinate_and_a_plane_rotation_is_one_number() {
+        let (_, text) = written();
+        let document: Value = serde_json::from_str(&text).unwrap();
+        let of = |job: usize| &document["jobs"][job]["combinations"][0];
+        let (plane, space) = (of(3), of(4));
+        assert_eq!(plane["points"][2]["displacement"], json!([0.0005, -0.0021]));
+        assert_eq!(plane["points"][2]["reaction"], Value::Null);
+        assert_eq!(plane["bodies"][0]["rotation"], json!(-0.001));
+        assert_eq!(plane["holds"][2]["reaction"], Value::Null);
+        assert_eq!(plane["totals"]["applied"], json!([0.0, -84250.0]));
+        assert_eq!(space["bodies"][0]["rotation"], json!([0.001, -0.002, 0.0]));
+        assert_eq!(space["holds"][0]["reaction"], json!([1e3, -2e3, 3e3]));
+        let lost = &document["jobs"][3]["combinations"][2];
+        assert_eq!(lost["without"], json!(["H2"]));
+        assert_eq!(lost["members"].as_array().unwrap().len(), 2);
+    }
+
     /// FIPS 180-2, appendix B.1: the digest of `abc`.
     #[test]
     fn the_digest_is_the_published_one() {
@@ -197,13 +231,14 @@ mod tests {
     #[test]
     fn counts_are_of_files_members_combinations_and_checks() {
         let (document, _) = written();
+        // A member that some combinations take out is counted all the same.
         let expected = Counts {
-            files: 3,
-            members: 3,
-            combinations: 2,
-            checks: 4,
-            pass: 3,
-            fail: 1,
+            files: 5,
+            members: 9,
+            combinations: 6,
+            checks: 15,
+            pass: 9,
+            fail: 6,
             unchecked_jobs: 1,
             errors: 2,
         };

@@ -1,12 +1,14 @@
 //! Finished results made by hand, for the tests of the reports. Their numbers need not fit one
 //! another: what is tested is how they are shown.
 
+pub(crate) mod assembly;
+
 use crate::model::{AreaUsed, Name, Purpose};
 use crate::quantity::from_si;
 use crate::result::{
     Caution, CheckResult, CombinationResult, Envelope, ErrorEntry, Governing, JobResult, JobStatus,
     LayerResult, MaterialEntry, MemberResult, MemberState, MemberTotals, Note, Residuals,
-    SegmentResult, StationResult, SupportResult, SupportWord, Unit, Verdict,
+    SegmentResult, StationResult, SupportResult, SupportWord, Unit, Verdict, Warning,
 };
 
 /// A job with a hanger that fails in tension and a post with layers, a gap, stops and a spring.
@@ -54,6 +56,10 @@ pub(crate) fn failing() -> JobResult {
         status: JobStatus::Fail,
         errors: Vec::new(),
         errors_total: 0,
+        warnings: vec![
+            warning("hanger.lower thread", 342e6, Verdict::Fail),
+            warning("hanger.shank", 290e6, Verdict::Pass),
+        ],
         cautions: vec![Caution {
             about: "member.post".into(),
             text: "carries compression, and no buckling check was asked for: \
@@ -95,6 +101,7 @@ pub(crate) fn unchecked() -> JobResult {
     job.title = None;
     job.status = JobStatus::Unchecked;
     job.governing.clear();
+    job.warnings.clear();
     let combination = &mut job.combinations[0];
     combination.name = "all".into();
     combination.purpose = None;
@@ -320,10 +327,25 @@ fn support(
     }
 }
 
-fn checks() -> Vec<CheckResult> {
-    let tension = CheckResult {
+fn warning(on: &str, stress: f64, status: Verdict) -> Warning {
+    Warning {
         check: "tension".into(),
-        on: "hanger.lower thread".into(),
+        on: on.into(),
+        at: Some(2.85),
+        combination: "strength/live=1.5".into(),
+        stress,
+        allowable: 300e6,
+        ratio: Some(stress / 300e6),
+        status,
+        line: 44,
+    }
+}
+
+/// A check of a stress that fails.
+fn check(name: &str, on: &str) -> CheckResult {
+    CheckResult {
+        check: name.into(),
+        on: on.into(),
         at: Some(2.85),
         area: Some(AreaUsed::Net),
         demand: 342e6,
@@ -334,7 +356,11 @@ fn checks() -> Vec<CheckResult> {
         source: Some("contract, clause 4.2".into()),
         details: serde_json::Map::new(),
         line: 44,
-    };
+    }
+}
+
+fn checks() -> Vec<CheckResult> {
+    let tension = check("tension", "hanger.lower thread");
     vec![
         tension.clone(),
         CheckResult {

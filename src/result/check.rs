@@ -76,6 +76,24 @@ pub struct Governing {
     pub line: usize,
 }
 
+/// A stress over its limit, or within 5 % of it, where it governs.
+#[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
+#[allow(missing_docs)] // as in `CheckResult`
+pub struct Warning {
+    pub check: Name,
+    pub on: Name,
+    pub at: Option<f64>,
+    pub combination: Name,
+    /// Its size (Pa).
+    pub stress: f64,
+    /// The size that is allowed (Pa).
+    pub allowable: f64,
+    /// The first over the second; null where none is allowed.
+    pub ratio: Option<f64>,
+    pub status: Verdict,
+    pub line: usize,
+}
+
 /// The range of one result over all combinations.
 #[derive(Debug, Clone, PartialEq, Serialize, Deserialize)]
 pub struct Envelope {

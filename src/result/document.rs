@@ -1,6 +1,6 @@
 //! The whole document: what one run found, job by job.
 
-use super::{CombinationResult, Envelope, Governing, Verdict};
+use super::{CheckResult, CombinationResult, Envelope, Governing, Verdict, Warning};
 use crate::model::Name;
 use crate::quantity::Units;
 use serde::{Deserialize, Serialize};
@@ -90,6 +90,8 @@ pub struct JobResult {
     pub errors: Vec<ErrorEntry>,
     /// How many there are.
     pub errors_total: usize,
+    /// Stresses over their limit or near it, the governing ones.
+    pub warnings: Vec<Warning>,
     pub cautions: Vec<Caution>,
     pub notes: Vec<Note>,
     pub materials: Vec<MaterialEntry>,
@@ -125,6 +127,7 @@ impl JobResult {
             status: JobStatus::Error,
             errors: Vec::new(),
             errors_total: 0,
+            warnings: Vec::new(),
             cautions: Vec::new(),
             notes: Vec::new(),
             materials: Vec::new(),
@@ -137,15 +140,45 @@ impl JobResult {
     /// The one check that decides: a failing one before any that holds, and among those the one
     /// with the largest utilisation (one that fails without a utilisation before all).
     pub fn governing_check(&self) -> Option<&Governing> {
-        let rank = |row: &Governing| match (row.status, row.utilisation) {
-            (Verdict::Fail, used) => (1, used.unwrap_or(f64::INFINITY)),
-            (Verdict::Pass, used) => (0, used.unwrap_or(0.0)),
-        };
+        let rank = |row: &Governing| rank(row.status, row.utilisation);
         self.governing.iter().reduce(|first, next| {
-            let (held, candidate) = (rank(first), rank(next));
-            let worse = candidate.0 > held.0 || candidate.0 == held.0 && candidate.1 > held.1;
-            if worse { next } else { first }
+            if rank(next) > rank(first) {
+                next
+            } else {
+                first
+            }
         })
+    }
+
+    /// The loss that governs, where several combinations take members out, with its worst check: of
+    /// losses that fail alike in a yes-or-no check, that with the largest utilisation.
+    pub fn governing_loss(&self) -> Option<(&CombinationResult, &CheckResult)> {
+        let combinations = self.combinations.iter();
+        let losses = combinations.filter(|combination| !combination.without.is_empty());
+        losses.clone().nth(1)?;
+        let worst = |loss: &'_ CombinationResult| {
+            let checks = loss.checks.iter();
+            let ranked = checks.map(|check| rank(check.status, check.utilisation));
+            let used = loss.checks.iter().filter_map(|check| check.utilisation);
+            let first = ranked.enumerate().reduce(
+                |worst, next| {
+                    if next.1 > worst.1 { next } else { worst }
+                },
+            );
+            first.map(|(at, rank)| (at, (rank, used.fold(0.0, f64::max))))
+        };
+        let found = losses.filter_map(|loss| worst(loss).map(|(at, key)| (loss, at, key)));
+        let (loss, at, _) =
+            found.reduce(|worst, next| if next.2 > worst.2 { next } else { worst })?;
+        Some((loss, loss.checks.get(at)?))
+    }
+}
+
+/// An order in which what governs comes last.
+fn rank(status: Verdict, utilisation: Option<f64>) -> (bool, f64) {
+    match status {
+        Verdict::Fail => (true, utilisation.unwrap_or(f64::INFINITY)),
+        Verdict::Pass => (false, utilisation.unwrap_or(0.0)),
     }
 }
 

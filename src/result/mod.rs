@@ -11,7 +11,7 @@ mod document;
 mod member;
 
 pub use assembly::{AssemblyTotals, BodyResult, HoldResult, PointResult, Rotation, WatchResult};
-pub use check::{CheckResult, Envelope, Governing, Unit, Verdict};
+pub use check::{CheckResult, Envelope, Governing, Unit, Verdict, Warning};
 pub use document::{
     Caution, Counts, Document, ErrorEntry, JobResult, JobStatus, MaterialEntry, Note, Tool,
     UnitNames, YieldRow,

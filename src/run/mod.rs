@@ -87,39 +87,27 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         &source.text,
         model.limits.iter().map(|limit| limit.place.start),
     );
-    let since = |index: usize| solved.indices.binary_search(&index).ok();
-    let checks: Vec<_> = solved
-        .indices
-        .iter()
-        .enumerate()
-        .map(|(at, &index)| {
-            check::combination(
-                model,
-                index,
-                &solved.results[at],
-                &solved.zeros[at],
-                &since,
-                &solved.results,
-                &lines,
-            )
-        })
-        .collect();
-    for (result, checks) in solved.results.iter_mut().zip(checks) {
-        result.checks = checks;
-    }
-
     let observed: Vec<Observed> = (0..solved.results.len())
         .map(|at| Observed {
             index: solved.indices[at],
             result: &solved.results[at],
             zeros: &solved.zeros[at],
+            assembly: solved.assembly_zeros[at],
         })
         .collect();
+    let checks: Vec<_> = (0..observed.len())
+        .map(|at| check::combination(model, &observed, at, &lines))
+        .collect();
+    let envelope = check::envelope(model, &observed);
     let mut remarks = check::cautions(model, &observed);
     remarks.extend(model.remarks.iter().cloned());
     remarks.extend(tolerances(model));
     remarks.append(&mut solved.remarks);
+    for (result, checks) in solved.results.iter_mut().zip(checks) {
+        result.checks = checks;
+    }
 
+    let governing = check::governing(&solved.results);
     let heading = &model.heading;
     let mut result = JobResult {
         title: heading.title.clone(),
@@ -130,8 +118,9 @@ fn solve_and_check(source: &Source, model: &Model) -> JobRun {
         note: heading.note.clone(),
         datum: model.datum.map(|datum| datum.value),
         units: model.units,
-        governing: check::governing(&solved.results),
-        envelope: check::envelope(&solved.results),
+        warnings: check::warnings(&governing),
+        governing,
+        envelope,
         materials: model.materials.iter().map(materials::entry).collect(),
         ..JobResult::empty(&source.file)
     };

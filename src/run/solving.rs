@@ -1,6 +1,7 @@
 //! Every combination of a job solved and proven: single members one by one, the assembly at once.
 
 use super::words;
+use crate::check;
 use crate::job::Problem;
 use crate::model::{Combination, Member, Model, Name, Remark};
 use crate::proof;
@@ -17,6 +18,8 @@ pub(super) struct Solved {
     pub(super) results: Vec<CombinationResult>,
     /// What counts as zero in each of a combination's members.
     pub(super) zeros: Vec<Vec<Threshold>>,
+    /// What counts as zero in the assembly.
+    pub(super) assembly_zeros: Vec<Threshold>,
     pub(super) problems: Vec<Problem>,
     pub(super) remarks: Vec<Remark>,
 }
@@ -31,7 +34,10 @@ pub(super) struct Said {
 /// What one combination came to.
 #[derive(Default)]
 struct Outcome {
-    result: Option<(CombinationResult, Vec<Threshold>)>,
+    result: Option<CombinationResult>,
+    /// What counts as zero in each member, and in the assembly.
+    zeros: Vec<Threshold>,
+    assembly_zero: Threshold,
     problems: Vec<Problem>,
     said: Vec<Said>,
 }
@@ -47,10 +53,11 @@ pub(super) fn combinations(model: &Model, style: Style) -> Solved {
     let mut solved = Solved::default();
     let mut known = HashSet::new();
     let mut take = |index: usize, outcome: Outcome| {
-        if let Some((result, zeros)) = outcome.result {
+        if let Some(result) = outcome.result {
             solved.indices.push(index);
             solved.results.push(result);
-            solved.zeros.push(zeros);
+            solved.zeros.push(outcome.zeros);
+            solved.assembly_zeros.push(outcome.assembly_zero);
         }
         solved.problems.extend(outcome.problems);
         for Said { what, remark } in outcome.said {
@@ -140,13 +147,14 @@ impl Solving<'_> {
         if !outcome.problems.is_empty() {
             return outcome;
         }
-        let zeros = members.iter().map(|&(.., zero)| zero).collect();
+        outcome.zeros = members.iter().map(|&(.., zero)| zero).collect();
         let members = members.into_iter().map(|(_, member, _)| member).collect();
         let mut result = result_of(model, combination, members, residuals);
         if let Some(solution) = assembly {
             self.join(solution, combination, &mut result, &mut outcome);
         }
-        outcome.result = Some((result, zeros));
+        result.watches = check::watches(model, combination, &result);
+        outcome.result = Some(result);
         outcome
     }
 
@@ -198,12 +206,20 @@ impl Solving<'_> {
         result: &mut CombinationResult,
         outcome: &mut Outcome,
     ) {
+        outcome.assembly_zero = solution.zero;
         let said = words::of_assembly(self.model, combination, &solution, self.style);
         outcome.said.extend(said);
         result.points = solution.points;
         result.holds = solution.holds;
         result.bodies = solution.bodies;
         result.totals = Some(solution.totals);
+        let residuals = proof::assembly(self.model, combination, result);
+        if !residuals.prove() {
+            let place = &combination.place;
+            let problem = words::unproven("the assembly", residuals, combination, place);
+            outcome.problems.push(problem);
+        }
+        result.residuals = result.residuals.worse(residuals);
         // The proof has had the split of least size.
         for row in solution.undecided {
             let hold = &mut result.holds[row];

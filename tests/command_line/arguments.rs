@@ -41,8 +41,8 @@ fn a_wrong_command_line_is_refused_with_what_would_be_right() {
         "the tables are members",
     );
     assert_refused(
-        &["check", job, "--format", "csv", "--table", "holds"],
-        "assemblies",
+        &["check", job, "--format", "csv", "--table", "hold"],
+        "points, bodies, holds, watches",
     );
     assert_refused(&["check", job, "--digits", "0"], "from 1 to 17");
     assert_refused(&["check", job, "--digits", "18"], "from 1 to 17");

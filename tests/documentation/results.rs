@@ -1,8 +1,12 @@
 //! `docs/results.md`: every name of the JSON, both ways, and the columns of the CSV.
 
 use super::page::{Page, code, root};
+use lengthwise::quantity::from_si;
 use lengthwise::report::{csv, json};
-use lengthwise::result::Counts;
+use lengthwise::result::{
+    AssemblyTotals, BodyResult, Counts, HoldResult, JobResult, PointResult, Rotation, SupportWord,
+    Unit, Verdict, Warning, WatchResult,
+};
 use lengthwise::{catalogue, check_text};
 use serde_json::Value;
 use std::collections::{BTreeMap, BTreeSet};
@@ -22,10 +26,58 @@ fn document() -> Value {
         }
     }
     assert!(jobs.len() > 12);
+    jobs.push(assembly());
     let mut counts = Counts::default();
     jobs.iter().for_each(|job| counts.add(job));
     let document = json::document(jobs, counts, catalogue::digest());
     serde_json::to_value(document).unwrap()
+}
+
+/// What only an assembly has, made by hand.
+fn assembly() -> JobResult {
+    let text = fs::read_to_string(root().join("examples/press-tie-rod.toml")).unwrap();
+    let mut job = check_text("by-hand.toml", &text);
+    let (point, force) = (from_si(0.001), from_si(1e3));
+    let combination = &mut job.combinations[0];
+    combination.points = vec![PointResult {
+        name: "a".into(),
+        displacement: vec![point],
+        reaction: Some(vec![force]),
+    }];
+    combination.holds = vec![HoldResult {
+        name: "hold.1".into(),
+        point: "a".into(),
+        kind: SupportWord::Fixed,
+        reaction: Some(vec![force]),
+        gap: None,
+        bears: None,
+    }];
+    combination.bodies = vec![BodyResult {
+        name: "beam".into(),
+        displacement: vec![point],
+        rotation: Rotation::InPlane(from_si(0.0)),
+    }];
+    combination.watches = vec![WatchResult {
+        name: "watch.1".into(),
+        value: Some(0.001),
+        unit: Unit::Metre,
+    }];
+    combination.totals = Some(AssemblyTotals {
+        applied: vec![-force],
+        reactions: vec![force],
+    });
+    job.warnings = vec![Warning {
+        check: "tension".into(),
+        on: "rod.1".into(),
+        at: None,
+        combination: "all".into(),
+        stress: 3e8,
+        allowable: 3e8,
+        ratio: Some(1.0),
+        status: Verdict::Pass,
+        line: 1,
+    }];
+    job
 }
 
 type Names = BTreeMap<String, BTreeSet<String>>;
@@ -46,6 +98,11 @@ fn gather(what: &str, value: &Value, names: &mut Names) {
             (_, "factors") => continue, // its names are those of cases
             ("document", "jobs") => "job",
             ("job", "errors") => "error",
+            ("job", "warnings") => "warning",
+            ("combination", "points") => "point",
+            ("combination", "holds") => "hold",
+            ("combination", "bodies") => "body",
+            ("combination", "watches") => "watch",
             ("job", "cautions") => "caution",
             ("job", "notes") => "note",
             ("job", "materials") => "material",
@@ -110,8 +167,13 @@ fn the_columns_of_the_csv_are_the_names_of_the_page_with_their_units() {
                 Some((column, unit)) => (column, unit.trim_end_matches(']')),
                 None => (*column, ""),
             };
+            // A list over coordinates has a column for each.
+            let list = column.strip_suffix(['x', 'y', 'z']);
+            let name = list
+                .and_then(|list| list.strip_suffix('_'))
+                .unwrap_or(column);
             let unit_on_page = names[row[1]]
-                .get(column)
+                .get(name)
                 .or_else(|| names["totals"].get(column).filter(|_| row[1] == "member"))
                 .unwrap_or_else(|| panic!("{column} of {name} is no name of a {}", row[1]));
             let plain = ["text", "1", "number", "object", "yes or no", "unit"];

@@ -1,10 +1,11 @@
 //! The columns of every table: heading with unit, and what a row has in it.
 
 use crate::model::AreaUsed;
-use crate::quantity::Measure;
+use crate::quantity::{Force, Measure};
 use crate::result::{
-    CheckResult, Envelope, Governing, LayerResult, MemberResult, MemberState, SegmentResult,
-    StationResult, SupportResult, SupportWord, Unit, Verdict,
+    BodyResult, CheckResult, Envelope, Governing, HoldResult, LayerResult, MemberResult,
+    MemberState, PointResult, Rotation, SegmentResult, StationResult, SupportResult, SupportWord,
+    Unit, Verdict, WatchResult,
 };
 use serde_json::{Map, Value};
 
@@ -123,6 +124,45 @@ pub(super) const SUPPORTS: &[Column<SupportResult>] = &[
     ("bears", |row| Field::Answer(row.bears)),
 ];
 
+// Of an assembly in fewer than three coordinates the fields of the others stay empty.
+pub(super) const POINTS: &[Column<PointResult>] = &[
+    ("point", |row| Field::Text(&row.name)),
+    ("displacement_x [m]", |row| along(&row.displacement, 0)),
+    ("displacement_y [m]", |row| along(&row.displacement, 1)),
+    ("displacement_z [m]", |row| along(&row.displacement, 2)),
+    ("reaction_x [N]", |row| reaction(row.reaction.as_deref(), 0)),
+    ("reaction_y [N]", |row| reaction(row.reaction.as_deref(), 1)),
+    ("reaction_z [N]", |row| reaction(row.reaction.as_deref(), 2)),
+];
+
+pub(super) const HOLDS: &[Column<HoldResult>] = &[
+    ("hold", |row| Field::Text(&row.name)),
+    ("point", |row| Field::Text(&row.point)),
+    ("kind", |row| Field::Text(kind(row.kind))),
+    ("reaction_x [N]", |row| reaction(row.reaction.as_deref(), 0)),
+    ("reaction_y [N]", |row| reaction(row.reaction.as_deref(), 1)),
+    ("reaction_z [N]", |row| reaction(row.reaction.as_deref(), 2)),
+    ("gap [m]", |row| optional(row.gap)),
+    ("bears", |row| Field::Answer(row.bears)),
+];
+
+pub(super) const BODIES: &[Column<BodyResult>] = &[
+    ("body", |row| Field::Text(&row.name)),
+    ("displacement_x [m]", |row| along(&row.displacement, 0)),
+    ("displacement_y [m]", |row| along(&row.displacement, 1)),
+    ("displacement_z [m]", |row| along(&row.displacement, 2)),
+    ("rotation_x [rad]", |row| rotation(row, 0)),
+    ("rotation_y [rad]", |row| rotation(row, 1)),
+    ("rotation_z [rad]", |row| rotation(row, 2)),
+];
+
+// A value is in the unit that its row names.
+pub(super) const WATCHES: &[Column<WatchResult>] = &[
+    ("watch", |row| Field::Text(&row.name)),
+    ("value", |row| Field::Number(row.value)),
+    ("unit", |row| Field::Text(unit(row.unit))),
+];
+
 // Demand and limit are in the unit that their row names.
 pub(super) const CHECKS: &[Column<CheckResult>] = &[
     ("check", |row| Field::Text(&row.check)),
@@ -177,6 +217,22 @@ fn number<'a, Q: Measure>(quantity: Q) -> Field<'a> {
 
 fn optional<'a, Q: Measure>(quantity: Option<Q>) -> Field<'a> {
     Field::Number(quantity.map(Q::si))
+}
+
+fn along<'a, Q: Measure>(parts: &[Q], axis: usize) -> Field<'a> {
+    optional(parts.get(axis).copied())
+}
+
+fn reaction<'a>(parts: Option<&[Force]>, axis: usize) -> Field<'a> {
+    along(parts.unwrap_or_default(), axis)
+}
+
+/// In fewer than three coordinates a body turns about z alone.
+fn rotation(body: &BodyResult, axis: usize) -> Field<'_> {
+    match body.rotation {
+        Rotation::Spatial(angles) => number(angles[axis]),
+        Rotation::InPlane(angle) => optional((axis == 2).then_some(angle)),
+    }
 }
 
 // The words of the JSON.

@@ -7,8 +7,8 @@
 mod columns;
 
 use crate::result::{CombinationResult, JobResult, MemberResult};
-use columns::{CHECKS, Column, ENVELOPE, Field, GOVERNING, LAYERS, MEMBERS, SEGMENTS};
-use columns::{STATIONS, SUPPORTS};
+use columns::{BODIES, CHECKS, Column, ENVELOPE, Field, GOVERNING, HOLDS, LAYERS, MEMBERS};
+use columns::{POINTS, SEGMENTS, STATIONS, SUPPORTS, WATCHES};
 use std::io::{self, Write};
 
 /// A table that can be written.
@@ -20,6 +20,10 @@ pub enum Table {
     Layers,
     Stations,
     Supports,
+    Points,
+    Bodies,
+    Holds,
+    Watches,
     Checks,
     Governing,
     Envelope,
@@ -27,12 +31,16 @@ pub enum Table {
 
 impl Table {
     /// Every table with its name.
-    pub const ALL: [(&'static str, Table); 8] = [
+    pub const ALL: [(&'static str, Table); 12] = [
         ("members", Table::Members),
         ("segments", Table::Segments),
         ("layers", Table::Layers),
         ("stations", Table::Stations),
         ("supports", Table::Supports),
+        ("points", Table::Points),
+        ("bodies", Table::Bodies),
+        ("holds", Table::Holds),
+        ("watches", Table::Watches),
         ("checks", Table::Checks),
         ("governing", Table::Governing),
         ("envelope", Table::Envelope),
@@ -51,6 +59,10 @@ pub fn write_header(out: &mut dyn Write, table: Table) -> io::Result<()> {
         Table::Layers => rows.header(&["file", "combination", "member", "segment"], LAYERS),
         Table::Stations => rows.header(&["file", "combination", "member"], STATIONS),
         Table::Supports => rows.header(&["file", "combination", "member"], SUPPORTS),
+        Table::Points => rows.header(&["file", "combination"], POINTS),
+        Table::Bodies => rows.header(&["file", "combination"], BODIES),
+        Table::Holds => rows.header(&["file", "combination"], HOLDS),
+        Table::Watches => rows.header(&["file", "combination"], WATCHES),
         Table::Checks => rows.header(&["file", "combination"], CHECKS),
         Table::Governing => rows.header(&["file"], GOVERNING),
         Table::Envelope => rows.header(&["file"], ENVELOPE),
@@ -103,6 +115,10 @@ impl<'a> Rows<'a> {
         let of = [file, &*combination.name];
         match self.table {
             Table::Members => self.rows(&of, &combination.members, MEMBERS),
+            Table::Points => self.rows(&of, &combination.points, POINTS),
+            Table::Bodies => self.rows(&of, &combination.bodies, BODIES),
+            Table::Holds => self.rows(&of, &combination.holds, HOLDS),
+            Table::Watches => self.rows(&of, &combination.watches, WATCHES),
             Table::Checks => self.rows(&of, &combination.checks, CHECKS),
             _ => combination
                 .members
@@ -176,7 +192,13 @@ mod tests {
 
     #[test]
     fn every_row_of_every_table_has_a_field_for_each_heading() {
-        let jobs = [sample::failing(), sample::unchecked(), sample::unreadable()];
+        let jobs = [
+            sample::failing(),
+            sample::unchecked(),
+            sample::unreadable(),
+            sample::assembly::plane(),
+            sample::assembly::space(),
+        ];
         for (name, table) in Table::ALL {
             let text = written(table, &jobs);
             // The reader refuses rows of different lengths.
@@ -217,6 +239,31 @@ mod tests {
                 .nth(1)
                 .unwrap()
                 .starts_with("\"a, \"\"b\"\".toml\",strength/live=1.5,tension,")
+        );
+    }
+
+    #[test]
+    fn an_assembly_has_a_column_for_each_coordinate_and_none_for_a_lost_member() {
+        let job = sample::assembly::plane();
+        let points = written(Table::Points, std::slice::from_ref(&job));
+        let lug = points.lines().find(|line| line.contains(",lug,")).unwrap();
+        assert!(lug.ends_with(",service,lug,0.0005,-0.0021,,,,"), "{lug}");
+        let bodies = written(Table::Bodies, std::slice::from_ref(&job));
+        assert!(
+            bodies.contains(",service,beam,0.0005,-0.0012,,,,-0.001\n"),
+            "{bodies}"
+        );
+        let holds = written(Table::Holds, std::slice::from_ref(&job));
+        assert!(
+            holds.contains(",kerb,b,stop,0.0,0.0,,0.0031,false\n"),
+            "{holds}"
+        );
+        let members = written(Table::Members, std::slice::from_ref(&job));
+        assert!(members.contains(",service,H2,") && !members.contains("without=H2,H2,"));
+        let watches = written(Table::Watches, &[job]);
+        assert!(
+            watches.contains(",service,lug level,-0.0021,m\n"),
+            "{watches}"
         );
     }
 

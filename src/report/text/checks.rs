@@ -10,9 +10,6 @@ use crate::result::{CheckResult, Governing, JobResult, Unit, Verdict};
 use std::collections::{BTreeMap, BTreeSet, HashMap};
 use std::io::{self, Write};
 
-/// A stress this close under its limit is named at the head of the report.
-const NEAR: f64 = 0.95;
-
 /// What a row of either kind of check says.
 struct Row<'a> {
     check: String,
@@ -94,33 +91,33 @@ pub(super) fn governing_name(job: &JobResult, governing: &Governing) -> String {
     }
 }
 
-/// Writes a warning line for every stress over its limit or near it, once for each place.
+/// Writes a line for every stress that the job warns of.
 pub(super) fn write_warnings(
     out: &mut dyn Write,
     job: &JobResult,
     layout: &Layout,
 ) -> io::Result<()> {
     let style = layout.style(job);
-    for check in job.governing.iter().filter(|check| is_warned_of(check)) {
-        let place = match check.at {
+    for warning in &job.warnings {
+        let place = match warning.at {
             Some(at) => format!(
                 "{} at {}",
-                check.on,
+                warning.on,
                 with_unit::<Length>(&style, from_si(at))
             ),
-            None => check.on.to_string(),
+            None => warning.on.to_string(),
         };
         let word = paint("warning", layout.colour);
-        let ratio = match check.utilisation {
-            Some(_) => format!("ratio {}", ratio(&style, check.utilisation)),
+        let ratio = match warning.ratio {
+            Some(_) => format!("ratio {}", ratio(&style, warning.ratio)),
             None => "where none is allowed".to_owned(),
         };
         let text = format!(
             "{place}, combination {}: {} of {} against {} allowable, {ratio}",
-            check.combination,
-            check.check,
-            style.quantity(Dimension::Stress, check.demand),
-            style.quantity(Dimension::Stress, check.limit),
+            warning.combination,
+            warning.check,
+            style.quantity(Dimension::Stress, warning.stress),
+            style.quantity(Dimension::Stress, warning.allowable),
         );
         write!(out, "{word}")?;
         wrapped_after_word(out, &text, layout)?;
@@ -141,11 +138,6 @@ fn wrapped_after_word(out: &mut dyn Write, text: &str, layout: &Layout) -> io::R
     out.write_all(lines.get(WORD..).unwrap_or_default())
 }
 
-fn is_warned_of(check: &Governing) -> bool {
-    matches!(&*check.check, "tension" | "compression")
-        && (check.status == Verdict::Fail || check.utilisation.is_some_and(|used| used >= NEAR))
-}
-
 /// Writes the largest utilisation of every check over all combinations, what is to be said of those
 /// that fail, and where the limits come from.
 pub(super) fn write_governing(
@@ -161,8 +153,31 @@ pub(super) fn write_governing(
     let rows = job.governing.iter();
     let rows: Vec<Row> = rows.map(|check| Row::governing(job, check)).collect();
     write_rows(out, &rows, &layout.style(job), layout)?;
+    write_loss(out, job, layout)?;
     write_failing(out, job, layout)?;
     write_sources(out, job, layout)
+}
+
+/// Writes which of several losses of members governs.
+fn write_loss(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
+    let Some((loss, check)) = job.governing_loss() else {
+        return Ok(());
+    };
+    let style = layout.style(job);
+    let used = match check.utilisation {
+        Some(used) => format!("utilisation {}, ", ratio(&style, Some(used))),
+        None => String::new(),
+    };
+    let text = format!(
+        "Of the losses, that of {} governs (combination {}): {} on {}, {used}{}.",
+        loss.without.join(" and "),
+        loss.name,
+        named(check),
+        check.on,
+        verdict(check.status),
+    );
+    writeln!(out)?;
+    wrapped(out, "", &text, layout.width)
 }
 
 /// Writes for every check that fails anywhere the value, the limit, and the line that set it.
@@ -294,7 +309,14 @@ fn write_rows(out: &mut dyn Write, rows: &[Row], style: &Style, layout: &Layout)
         None => "",
     });
     // What rounding leaves is told by the largest value of the same unit in the table.
-    let scales = [Unit::Pascal, Unit::Newton, Unit::Metre, Unit::None].map(|unit| {
+    let scales = [
+        Unit::Pascal,
+        Unit::Newton,
+        Unit::Metre,
+        Unit::Radian,
+        Unit::None,
+    ]
+    .map(|unit| {
         let same = rows.iter().filter(|row| row.unit == unit);
         (unit, largest(same.flat_map(|row| [row.demand, row.limit])))
     });
@@ -339,7 +361,7 @@ pub(super) fn dimension(unit: Unit) -> Option<Dimension> {
     }
 }
 
-fn value(style: &Style, unit: Unit, si: f64) -> String {
+pub(super) fn value(style: &Style, unit: Unit, si: f64) -> String {
     match dimension(unit) {
         Some(dimension) => style.number(dimension, si),
         None if si == 0.0 => "no".to_owned(),
@@ -347,6 +369,6 @@ fn value(style: &Style, unit: Unit, si: f64) -> String {
     }
 }
 
-fn unit(style: &Style, unit: Unit) -> &'static str {
+pub(super) fn unit(style: &Style, unit: Unit) -> &'static str {
     dimension(unit).map_or("", |dimension| style.unit(dimension))
 }

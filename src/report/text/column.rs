@@ -99,6 +99,12 @@ impl Column {
         self
     }
 
+    /// The same cells under another heading.
+    pub(super) fn headed_as(mut self, heading: &str) -> Self {
+        self.heading = heading.to_owned();
+        self
+    }
+
     /// The same numbers without decimals where all of them have only zeros there: lengths and
     /// places, which a job mostly gives in whole units.
     pub(super) fn without_idle_decimals(mut self) -> Self {

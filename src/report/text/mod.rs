@@ -1,10 +1,12 @@
 //! The text report, whole and brief.
 
+mod assembly;
 mod brief;
 mod checks;
 mod column;
 mod heading;
 mod member;
+mod ranges;
 mod segments;
 mod table;
 mod words;
@@ -48,6 +50,13 @@ const SIGNS: &str = "N and stress are + in tension, elongation + for growth, dis
      from the member's start. Utilisation is demand over limit by size; for a least gap (gap min) \
      it is what has closed over what may close.";
 
+/// What is added to that where the job has points.
+const SIGNS_OF_POINTS: &str = "Displacements of points and reactions of holds are + along +x, +y and \
+     +z (up is +y in two coordinates, +z in three); rotations are right-handed, in two coordinates \
+     + anticlockwise. The displacement of a body is that of its first \
+     point. A member between points \
+     has its own signs along its axis, from its first point to its second.";
+
 /// What rounding leaves of numbers that cancel: a number smaller than this share of the largest of
 /// its kind beside it is shown as 0. JSON and CSV keep it.
 const NOISE: f64 = 1e-12;
@@ -63,6 +72,7 @@ const CLOSING: &str = "For use by a qualified engineer: the governing code and a
 pub fn write_job(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Result<()> {
     heading::write(out, job, layout)?;
     checks::write_governing(out, job, layout)?;
+    ranges::write(out, job, layout)?;
     heading::write_materials(out, job, layout)?;
     for combination in &job.combinations {
         write_combination(out, job, combination, layout)?;
@@ -103,6 +113,9 @@ fn write_combination(
 ) -> io::Result<()> {
     writeln!(out)?;
     title(out, &combination_title(combination), '=', layout.width)?;
+    if !combination.points.is_empty() {
+        assembly::write(out, combination, &layout.style(job), layout)?;
+    }
     for member in &combination.members {
         writeln!(out)?;
         member::write(out, member, &layout.style(job), layout)?;
@@ -186,7 +199,13 @@ fn write_foot(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Resu
         return Ok(());
     }
     writeln!(out)?;
-    wrapped(out, "Signs: ", SIGNS, layout.width)?;
+    let has_points = |combination: &CombinationResult| !combination.points.is_empty();
+    if job.combinations.iter().any(has_points) {
+        let signs = format!("{SIGNS} {SIGNS_OF_POINTS}");
+        wrapped(out, "Signs: ", &signs, layout.width)?;
+    } else {
+        wrapped(out, "Signs: ", SIGNS, layout.width)?;
+    }
     wrapped(out, "", CLOSING, layout.width)
 }
 

@@ -32,7 +32,14 @@ fn block(text: &str, from: &str) -> String {
 
 #[test]
 fn the_report_keeps_the_page_and_leaves_no_blanks_at_line_ends() {
-    for job in [sample::failing(), sample::unchecked(), sample::unreadable()] {
+    let jobs = [
+        sample::failing(),
+        sample::unchecked(),
+        sample::unreadable(),
+        sample::assembly::plane(),
+        sample::assembly::space(),
+    ];
+    for job in jobs {
         let text = whole(&job, &PAGE);
         for line in text.lines() {
             assert!(line.width() <= 80, "too wide: {line}");
@@ -77,13 +84,15 @@ warning      hanger.shank at 2850 mm, combination strength/live=1.5: tension of
              290.0 MPa against 300.0 MPa allowable, ratio 0.967";
     assert_eq!(block(&text, "warning"), expected);
 
-    // 94 % is not near, and a movement has no warning, however far over its limit.
     let mut job = sample::failing();
-    job.governing.remove(0);
-    job.governing[0].utilisation = Some(0.94);
-    job.governing[1].utilisation = Some(1.5);
-    job.governing[1].status = crate::result::Verdict::Fail;
-    assert!(!whole(&job, &PAGE).contains("warning"));
+    job.warnings[0].ratio = None;
+    job.warnings[0].allowable = 0.0;
+    let none = "tension of 342.0 MPa against 0 MPa allowable, where none is allowed";
+    assert!(
+        whole(&job, &PAGE)
+            .replace("\n             ", " ")
+            .contains(none)
+    );
 }
 
 #[test]
@@ -318,4 +327,97 @@ fn counts_say_what_was_looked_at() {
         String::from_utf8(out).unwrap(),
         "Looked at 2 files, 2 members, 1 combination and 4 checks: 3 pass, 1 fail; 2\nerrors.\n"
     );
+}
+
+#[test]
+fn an_assembly_says_first_what_holds_it_what_its_members_carry_and_how_it_moves() {
+    let text = whole(&sample::assembly::plane(), &PAGE);
+    let order = [
+        "\nGoverning checks\n",
+        "\nReactions over all combinations\n",
+        "\nMember forces N over all combinations\n",
+        "\nMovements over all combinations\n",
+        "\nCombination service, for service: 1 dead\n",
+        "\nReactions\n",
+        "\nMember forces\n",
+        "\nMovements\n",
+        "\nMember H1\n",
+    ];
+    let places: Vec<usize> = order
+        .iter()
+        .map(|title| text.find(title).unwrap())
+        .collect();
+    assert!(places.is_sorted(), "{places:?}");
+    let holds = "\
+hold    point  kind         [kN]       [kN]   [mm]  bears
+---------------------------------------------------------
+hold.1  left   fixed           0      84.25
+kerb    b      stop            0       0     3.100  no
+rail    b      spring  undecided  undecided";
+    assert_eq!(block(&text, "hold    point"), holds);
+    let totals = "\
+all applied forces        0   -84.25
+all reactions             0    84.25";
+    assert_eq!(block(&text, "all applied forces"), totals);
+    let members = "\
+member    state     [kN]   [kN]        [mm]      [mm]
+-----------------------------------------------------
+H1        taut     84.25  81.00       2.160
+sway tie  slack     0      0          0        0.7500
+H2        taut     84.25  81.00       2.160";
+    assert_eq!(block(&text, "member    state"), members);
+    assert!(
+        text.contains("\nlug          0.5000        -2.100\n"),
+        "{text}"
+    );
+    // 1 mrad is 0.0573 deg.
+    assert!(
+        text.contains("\nbeam        0.5000        -1.200  -0.05730\n"),
+        "{text}"
+    );
+    assert!(text.contains("\nlug level  -2.100    mm\n"), "{text}");
+    assert!(
+        text.replace('\n', " ")
+            .contains("rotations are right-handed")
+    );
+    assert!(!whole(&sample::failing(), &PAGE).contains("right-handed"));
+}
+
+#[test]
+fn the_loss_that_governs_is_named_and_a_lost_member_has_no_rows() {
+    let text = whole(&sample::assembly::plane(), &PAGE);
+    let loss = "Of the losses, that of H2 governs (combination service/without=H2):";
+    assert!(text.contains(loss), "{text}");
+    let lost = text
+        .split("\nCombination service/without=H2")
+        .nth(1)
+        .unwrap();
+    assert!(lost.starts_with(", for service: 1 dead, without H2\n"));
+    assert!(lost.contains("\nMember H1\n") && !lost.contains("\nMember H2\n"));
+}
+
+#[test]
+fn the_ranges_say_which_combination_each_extreme_comes_from() {
+    let text = whole(&sample::assembly::plane(), &PAGE);
+    // The largest of the largest forces, and the least of the least.
+    let force = "\
+result  largest  in combination      least  in combination  unit
+----------------------------------------------------------------
+H1        144.0  service/without=H2  81.00  service         kN";
+    assert_eq!(block(&text, "result  largest"), force);
+    let mut single = sample::assembly::plane();
+    single.combinations.truncate(1);
+    assert!(!whole(&single, &PAGE).contains("over all combinations"));
+}
+
+#[test]
+fn a_body_in_space_turns_about_three_axes() {
+    let text = whole(&sample::assembly::space(), &PAGE);
+    let rotation = "\
+       rotation  rotation  rotation
+        about x   about y   about z
+body      [deg]     [deg]     [deg]
+-----------------------------------
+plate   0.05730   -0.1146    0";
+    assert!(text.contains(rotation), "{text}");
 }

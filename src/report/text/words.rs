@@ -112,9 +112,9 @@ fn is_number(word: &str) -> bool {
 
 /// Whether a word is a unit in which reports show quantities, a mark behind it aside.
 fn is_unit(word: &str) -> bool {
-    const UNITS: [&str; 18] = [
+    const UNITS: [&str; 20] = [
         "mm", "mm2", "kN", "kN/mm", "MPa", "kg", "kg/m", "K", "degC", "in", "in2", "kip", "kip/in",
-        "ksi", "lb", "lb/ft", "degF", "ue",
+        "ksi", "lb", "lb/ft", "degF", "ue", "deg", "rad",
     ];
     UNITS.contains(&word.trim_end_matches(['.', ',', ';', ':', ')']))
 }

@@ -119,7 +119,7 @@ fn a_platform_on_four_hangers_shares_by_position() {
         [
             "body `deck` can move along x",
             "body `deck` can move along y",
-            "body `deck` can turn about an axis along z through (0.000 mm, 0.000 mm, 0.000 mm)",
+            "body `deck` can turn about an axis along z through (0 mm, 0 mm, 0 mm)",
         ]
     );
 }
