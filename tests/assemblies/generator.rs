@@ -40,9 +40,14 @@ pub(crate) fn assembly(random: &mut Random, coordinates: usize) -> Assembly {
     for _ in 0..one_way {
         contact(random, &mut made);
     }
+    if made.members.is_empty() {
+        // A job needs one.
+        let between = member(random, &made, [0, made.points.len() - 1]);
+        made.members.push(between);
+    }
     if random.chance(0.2) {
         // One that was needed carries only one way: nothing may be left that holds.
-        let member = random.below(made.members.len().max(1));
+        let member = random.below(made.members.len());
         if let Some(member) = made.members.get_mut(member)
             && contacts_in(member) == 0
         {

@@ -24,6 +24,9 @@ struct Tally {
 /// To this share of the largest of a kind.
 const NEAR: f64 = 1e-10;
 
+/// Some of these assemblies move by far more than their members stretch.
+const RESIDUAL: f64 = 1e-10;
+
 fn run(coordinates: usize, seed: u64) {
     let mut random = Random(seed);
     let mut tally = Tally::default();
@@ -72,11 +75,31 @@ fn states_and_values_in_three_coordinates_are_those_of_the_enumeration() {
     run(3, 20_261_203);
 }
 
+/// Whether a change of the drawing by some fifty roundings moves the answer by as much as is
+/// compared: then two ways of computing it need not agree.
+fn rounding_decides(assembly: &Assembly, system: &System, state: &State) -> bool {
+    let mut nudged = assembly.clone();
+    let mut random = Random(1);
+    for point in &mut nudged.points {
+        *point = point.map(|entry| entry * (1.0 + random.between(-1e-14, 1e-14)));
+    }
+    let Some((other, _)) = System::of(&nudged).state(&state.acts) else {
+        return true;
+    };
+    let moved = |a: &[Vec<f64>], b: &[Vec<f64>]| {
+        let pairs = a.iter().flatten().zip(b.iter().flatten());
+        pairs.map(|(a, b)| (a - b).abs()).fold(0.0, f64::max)
+    };
+    moved(&state.force, &other.force) > NEAR * system.largest_force(state)
+        || moved(&state.station, &other.station) > NEAR * system.largest_length(state)
+}
+
 /// One combination of a result against an assembly.
 fn judge(about: &str, name: &str, assembly: &Assembly, result: &JobResult, tally: &mut Tally) {
     let system = System::of(assembly);
     let found = result.combinations.iter().find(|c| &*c.name == name);
     match system.enumerate() {
+        Found::One(state) if rounding_decides(assembly, &system, &state) => tally.unclear += 1,
         Found::One(state) => {
             let combination = found.unwrap_or_else(|| {
                 panic!(
@@ -244,8 +267,10 @@ pub(super) fn compare(about: &str, system: &System, state: &State, found: &Combi
     forces.vector("totals", totals.applied.iter().map(|r| r.value), against);
     let most = found.residuals.largest();
     assert!(
-        most <= 1e-12,
-        "{about}: residual {most:e}\n{}",
+        most <= RESIDUAL,
+        "{about}: {:?}
+{}",
+        found.residuals,
         assembly.job()
     );
 }
