@@ -8,6 +8,7 @@ mod assembly;
 mod dense;
 mod elements;
 mod energy;
+mod equations;
 mod generator;
 mod job;
 mod knife_edges;

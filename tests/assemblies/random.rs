@@ -49,7 +49,6 @@ fn run(coordinates: usize, seed: u64) {
             tally.lost_too_much += tally.unsolvable - before.1;
         }
     }
-    println!("{coordinates}: {tally:?}");
     assert!(tally.solved >= 2_000, "{tally:?}");
     assert!(tally.acting >= 1_000 && tally.resting >= 1_000, "{tally:?}");
     assert!(tally.unsolvable >= 100, "{tally:?}");
