@@ -51,10 +51,10 @@ fn run(coordinates: usize, seed: u64) {
     }
     assert!(tally.solved >= 2_000, "{tally:?}");
     assert!(tally.acting >= 1_000 && tally.resting >= 1_000, "{tally:?}");
-    assert!(tally.unsolvable >= 100, "{tally:?}");
+    assert!(tally.unsolvable >= 60, "{tally:?}");
     assert!(tally.unclear <= 100, "{tally:?}");
     assert!(
-        tally.losses >= 300 && tally.lost_too_much >= 50,
+        tally.losses >= 300 && tally.lost_too_much >= 40,
         "{tally:?}"
     );
 }
