@@ -3,7 +3,7 @@
 use nalgebra::{DMatrix, DVector, Dyn, LU};
 
 /// Pivots below this share of the largest are 0: the equations have no single solution.
-const NO_PIVOT: f64 = 1e-11;
+const NO_PIVOT: f64 = 1e-14;
 
 /// LU factors; `None` where there is no single solution.
 fn factors(a: &DMatrix<f64>) -> Option<LU<f64, Dyn, Dyn>> {
