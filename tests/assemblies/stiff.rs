@@ -29,9 +29,8 @@ impl Stiff {
             _ => &[[1.0, 0.0, 0.0], [0.0, 1.0, 0.0], [0.0, 0.0, 1.0]],
         };
         let (rows, motions) = (points.len() * dim, dim + turns.len());
-        // The rigid motions, one a column; a square matrix so that all left vectors come out.
-        let side = rows.max(motions);
-        let mut rigid = DMatrix::zeros(side, side);
+        // The rigid motions, one a column.
+        let mut rigid = DMatrix::zeros(rows, motions);
         for (p, &point) in points.iter().enumerate() {
             for axis in 0..dim {
                 rigid[(p * dim + axis, axis)] = 1.0;
@@ -40,24 +39,28 @@ impl Stiff {
                 }
             }
         }
-        let parts = rigid.clone().svd(true, true);
-        let (left, right) = (parts.u.expect("asked for"), parts.v_t.expect("asked for"));
-        let values = parts.singular_values;
-        let acts = |k: usize| values[k] > 1e-9 * values.max();
-        let mut inverse = DMatrix::zeros(motions, rows);
-        let mut equations = Vec::new();
-        for k in 0..side {
-            let column = left.column(k);
-            if acts(k) {
-                for m in 0..motions {
-                    for r in 0..rows {
-                        inverse[(m, r)] += right[(k, m)] * column[r] / values[k];
-                    }
-                }
-            } else if column.rows(rows, side - rows).norm() < 0.5 {
-                equations.push(column.rows(0, rows).transpose());
-            }
+        // What they span, and what is square to all of them.
+        let mut basis = Vec::new();
+        for motion in rigid.column_iter() {
+            extend(&mut basis, motion.into_owned());
         }
+        let rank = basis.len();
+        while basis.len() < rows {
+            let left = (0..rows).map(|i| rest(&basis, unit(rows, i)));
+            let most = left.max_by(|a, b| a.norm().total_cmp(&b.norm()));
+            extend(&mut basis, most.expect("a body has points"));
+        }
+        let square: Vec<_> = basis.drain(rank..).map(|v| v.transpose()).collect();
+        let spanned = DMatrix::from_columns(&basis);
+        // Movements of least size: rigid = spanned · shares, so its inverse is sharesᵀ (shares ·
+        // sharesᵀ)⁻¹ spannedᵀ.
+        let shares = spanned.transpose() * &rigid;
+        let product = &shares * shares.transpose();
+        let solved = product
+            .lu()
+            .solve(&spanned.transpose())
+            .expect("independent");
+        let inverse = shares.transpose() * solved;
         let down = scaled(assembly.down(), assembly.weight * body.mass * GRAVITY);
         let force = plus(body.force, down);
         let lever = cross(minus(body.centre, middle), force);
@@ -70,9 +73,9 @@ impl Stiff {
             wrench[dim + t] = super::assembly::dot(turn, moment);
         }
         let forces = inverse.transpose() * &wrench;
-        let taken = rigid.view((0, 0), (rows, motions)).transpose() * &forces;
+        let taken = rigid.transpose() * &forces;
         Stiff {
-            equations: match equations.as_slice() {
+            equations: match square.as_slice() {
                 [] => DMatrix::zeros(0, rows),
                 rows => DMatrix::from_rows(rows),
             },
@@ -81,4 +84,27 @@ impl Stiff {
             forces,
         }
     }
+}
+
+/// Puts the part of a vector that is square to a basis into it, if there is any.
+fn extend(basis: &mut Vec<DVector<f64>>, vector: DVector<f64>) {
+    let left = rest(basis, vector.clone());
+    if left.norm() > 1e-9 * vector.norm() {
+        basis.push(left.normalize());
+    }
+}
+
+/// What is left of a vector without its part along an orthonormal basis; taken off twice, so that it
+/// is square to it to rounding (Kahan's "twice is enough").
+fn rest(basis: &[DVector<f64>], mut vector: DVector<f64>) -> DVector<f64> {
+    for _ in 0..2 {
+        for direction in basis {
+            vector -= direction * direction.dot(&vector);
+        }
+    }
+    vector
+}
+
+fn unit(size: usize, index: usize) -> DVector<f64> {
+    DVector::from_fn(size, |i, _| if i == index { 1.0 } else { 0.0 })
 }
