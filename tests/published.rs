@@ -109,6 +109,13 @@ published! {
 
     p03_square_steps "p03.toml" { value("bar.elongation", "0.99", "mm", 0.988_888_888_9) }
 
+    // Printed from memory; a public copy has 0.0031 m, 0.0011 m and 4.2 mm.
+    p04_rod_inside_a_tube "p04.toml" {
+        value("rod.elongation", "0.003056", "m", 0.003_055_774_907),
+        value("B.displacement.x", "0.001143", "m", 0.001_142_857_143),
+        value("C.displacement.x", "4.20", "mm", 4.198_632_05),
+    }
+
     // Printed cut off, not rounded.
     p05_round_taper "p05.toml" {
         value("rod.elongation", "0.01515", "mm", 0.015_157_613_63).print(CutOff),
@@ -210,9 +217,88 @@ published! {
         value("bar.elongation", "1.06", "mm", 1.06),
     }
 
+    // The movement at 4 m is printed from those of the two members: half of their last digits, two
+    // thirds and one third of 0.005 mm, comes on top.
+    p22_beam_on_two_members "p22.toml" {
+        value("one.displacement.y", "-7.07", "mm", -7.073_553_026),
+        value("two.displacement.y", "-8.73", "mm", -8.730_785_45),
+        value("edge.displacement.y", "-7.62", "mm", -7.625_963_834).print(Carried(0.005)),
+    }
+
+    p23_bar_on_two_links "p23.toml" {
+        value("AB.force_max", "-60", "kN", -60.0),
+        value("CD.force_max", "90", "kN", 90.0),
+        value("B.displacement.y", "0.514", "mm", 0.514_285_714_3),
+        value("D.displacement.y", "-0.300", "mm", -0.3),
+        value("E.displacement.y", "-1.928", "mm", -1.928_571_429).print(CutOff),
+    }
+
+    p24_lever_on_two_rods "p24.toml" {
+        value("DF.force_max", "7.50", "kip", 7.5),
+        value("CE.force_max", "2.50", "kip", 2.5),
+        value("A.displacement.y", "-0.0432", "in", -0.043_242_097_75),
+    }
+
+    // The rise that leaves all to the steel is the force of a copper rod over its loss by 1 K.
+    p25_three_rods_loaded_then_heated "p25.toml" {
+        value("cold:middle.force_max", "100", "kN", 100.0),
+        value("cold:west.force_max", "50", "kN", 50.0),
+        value("cold:east.elongation", "1.0", "mm", 1.0),
+        value("cold:west.force_max / kelvin:west.force_max", "-333.33", "1", -333.333_333_3),
+        value("warm:middle.force_max", "112", "kN", 112.0),
+        value("warm:east.force_max", "44", "kN", 44.0),
+        value("warm:low.displacement.y", "-1.6", "mm", -1.6),
+    }
+
+    p26_bar_on_a_pin_heated "p26.toml" {
+        value("steel.rod.stress_max", "35.51", "MPa", 35.506_849_32),
+        value("copper.rod.stress_min", "-47.34", "MPa", -47.342_465_75),
+    }
+
+    // The diameter of the file is the recomputed one; the source prints 11.65 mm.
+    p27_bar_on_four_wires "p27.toml" {
+        value("A.force_max", "4", "kN", 4.0),
+        value("D.force_max", "16", "kN", 16.0),
+        value("D.wire.stress_max", "150", "MPa", 150.0),
+    }
+
+    p28_plate_on_four_pillars "p28.toml" {
+        value("A.force_min", "-5", "kN", -5.0),
+        value("B.force_min", "-3", "kN", -3.0),
+        value("C.force_min", "-5", "kN", -5.0),
+        value("D.force_min", "-7", "kN", -7.0),
+    }
+
+    p29_load_on_three_wires_heated "p29.toml" {
+        value("middle.wire.stress_max", "19 695", "psi", 19_695.483_87),
+        value("east.wire.stress_max", "10 152", "psi", 10_152.258_06),
+    }
+
     p30_two_loads_one_way "p30.toml" {
         value("bar.start.reaction", "-900", "lbf", -900.0),
         value("bar.end.reaction", "-600", "lbf", -600.0),
+    }
+
+    // The force of a bolt is printed from memory.
+    p31_castings_drawn_together "p31.toml" {
+        value("EF.rod.stress_min", "-10.53", "ksi", -10.533_168_86),
+        value("CD.force_max", "9.31", "kip", 9.306_822_912),
+        value("GH.force_max", "9.31", "kip", 9.306_822_912),
+    }
+
+    p32_bolt_through_a_tube "p32.toml" {
+        value("bolt.shank.stress_max", "107.91", "MPa", 107.913_669_1),
+        value("tube.wall.stress_min", "-55.25", "MPa", -55.251_798_56),
+    }
+
+    // Both printed cut off, not rounded.
+    p33_bolt_in_a_tube_heated "p33.toml" {
+        value("tube.wall.stress_min", "-14.117", "MPa", -14.117_647_06).print(CutOff),
+        value("rod.shank.stress_max", "31.76", "MPa", 31.764_705_88).print(CutOff),
+    }
+
+    p34_cylinder_clamped_by_bolts "p34.toml" {
+        value("cylinder.wall.stress_min", "-2400", "psi", -2400.0),
     }
 
     // The heating is printed from the stretch rounded to 0.01204 in: half of its last digit over

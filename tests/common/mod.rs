@@ -73,8 +73,10 @@ impl Values {
             }
             None => (&self.combinations.first()?.1, address),
         };
-        let (member, rest) = path.split_once('.')?;
-        let member = named(&combination["members"], member)?;
+        let (name, rest) = path.split_once('.')?;
+        let Some(member) = named(&combination["members"], name) else {
+            return of_an_assembly(combination, name, rest);
+        };
         let Some((part, quantity)) = rest.rsplit_once('.') else {
             return member[rest].as_f64();
         };
@@ -83,6 +85,22 @@ impl Values {
             .filter_map(|list| named(&member[list], part))
             .chain(layer(&member["segments"], part))
             .find_map(|found| found[quantity].as_f64())
+    }
+}
+
+/// The value of a point, body, hold or watch: `displacement.y`, `rotation`, `gap`.
+fn of_an_assembly(combination: &Value, name: &str, rest: &str) -> Option<f64> {
+    let (quantity, axis) = rest.split_once('.').unwrap_or((rest, ""));
+    let lists = ["points", "bodies", "holds", "watches"];
+    let entries = lists
+        .iter()
+        .filter_map(|list| named(&combination[list], name));
+    let value = entries
+        .map(|entry| &entry[quantity])
+        .find(|v| !v.is_null())?;
+    match "xyz".find(axis) {
+        Some(axis) if value.is_array() => value[axis].as_f64(),
+        _ => value.as_f64(),
     }
 }
 
