@@ -302,9 +302,10 @@ fn damaged_jobs_end_in_errors_or_in_proven_results() {
     }
     assert!(tried >= 20_000, "only {tried} were tried");
     // Damage that no job survives would try the reader alone, and damage that all survive nothing.
+    // Few jobs of assemblies survive any: each name in them is said in several places.
     let of_a_hundred = 100 * solved / looked_at;
     assert!(
-        (10..=60).contains(&of_a_hundred),
+        (5..=60).contains(&of_a_hundred),
         "{of_a_hundred} % are solved"
     );
     let told: Vec<String> = failures

@@ -158,8 +158,10 @@ impl Solving<'_> {
         if let Some(solution) = assembly {
             self.join(solution, combination, &mut result, &mut outcome);
         }
-        result.watches = check::watches(model, combination, &result);
-        outcome.result = Some(result);
+        if outcome.problems.is_empty() {
+            result.watches = check::watches(model, combination, &result);
+            outcome.result = Some(result);
+        }
         outcome
     }
 
@@ -228,13 +230,15 @@ impl Solving<'_> {
         }
         result.residuals = result.residuals.worse(residuals);
         // The proof has had the split of least size.
+        let holds = self
+            .model
+            .assembly
+            .iter()
+            .flat_map(|assembly| &assembly.holds);
+        let points: Vec<usize> = holds.flat_map(|hold| hold.points.iter().copied()).collect();
         for row in solution.undecided {
-            let hold = &mut result.holds[row];
-            hold.reaction = None;
-            let mut points = result.points.iter_mut();
-            if let Some(point) = points.find(|point| point.name == hold.point) {
-                point.reaction = None;
-            }
+            result.holds[row].reaction = None;
+            result.points[points[row]].reaction = None;
         }
     }
 }
