@@ -154,7 +154,9 @@ fn job(combinations: Vec<CombinationResult>) -> JobResult {
         range("H1.force_max", Unit::Newton, 144e3, 2, 84250.0, 0),
         range("H1.force_min", Unit::Newton, 140e3, 2, 81000.0, 0),
         range("lug.displacement.y", Unit::Metre, -0.0021, 0, -0.0065, 2),
+        range("left.displacement.y", Unit::Metre, 0.0, 0, 0.0, 0),
         range("left.reaction.y", Unit::Newton, 144e3, 2, 0.0, 1),
+        range("hold.1.reaction.y", Unit::Newton, 144e3, 2, 0.0, 1),
         range("beam.rotation", Unit::Radian, 0.0, 0, -0.0135, 2),
     ];
     JobResult {

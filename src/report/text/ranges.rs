@@ -2,11 +2,12 @@
 
 use super::column::Column;
 use super::table::Table;
-use super::words::title;
+use super::words::{title, wrapped};
 use super::{Layout, checks, largest, settled};
 use crate::model::Name;
 use crate::quantity::Style;
 use crate::result::{Envelope, JobResult, Unit};
+use std::collections::{HashMap, HashSet};
 use std::io::{self, Write};
 
 /// A result by its address with its largest and its least value and where they come from.
@@ -39,27 +40,86 @@ pub(super) fn write(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io
         return Ok(());
     }
     let style = layout.style(job);
-    let (reactions, rest): (Vec<Range>, Vec<Range>) = ranges(&job.envelope)
+    let said_by_hold = points_of_one_hold(job);
+    let is_said = |range: &Range| {
+        let point = range.of.rsplit_once(REACTION).map(|(point, _)| point);
+        point.is_some_and(|point| said_by_hold.contains(point))
+    };
+    let mut ranges = ranges(&job.envelope);
+    ranges.retain(|range| !is_said(range));
+    let (reactions, rest): (Vec<Range>, Vec<Range>) = ranges
         .into_iter()
         .partition(|range| range.unit == Unit::Newton && !range.of.ends_with(FORCE));
     let (forces, movements): (Vec<Range>, Vec<Range>) = rest
         .into_iter()
         .partition(|range| range.unit == Unit::Newton);
-    for (heading, rows) in [
+    let mut left_out = 0;
+    for (heading, mut rows) in [
         ("Reactions over all combinations", reactions),
         ("Member forces N over all combinations", forces),
         ("Movements over all combinations", movements),
     ] {
+        let scales = Scales::of(&rows);
+        let all = rows.len();
+        rows.retain(|row| !scales.is_nothing(row));
+        left_out += all - rows.len();
         if rows.is_empty() {
             continue;
         }
         writeln!(out)?;
         title(out, heading, '-', layout.width)?;
-        table(&rows, &style).write(out, layout)?;
+        table(&rows, &scales, &style).write(out, layout)?;
+    }
+    if left_out > 0 {
+        let text = format!(
+            "Left out: {left_out} that are 0 in every combination. The CSV table `envelope` holds them all."
+        );
+        writeln!(out)?;
+        wrapped(out, "", &text, layout.width)?;
     }
     Ok(())
 }
 
+/// The points that one hold holds: what all holds together put on them is what that one does, and
+/// its own rows say it.
+fn points_of_one_hold(job: &JobResult) -> HashSet<&str> {
+    let mut times: HashMap<&str, usize> = HashMap::new();
+    let first = job.combinations.first();
+    for hold in first.iter().flat_map(|combination| &combination.holds) {
+        *times.entry(&hold.point).or_default() += 1;
+    }
+    let once = times.into_iter().filter(|&(_, times)| times == 1);
+    once.map(|(point, _)| point).collect()
+}
+
+/// The largest size of each unit in a table, beside which rounding shows as 0.
+struct Scales([(Unit, f64); 3]);
+
+impl Scales {
+    fn of(rows: &[Range]) -> Self {
+        let scale = |unit: Unit| {
+            let same = rows.iter().filter(move |row| row.unit == unit);
+            largest(same.flat_map(|row| [row.most, row.least]).flatten())
+        };
+        Scales([Unit::Newton, Unit::Metre, Unit::Radian].map(|unit| (unit, scale(unit))))
+    }
+
+    fn settled(&self, value: f64, unit: Unit) -> f64 {
+        let scale = self.0.iter().find(|(known, _)| *known == unit);
+        settled(value, scale.map_or(0.0, |scale| scale.1))
+    }
+
+    /// Whether a row is 0 in every combination.
+    fn is_nothing(&self, row: &Range) -> bool {
+        [row.most, row.least]
+            .iter()
+            .all(|value| value.is_some_and(|value| self.settled(value, row.unit) == 0.0))
+    }
+}
+
+/// Of a watch.
+const VALUE: &str = ".value";
+const REACTION: &str = ".reaction.";
 const FORCE: &str = ".force_max";
 
 /// The rows of the envelope; the largest and the least force of a member come together.
@@ -82,28 +142,23 @@ fn is_least_of(address: &str, largest: &str) -> bool {
     member.is_some() && member == address.strip_suffix(".force_min")
 }
 
-fn table(rows: &[Range], style: &Style) -> Table {
-    let scale = |unit: Unit| {
-        let same = rows.iter().filter(move |row| row.unit == unit);
-        largest(same.flat_map(|row| [row.most, row.least]).flatten())
-    };
-    let scales = [Unit::Newton, Unit::Metre, Unit::Radian].map(|unit| (unit, scale(unit)));
+/// An address without the quantity that its table's heading names.
+fn shown(address: &str) -> &str {
+    let of_member = address.strip_suffix(FORCE);
+    of_member
+        .or_else(|| address.strip_suffix(VALUE))
+        .unwrap_or(address)
+}
+
+fn table(rows: &[Range], scales: &Scales, style: &Style) -> Table {
     let value = |value: Option<f64>, unit: Unit| match value {
-        Some(value) => {
-            let scale = scales.iter().find(|(known, _)| *known == unit);
-            checks::value(
-                style,
-                unit,
-                settled(value, scale.map_or(0.0, |scale| scale.1)),
-            )
-        }
+        Some(value) => checks::value(style, unit, scales.settled(value, unit)),
         None => "undecided".to_owned(),
     };
     let name = |name: Option<&Name>| name.map_or(String::new(), |name| name.to_string());
     Table::of([Column::names(
         "result",
-        rows.iter()
-            .map(|row| row.of.strip_suffix(FORCE).unwrap_or(row.of)),
+        rows.iter().map(|row| shown(row.of)),
     )])
     .block([
         Column::number(

@@ -405,6 +405,14 @@ result  largest  in combination      least  in combination  unit
 ----------------------------------------------------------------
 H1        144.0  service/without=H2  81.00  service         kN";
     assert_eq!(block(&text, "result  largest"), force);
+    // One hold holds the point `left`: its row says what the point's would.
+    assert!(text.contains("\nhold.1.reaction.y "), "{text}");
+    assert!(!text.contains("left.reaction.y"), "{text}");
+    assert!(!text.contains("left.displacement.y"), "{text}");
+    assert!(
+        text.contains("\nLeft out: 1 that are 0 in every combination."),
+        "{text}"
+    );
     let mut single = sample::assembly::plane();
     single.combinations.truncate(1);
     assert!(!whole(&single, &PAGE).contains("over all combinations"));
