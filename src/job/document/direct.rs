@@ -1,6 +1,6 @@
 //! The tree straight from what the parser sees.
 
-use super::{Content, Entry, Key, Table, Value, float, whole};
+use super::{Content, Entry, Key, MANY, Table, Value, float, position, whole};
 use crate::model::Place;
 use std::borrow::Cow;
 use std::vec::Drain;
@@ -8,15 +8,12 @@ use toml_parser::decoder::{Encoding, ScalarKind};
 use toml_parser::parser::{EventReceiver, parse_document};
 use toml_parser::{ErrorSink, ParseError, Raw, Source, Span};
 
-/// A table of more keys is left to `toml`, whose search in it is the quicker one.
-const MOST_KEYS: usize = 1024;
-
 /// What is nested deeper is left to `toml`, which knows where to stop.
 const DEEPEST: usize = 16;
 
 /// The tree of a text without faults. There is none where anything is wrong with the text, nor of
-/// what is rare in jobs: keys with dots, a header after those of the tables in its own, very large
-/// tables, deep nesting.
+/// what is rare in jobs: keys with dots, a header after those of the tables in its own, deep
+/// nesting.
 pub(in crate::job) fn direct(text: &str) -> Option<Table<'_>> {
     let tokens = Source::new(text).lex().into_vec();
     let mut tree = Tree::new(text);
@@ -109,8 +106,9 @@ impl<'t> Tree<'t> {
         if self.given_up {
             return; // the header may be of any depth
         }
-        let table = Table {
-            entries: self.entries.drain(..).collect(),
+        let Some(table) = Table::of(self.entries.drain(..).collect()) else {
+            self.given_up = true;
+            return;
         };
         match self.header.take() {
             None => self.root = table,
@@ -144,9 +142,11 @@ impl<'t> Tree<'t> {
             return;
         };
         let content = if open.is_table {
-            Content::Table(Table {
-                entries: self.entries.drain(open.first..).collect(),
-            })
+            let Some(table) = Table::of(self.entries.drain(open.first..).collect()) else {
+                self.given_up = true;
+                return;
+            };
+            Content::Table(table)
         } else {
             Content::Array(self.values.drain(open.first..).collect())
         };
@@ -168,7 +168,8 @@ impl<'t> Tree<'t> {
             return;
         };
         let table = &self.entries[first..];
-        self.given_up |= table.len() == MOST_KEYS || position(table, &key.name).is_some();
+        // Among many a key that stands twice is found when the table is complete.
+        self.given_up |= table.len() < MANY && position(table, &key.name).is_some();
         if !self.given_up {
             self.entries.push(Entry { key, value });
         }
@@ -280,12 +281,17 @@ impl<'t> Table<'t> {
             content: Content::Table(table),
             place: place.clone(),
         };
-        match position(&above.entries, &key.name) {
+        match above.position(&key.name) {
             None if is_array => {
                 let content = Content::Array(vec![value]);
-                above.push(key, Value { content, place })
+                let value = Value { content, place };
+                above.push(Entry { key, value });
+                Some(())
             }
-            None => above.push(key, value),
+            None => {
+                above.push(Entry { key, value });
+                Some(())
+            }
             Some(at) if is_array => match above.entries[at].under_a_header()? {
                 Content::Array(tables) => {
                     tables.push(value);
@@ -299,14 +305,14 @@ impl<'t> Table<'t> {
 
     /// The table that a key on the way to another table stands for.
     fn below(&mut self, key: Key<'t>) -> Option<&mut Table<'t>> {
-        let at = match position(&self.entries, &key.name) {
+        let at = match self.position(&key.name) {
             Some(at) => at,
             None => {
                 let value = Value {
                     content: Content::Table(Table::default()),
                     place: key.place.clone(),
                 };
-                self.push(key, value)?;
+                self.push(Entry { key, value });
                 self.entries.len() - 1
             }
         };
@@ -319,12 +325,6 @@ impl<'t> Table<'t> {
             _ => None,
         }
     }
-
-    /// Adds a key that is not there; none where too many are.
-    fn push(&mut self, key: Key<'t>, value: Value<'t>) -> Option<()> {
-        let fits = self.entries.len() < MOST_KEYS;
-        fits.then(|| self.entries.push(Entry { key, value }))
-    }
 }
 
 impl<'t> Entry<'t> {
@@ -333,11 +333,6 @@ impl<'t> Entry<'t> {
     fn under_a_header(&mut self) -> Option<&mut Content<'t>> {
         (self.value.place.start <= self.key.place.start).then_some(&mut self.value.content)
     }
-}
-
-/// Where a key stands among others; one that was written of late is found first.
-fn position(entries: &[Entry<'_>], name: &str) -> Option<usize> {
-    entries.iter().rposition(|entry| entry.key.name == name)
 }
 
 /// Whether a text has neither backslashes nor control characters but line feeds. No byte ends the

@@ -12,6 +12,8 @@ pub(super) mod tests;
 
 use crate::model::Place;
 use std::borrow::Cow;
+use std::collections::HashMap;
+use std::fmt;
 use toml::value::Datetime;
 
 pub(super) use direct::direct;
@@ -38,10 +40,17 @@ pub(crate) enum Content<'t> {
 }
 
 /// The entries of a table in the order of the text; no key stands twice.
-#[derive(Debug, Clone, Default)]
+#[derive(Clone, Default)]
 pub(crate) struct Table<'t> {
     entries: Vec<Entry<'t>>,
+    /// Where each key stands among the entries, in a table of many.
+    positions: Option<Box<Positions<'t>>>,
 }
+
+type Positions<'t> = HashMap<Cow<'t, str>, usize>;
+
+/// In a table of fewer entries than this a key is found by looking through them.
+const MANY: usize = 64;
 
 /// One key of a table and its value.
 #[derive(Debug, Clone)]
@@ -55,6 +64,12 @@ struct Entry<'t> {
 pub(crate) struct Key<'t> {
     name: Cow<'t, str>,
     place: Place,
+}
+
+impl fmt::Debug for Table<'_> {
+    fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
+        f.debug_list().entries(&self.entries).finish()
+    }
 }
 
 impl<'t> Value<'t> {
@@ -102,6 +117,41 @@ impl<'t> Content<'t> {
 }
 
 impl<'t> Table<'t> {
+    /// The table of these entries; none where many are given and a key stands twice among them.
+    fn of(entries: Vec<Entry<'t>>) -> Option<Self> {
+        if entries.len() < MANY {
+            let positions = None;
+            return Some(Table { entries, positions });
+        }
+        let names = entries.iter().map(|entry| entry.key.name.clone());
+        let positions: Positions = names.zip(0..).collect();
+        let differ = positions.len() == entries.len();
+        differ.then(|| Table {
+            entries,
+            positions: Some(Box::new(positions)),
+        })
+    }
+
+    /// Adds an entry whose key is not there.
+    fn push(&mut self, entry: Entry<'t>) {
+        if let Some(positions) = &mut self.positions {
+            positions.insert(entry.key.name.clone(), self.entries.len());
+        }
+        self.entries.push(entry);
+        if self.positions.is_none() && self.entries.len() == MANY {
+            let names = self.entries.iter().map(|entry| entry.key.name.clone());
+            self.positions = Some(Box::new(names.zip(0..).collect()));
+        }
+    }
+
+    /// Where a key stands among the entries.
+    fn position(&self, name: &str) -> Option<usize> {
+        match &self.positions {
+            Some(positions) => positions.get(name).copied(),
+            None => position(&self.entries, name),
+        }
+    }
+
     /// The value of a key.
     pub(crate) fn get(&self, key: &str) -> Option<&Value<'t>> {
         self.get_key_value(key).map(|(_, value)| value)
@@ -109,7 +159,8 @@ impl<'t> Table<'t> {
 
     /// A key and its value.
     pub(crate) fn get_key_value(&self, key: &str) -> Option<(&Key<'t>, &Value<'t>)> {
-        self.iter().find(|(there, _)| there.name == key)
+        let entry = &self.entries[self.position(key)?];
+        Some((&entry.key, &entry.value))
     }
 
     /// Whether a key is there.
@@ -136,6 +187,11 @@ impl<'t> Table<'t> {
     pub(crate) fn is_empty(&self) -> bool {
         self.entries.is_empty()
     }
+}
+
+/// Where a key stands among others; one that was written of late is found first.
+fn position(entries: &[Entry<'_>], name: &str) -> Option<usize> {
+    entries.iter().rposition(|entry| entry.key.name == name)
 }
 
 /// A whole number by its digits, without a sign where the radix is not 10.

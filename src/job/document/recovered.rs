@@ -17,7 +17,8 @@ pub(in crate::job) fn recovered<'t>(table: DeTable<'t>) -> Table<'t> {
         })
         .collect();
     entries.sort_by_key(|entry| entry.key.place.start);
-    Table { entries }
+    let positions = None;
+    Table { entries, positions }
 }
 
 fn value<'t>(value: Spanned<DeValue<'t>>) -> Value<'t> {

@@ -67,19 +67,54 @@ fn what_is_ordinary_is_read_directly() {
     }
 }
 
+/// Keys of a large table are found by another way than those of a small one.
+#[test]
+fn large_tables_are_read_directly() {
+    for count in [63, 64, 65, 1100] {
+        let keys: String = (0..count).map(|key| format!("k{key} = 1\n")).collect();
+        let inner: Vec<String> = (0..count).map(|key| format!("k{key} = 1")).collect();
+        let inner = format!("a = {{ {} }}", inner.join(", "));
+        let headers: String = (0..count).map(|key| format!("[a.k{key}]\n")).collect();
+        let lists: String = (0..count)
+            .map(|key| format!("[[a.k{}]]\nb = {key}\n", key % 70))
+            .collect();
+        for text in [&keys, &inner, &headers, &lists] {
+            assert!(is_direct(text), "left to toml: {count}");
+        }
+        for text in [&keys, &inner, &lists] {
+            let again = format!("{text}\n[a]\nk0 = 1\nk0 = 2");
+            assert!(!is_direct(&again), "a fault is taken: {count}");
+        }
+        let twice = format!("{keys}k1 = 2\n");
+        assert!(
+            !is_direct(&twice),
+            "a key that stands twice is taken: {count}"
+        );
+        let twice = inner.replacen("k2 =", "k1 =", 1);
+        assert!(
+            !is_direct(&twice),
+            "a key that stands twice is taken: {count}"
+        );
+        let twice: String = (0..count)
+            .chain([1])
+            .map(|key| format!("[a.k{key}]\n"))
+            .collect();
+        assert!(
+            !is_direct(&twice),
+            "a header that stands twice is taken: {count}"
+        );
+    }
+}
+
 /// What is sound but left to `toml`; that it is left proves that the limits are looked at.
 #[test]
 fn what_is_unusual_is_left() {
-    let many: String = (0..1100).map(|key| format!("k{key} = 1\n")).collect();
-    let headers: String = (0..1100).map(|key| format!("[a.k{key}]\n")).collect();
     let deep = format!("a = {}{}", "[".repeat(20), "]".repeat(20));
     for text in [
         "a.b = 1\na.c = 2",
         "a = { b.c = 1 }",
         "[a.b]\n[a]\nc = 1",
         "[[a.b]]\n[a]\nc = 1",
-        &many,
-        &headers,
         &deep,
         &format!("[{}a]", "a.".repeat(20)),
         &format!("[{}a]\n[b]", "a.".repeat(70)),
