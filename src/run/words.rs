@@ -71,6 +71,12 @@ pub(super) fn unsolved(
             ),
             "mend the movements, or make one of the holds a `spring` (a stop: with `stiffness`)",
         ),
+        SolveError::Unsettled { parts } => (
+            format!(
+                "in `{name}` the states (taut or slack, bearing or open) of {parts} one-way members and stops hang on each other and were not found"
+            ),
+            "give rigid stops among them a `stiffness`, or check the parts of the assembly in jobs of their own",
+        ),
         SolveError::OutOfRange { .. } | SolveError::PointOutOfRange { .. } => (
             format!("in `{name}`: {error}"),
             "look for a value that is too large or too small by many powers of ten",
@@ -121,6 +127,7 @@ fn place_of<'m>(error: &SolveError, model: &'m Model) -> Option<&'m Place> {
             found.map(|member| &member.place)
         }
         SolveError::Unstable { motion } => motion.place(model),
+        SolveError::Unsettled { .. } => None,
         SolveError::HoldsContradict { holds, .. } => {
             let first = holds.first()?;
             let found = assembly?.holds.iter().find(|hold| hold.name == *first);

@@ -58,6 +58,14 @@ pub enum SolveError {
         /// Members whose rigid gaps close between them.
         members: Vec<Name>,
     },
+    /// Too many one-way parts of an assembly whose states hang on each other.
+    #[error(
+        "the states of {parts} one-way parts of the assembly hang on each other and were not found"
+    )]
+    Unsettled {
+        /// How many.
+        parts: usize,
+    },
     /// A number of an assembly ran out of the range of double precision.
     #[error("point `{point}` comes to numbers beyond the range of double precision")]
     PointOutOfRange {

@@ -210,6 +210,7 @@ fn explain(
         system::Failure::Pushed { motion, .. } => SolveError::Unstable {
             motion: free::motion(model, assembly, unknowns, parts, &motion),
         },
+        system::Failure::Unsettled { parts } => SolveError::Unsettled { parts },
         system::Failure::Contradiction { rigid, one_way } => {
             let (mut holds, mut bodies, mut members) = (Vec::new(), Vec::new(), Vec::new());
             let keep = |list: &mut Vec<_>, name: &crate::model::Name| {

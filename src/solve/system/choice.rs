@@ -136,7 +136,9 @@ pub(super) fn amounts(
                 .and_then(|&first| blocks.get(first));
             Err(of.copied().unwrap_or(0))
         }
-        Err(super::Failure::Pushed { .. }) => Err(blocks.first().copied().unwrap_or(0)),
+        Err(super::Failure::Pushed { .. } | super::Failure::Unsettled { .. }) => {
+            Err(blocks.first().copied().unwrap_or(0))
+        }
     }
 }
 

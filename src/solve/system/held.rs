@@ -237,6 +237,13 @@ impl Held {
             .collect()
     }
 
+    /// Whether the loads push along a free motion.
+    pub(super) fn is_pushed(&self, loads: &Loads) -> bool {
+        let zero = loads.zero.force.value;
+        let mut motions = self.motions.iter();
+        motions.any(|motion| work(motion, loads).abs() > zero)
+    }
+
     /// Of the free motions that are pushed the mixture that is pushed most, for its size.
     pub(super) fn pushed_motion(&self, loads: &Loads) -> Row {
         // The forces less what is square to all motions: a projection on a basis made square.

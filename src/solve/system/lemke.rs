@@ -14,6 +14,9 @@ const NOTHING: f64 = 1e-11;
 /// below this part of the largest constant.
 const SAME: f64 = 1e-12;
 
+/// So many coefficients are worked on at most, in about half a minute.
+const WORK: usize = 30_000_000_000;
+
 /// Where the path ends.
 pub(super) enum End {
     /// At a solution: by pair, whether z is the one that is more than 0.
@@ -23,6 +26,8 @@ pub(super) enum End {
         direction: Vec<f64>,
         pairs: Vec<bool>,
     },
+    /// Nowhere in sensible time.
+    Stopped,
 }
 
 /// The table in work: row i says basic i = constant i + Σ coefficient × other.
@@ -50,7 +55,11 @@ pub(super) fn complement(coefficients: &[f64], constants: &[f64], cover: usize) 
     let mut row = table.most_negative();
     let mut column = size;
     // Each step meets another pair of states; far fewer are seen than this in practice.
-    for _ in 0..200 + 50 * size {
+    let steps = 200 + 50 * size;
+    for step in 0..steps {
+        if step * size * size > WORK {
+            return End::Stopped;
+        }
         let left = table.basic[row];
         table.exchange(row, column);
         if left == cover {

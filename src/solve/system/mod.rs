@@ -9,12 +9,14 @@
 
 mod choice;
 mod dense;
+mod descent;
 mod factor;
 mod held;
 mod lemke;
 mod order;
 mod prepared;
 mod rigid;
+mod search;
 mod singular;
 mod sparse;
 mod split;
@@ -135,5 +137,11 @@ pub(super) enum Failure {
         rigid: Vec<usize>,
         /// Indices of the rigid one-way parts.
         one_way: Vec<usize>,
+    },
+    /// The states of so many one-way parts are in question at once that the exact method would take
+    /// too long, or rounding leaves them open.
+    Unsettled {
+        /// How many.
+        parts: usize,
     },
 }

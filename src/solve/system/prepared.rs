@@ -2,12 +2,12 @@
 //!
 //! States that were found before, or the base itself, are tried first: the energy is convex, so that
 //! states whose signs all hold are the answer, whatever they were guessed from. Otherwise they are
-//! found along Lemke's path and checked in the same way.
+//! searched for (`search`) and checked in the same way.
 
 use super::choice::{amounts, tipping};
 use super::held::{Held, Part, Settled, stretch};
 use super::split::{Split, split};
-use super::tableau::{Found, Tableau, work};
+use super::tableau::{Tableau, work};
 use super::{Answer, Failure, FreeMotion, Loads, Row, System};
 use crate::quantity::from_si;
 
@@ -17,14 +17,14 @@ const KEPT: usize = 8;
 /// A system made ready for loads: what depends on it alone is done once.
 #[derive(Debug, Clone)]
 pub(in crate::solve) struct Prepared {
-    system: System,
+    pub(super) system: System,
     /// The base first, then states that were met.
-    states: Vec<Held>,
+    pub(super) states: Vec<Held>,
     /// The states that stood last.
     last: usize,
     /// The one to make room next.
     oldest: usize,
-    tableau: Option<Tableau>,
+    pub(super) tableau: Option<Tableau>,
 }
 
 /// States that stand, and all in them that is decided.
@@ -37,7 +37,7 @@ pub(super) struct Standing {
 }
 
 /// What a set of states comes to.
-enum Verdict {
+pub(super) enum Verdict {
     Stands(Standing),
     /// All signs hold, but these act without a force.
     Touching(Standing, Vec<usize>),
@@ -104,67 +104,13 @@ impl Prepared {
         }
     }
 
-    /// Finds the states along the path, and mends what rounding may have left in them.
-    fn search(&mut self, loads: &Loads) -> Result<Standing, Failure> {
-        let base = &self.states[0];
-        let settled = base
-            .settle(&self.system, loads)
-            .map_err(|parts| contradiction(&parts))?;
-        let tableau = self
-            .tableau
-            .get_or_insert_with(|| Tableau::of(&self.system, base));
-        let mut acts = match tableau.states(&self.system, base, &settled, loads) {
-            Found::States(acts) => acts,
-            Found::Motion(motion) => return Err(pushed(motion, loads)),
-            Found::Contradiction(parts) => return Err(contradiction(&parts)),
-        };
-        let mut last = Failure::Contradiction {
-            rigid: Vec::new(),
-            one_way: Vec::new(),
-        };
-        for _ in 0..2 + 2 * acts.len() {
-            let held = self.keep(acts.clone());
-            match self.judge(held, loads) {
-                Verdict::Stands(standing) => return Ok(standing),
-                Verdict::Touching(standing, touching) => {
-                    return Ok(self.let_go(standing, &touching, loads));
-                }
-                Verdict::Falls(part) => acts[part] = !acts[part],
-                Verdict::Contradiction(parts) => {
-                    last = contradiction(&parts);
-                    break;
-                }
-                Verdict::Pushed(motion) => {
-                    let stops = self.first_to_stop(&acts, &motion);
-                    last = pushed(motion, loads);
-                    match stops {
-                        Some(part) => acts[part] = true,
-                        None => break,
-                    }
-                }
-            }
-        }
-        Err(last)
-    }
-
-    /// An open part that a motion stretches, the most stretched one.
-    fn first_to_stop(&self, acts: &[bool], motion: &[(usize, f64)]) -> Option<usize> {
-        let mut dense = vec![0.0; self.system.places.len()];
-        for &(unknown, share) in motion {
-            dense[unknown] = share;
-        }
-        let mut most = (None, 1e-9);
-        for (part, one_way) in self.system.one_way.iter().enumerate() {
-            let along: f64 = one_way.row.iter().map(|&(u, b)| b * dense[u]).sum();
-            if !acts[part] && along > most.1 {
-                most = (Some(part), along);
-            }
-        }
-        most.0
-    }
-
     /// Takes parts that touch without force out of the acting ones.
-    fn let_go(&mut self, standing: Standing, touching: &[usize], loads: &Loads) -> Standing {
+    pub(super) fn let_go(
+        &mut self,
+        standing: Standing,
+        touching: &[usize],
+        loads: &Loads,
+    ) -> Standing {
         let mut acts = self.states[standing.held].acts.clone();
         for &part in touching {
             acts[part] = false;
@@ -178,11 +124,22 @@ impl Prepared {
     }
 
     /// The place of a set of states among those kept; factored when it is new.
-    fn keep(&mut self, acts: Vec<bool>) -> usize {
-        if let Some(known) = self.states.iter().position(|held| held.acts == acts) {
+    pub(super) fn keep(&mut self, acts: Vec<bool>) -> usize {
+        match self.known(&acts) {
+            Some(known) => known,
+            None => self.keep_held(Held::of(&self.system, acts)),
+        }
+    }
+
+    fn known(&self, acts: &[bool]) -> Option<usize> {
+        self.states.iter().position(|held| held.acts == acts)
+    }
+
+    /// The same for a set that is factored already.
+    pub(super) fn keep_held(&mut self, held: Held) -> usize {
+        if let Some(known) = self.known(&held.acts) {
             return known;
         }
-        let held = Held::of(&self.system, acts);
         if self.states.len() <= KEPT {
             self.states.push(held);
             return self.states.len() - 1;
@@ -192,18 +149,14 @@ impl Prepared {
         self.oldest
     }
 
-    fn judge(&mut self, index: usize, loads: &Loads) -> Verdict {
+    pub(super) fn judge(&mut self, index: usize, loads: &Loads) -> Verdict {
         let held = &self.states[index];
         let mut settled = match held.settle(&self.system, loads) {
             Ok(settled) => settled,
             Err(parts) => return Verdict::Contradiction(parts),
         };
         let zero = loads.zero.force.value;
-        if held
-            .motions
-            .iter()
-            .any(|motion| work(motion, loads).abs() > zero)
-        {
+        if held.is_pushed(loads) {
             return Verdict::Pushed(held.pushed_motion(loads));
         }
         let mut touching = Vec::new();
@@ -268,7 +221,7 @@ impl Prepared {
         }
     }
 
-    fn answer(&self, standing: Standing, loads: &Loads) -> Answer {
+    pub(super) fn answer(&self, standing: Standing, loads: &Loads) -> Answer {
         let held = &self.states[standing.held];
         let mut settled = standing.settled;
         let mut acts = held.acts.clone();
@@ -313,14 +266,14 @@ impl Prepared {
     }
 }
 
-fn pushed(motion: Row, loads: &Loads) -> Failure {
+pub(super) fn pushed(motion: Row, loads: &Loads) -> Failure {
     Failure::Pushed {
         force: from_si(work(&motion, loads)),
         motion,
     }
 }
 
-fn contradiction(parts: &[Part]) -> Failure {
+pub(super) fn contradiction(parts: &[Part]) -> Failure {
     let (mut rigid, mut one_way) = (Vec::new(), Vec::new());
     for &part in parts {
         match part {

@@ -10,6 +10,7 @@ use super::held::{Held, Part, Settled, stretch};
 use super::lemke::{End, complement};
 use super::{Loads, Row, System};
 use crate::quantity::{Length, from_si};
+use std::collections::HashSet;
 
 /// An own answer that counts as none beside the part's stiffness.
 const NOTHING: f64 = 1e-12;
@@ -20,9 +21,11 @@ const NOISE: f64 = 1e-9;
 /// So many covers are tried where the path of one ends in rounding.
 const COVERS: usize = 4;
 
-/// The answers of one-way parts to each other.
-#[derive(Debug, Clone)]
+/// The answers of one-way parts to each other: of those whose states came into question, the others
+/// stay as they are in the base.
+#[derive(Debug, Clone, Default)]
 pub(super) struct Tableau {
+    parts: Vec<usize>,
     /// By rows, scaled on both sides to diagonals of about 1.
     coefficients: Vec<f64>,
     scale: Vec<f64>,
@@ -36,58 +39,113 @@ pub(super) enum Found {
     Motion(Row),
     /// These rigid parts contradict each other.
     Contradiction(Vec<Part>),
+    /// It would take too long.
+    Nothing,
 }
 
 impl Tableau {
-    pub(super) fn of(system: &System, base: &Held) -> Self {
-        let parts = system.one_way.len();
+    /// Whether all of these are in it.
+    pub(super) fn holds(&self, parts: &[usize]) -> bool {
+        self.with(parts) == self.parts.len()
+    }
+
+    /// How many it has with these.
+    pub(super) fn with(&self, parts: &[usize]) -> usize {
+        self.parts.len() + self.missing(parts).len()
+    }
+
+    fn missing(&self, parts: &[usize]) -> Vec<usize> {
+        let known: HashSet<usize> = self.parts.iter().copied().collect();
+        let mut missing = parts.to_vec();
+        missing.retain(|part| !known.contains(part));
+        missing.sort_unstable();
+        missing.dedup();
+        missing
+    }
+
+    /// Extends it by parts.
+    pub(super) fn take_in(&mut self, system: &System, base: &Held, parts: &[usize]) {
+        let before = self.parts.len();
+        self.parts.append(&mut self.missing(parts));
+        let size = self.parts.len();
+        if size == before {
+            return;
+        }
+        let mut coefficients = vec![0.0; size * size];
+        for (old, new) in self
+            .coefficients
+            .chunks_exact(before.max(1))
+            .zip(coefficients.chunks_exact_mut(size))
+        {
+            new[..before].copy_from_slice(old);
+        }
         let typical = typical_stiffness(system);
-        let mut coefficients = vec![0.0; parts * parts];
-        for part in 0..parts {
-            let mut unit = no_loads(system);
+        let mut unit = no_loads(system);
+        for column in before..size {
+            let part = self.parts[column];
             apply(system, base, part, 1.0, &mut unit);
             // Unit loads contradict nothing: what is left out keeps nothing, and the base has no
             // one-way part that depends on others.
-            let Ok(settled) = base.settle(system, &unit) else {
-                continue;
-            };
-            for (other, answer) in answers(system, base, &settled, &unit)
-                .into_iter()
-                .enumerate()
-            {
-                coefficients[other * parts + part] = answer;
-            }
-        }
-        let scale: Vec<f64> = (0..parts)
-            .map(|part| {
-                let own = coefficients[part * parts + part];
-                let stiffness = system.one_way[part].stiffness.map(|k| k.value);
-                if base.acts[part] {
-                    let least = stiffness.unwrap_or(typical);
-                    if own > NOTHING * least { own } else { least }
-                        .sqrt()
-                        .recip()
-                } else if own > 0.0 && !base.keeps(&system.one_way[part].row) {
-                    own.sqrt().recip()
-                } else {
-                    typical.sqrt()
-                }
-            })
-            .collect();
-        for (index, coefficient) in coefficients.iter_mut().enumerate() {
-            *coefficient *= scale[index / parts] * scale[index % parts];
-        }
-        for part in (0..parts).filter(|&part| !base.acts[part]) {
-            if base.keeps(&system.one_way[part].row) {
-                for other in (0..parts).filter(|&other| !base.acts[other]) {
-                    coefficients[part * parts + other] = 0.0;
-                    coefficients[other * parts + part] = 0.0;
+            let settled = base.settle(system, &unit).ok();
+            apply(system, base, part, -1.0, &mut unit);
+            let mut own = 0.0;
+            if let Some(settled) = settled {
+                for (row, &other) in self.parts.iter().enumerate() {
+                    let mut along = answer(system, base, &settled, other, 0.0);
+                    if row == column {
+                        own = along;
+                    }
+                    if row < before {
+                        along *= self.scale[row];
+                        // The answers of two parts to each other are the same; a force to a slack
+                        // and a clearance to a force turn.
+                        let turned = base.acts[part] != base.acts[other];
+                        coefficients[column * size + row] = if turned { -along } else { along };
+                    }
+                    coefficients[row * size + column] = along;
                 }
             }
+            let kept = !base.acts[part] && base.keeps(&system.one_way[part].row);
+            let stiffness = system.one_way[part].stiffness.map(|k| k.value);
+            self.scale.push(if base.acts[part] {
+                let least = stiffness.unwrap_or(typical);
+                if own > NOTHING * least { own } else { least }
+                    .sqrt()
+                    .recip()
+            } else if own > 0.0 && !kept {
+                own.sqrt().recip()
+            } else {
+                typical.sqrt()
+            });
         }
-        Tableau {
-            coefficients,
-            scale,
+        for row in 0..size {
+            let from = if row < before { before } else { 0 };
+            let (of_row, rows) = (self.scale[row], &mut coefficients[row * size..][..size]);
+            for (column, coefficient) in rows.iter_mut().enumerate().skip(from) {
+                if row >= before {
+                    *coefficient *= of_row;
+                }
+                if column >= before {
+                    *coefficient *= self.scale[column];
+                }
+            }
+        }
+        self.coefficients = coefficients;
+        self.leave_out_kept(system, base, before);
+    }
+
+    /// Between open parts, one of which is kept whole by rigid parts, only rounding answers.
+    fn leave_out_kept(&mut self, system: &System, base: &Held, from: usize) {
+        let size = self.parts.len();
+        let open = |&place: &usize| !base.acts[self.parts[place]];
+        let open: Vec<usize> = (0..size).filter(open).collect();
+        for &place in open.iter().filter(|&&place| place >= from) {
+            if base.keeps(&system.one_way[self.parts[place]].row) {
+                for &other in &open {
+                    self.coefficients[place * size + other] = 0.0;
+                    self.coefficients[other * size + place] = 0.0;
+                }
+            }
         }
     }
 
@@ -99,10 +157,12 @@ impl Tableau {
         settled: &Settled,
         loads: &Loads,
     ) -> Found {
-        let constants: Vec<f64> = answers(system, base, settled, loads)
-            .into_iter()
-            .enumerate()
-            .map(|(part, answer)| {
+        let constants: Vec<f64> = self
+            .parts
+            .iter()
+            .zip(&self.scale)
+            .map(|(&part, scale)| {
+                let answer = answer(system, base, settled, part, loads.one_way_rest[part].value);
                 let zero = if base.acts[part] {
                     loads.zero.force.value
                 } else {
@@ -111,22 +171,29 @@ impl Tableau {
                 if answer.abs() <= zero {
                     0.0
                 } else {
-                    answer * self.scale[part]
+                    answer * scale
                 }
             })
             .collect();
         let acting = |pairs: Vec<bool>| {
-            let pairs = pairs.into_iter().zip(&base.acts);
-            pairs.map(|(given, &in_base)| given != in_base).collect()
+            let mut acts = base.acts.clone();
+            for (&part, given) in self.parts.iter().zip(pairs) {
+                acts[part] ^= given;
+            }
+            acts
         };
         let mut last = Vec::new();
         for cover in 0..COVERS {
             match complement(&self.coefficients, &constants, cover) {
                 End::Solved(pairs) => return Found::States(acting(pairs)),
+                End::Stopped => return Found::Nothing,
                 End::Ray { direction, pairs } => {
-                    let scaled = direction.iter().zip(&self.scale);
-                    let given: Vec<f64> =
-                        scaled.map(|(direction, scale)| direction * scale).collect();
+                    let mut given = vec![0.0; base.acts.len()];
+                    for ((&part, along), scale) in
+                        self.parts.iter().zip(&direction).zip(&self.scale)
+                    {
+                        given[part] = along * scale;
+                    }
                     if let Some(proven) = ray(system, base, &given, loads) {
                         return proven;
                     }
@@ -191,19 +258,14 @@ pub(super) fn work(motion: &[(usize, f64)], loads: &Loads) -> f64 {
     motion.iter().map(on).sum()
 }
 
-/// The force of each part of the base, the clearance of each that is left out.
-fn answers(system: &System, base: &Held, settled: &Settled, loads: &Loads) -> Vec<f64> {
-    (0..system.one_way.len())
-        .map(|part| {
-            if base.acts[part] {
-                settled.one_way[part]
-            } else {
-                let row = &system.one_way[part].row;
-                let rest = loads.one_way_rest[part].value;
-                -stretch(row, &settled.displacements).plus(-rest).value()
-            }
-        })
-        .collect()
+/// The force of a part of the base, the clearance of one that is left out.
+fn answer(system: &System, base: &Held, settled: &Settled, part: usize, rest: f64) -> f64 {
+    if base.acts[part] {
+        settled.one_way[part]
+    } else {
+        let row = &system.one_way[part].row;
+        -stretch(row, &settled.displacements).plus(-rest).value()
+    }
 }
 
 /// A slack of a part of the base, or a force of one that is left out.

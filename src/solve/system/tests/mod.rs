@@ -5,8 +5,11 @@ mod certificate;
 mod draw;
 mod enumeration;
 mod extremes;
+mod many;
 
-use super::{Elastic, Loads, OneWay, Row, System};
+use super::prepared::Verdict;
+use super::tableau::Tableau;
+use super::{Answer, Elastic, Failure, Loads, OneWay, Prepared, Row, System};
 use crate::quantity::from_si;
 use crate::solve::threshold::Threshold;
 
@@ -93,4 +96,14 @@ impl Sketch {
         };
         self
     }
+}
+
+/// What the exact method alone comes to where the base does not stand.
+fn exactly(sketch: &Sketch) -> Result<Answer, Failure> {
+    let mut prepared = Prepared::of(sketch.system.clone());
+    if !matches!(prepared.judge(0, &sketch.loads), Verdict::Falls(_)) {
+        return prepared.solve(&sketch.loads);
+    }
+    let standing = prepared.search_exactly(&mut Tableau::default(), &sketch.loads)?;
+    Ok(prepared.answer(standing, &sketch.loads))
 }
