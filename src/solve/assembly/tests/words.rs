@@ -160,7 +160,7 @@ fn two_bodies_that_move_as_one_are_named_together() {
         .force("p", [1.0, 0.0, 0.0])
         .try_solve();
     // Each turns about its own head: not one motion of both.
-    let errors = pushed.err().expect("nothing holds p and q along x");
+    let errors = pushed.expect_err("nothing holds p and q along x");
     let [SolveError::Unstable { motion }] = &errors[..] else {
         panic!("{errors:?}");
     };
@@ -211,8 +211,7 @@ fn holds_that_are_moved_against_each_other_are_named() {
         .fixed("q", &[X])
         .movement([1e-3, 0.0, 0.0])
         .try_solve()
-        .err()
-        .expect("a contradiction");
+        .expect_err("a contradiction");
     let [SolveError::HoldsContradict { holds, .. }] = &errors[..] else {
         panic!("{errors:?}");
     };
