@@ -26,8 +26,13 @@ fn all_nearest<'c>(written: &str, candidates: impl IntoIterator<Item = &'c str>)
                 return None;
             }
             let distance = distance(&written_low, &low);
-            let shortest = length.min(candidate.chars().count());
-            (distance <= allowed && distance < shortest.max(2)).then_some((distance, candidate))
+            let (shortest, longest) = {
+                let other = low.chars().count();
+                (length.min(other), length.max(other))
+            };
+            // A word of which no letter is left is another word, also where it is short.
+            let near = distance <= allowed && distance < shortest.max(2) && distance < longest;
+            near.then_some((distance, candidate))
         })
         .collect();
     let least = near.iter().map(|(distance, _)| *distance).min();
@@ -47,8 +52,11 @@ pub(crate) fn remedy<'c>(
         [] => {}
         [one] => return Some(format!("`{one}` comes nearest")),
         several => {
-            let several = &several[..several.len().min(4)];
-            return Some(format!("`{}` come nearest", several.join("` and `")));
+            let (last, others) = several[..several.len().min(4)].split_last()?;
+            return Some(format!(
+                "`{}` and `{last}` come nearest",
+                others.join("`, `")
+            ));
         }
     }
     let mut few = candidates.into_iter();
@@ -105,5 +113,19 @@ mod tests {
         assert_eq!(nearest("sction", keys), Some("section")); // one left out
         assert_eq!(nearest("colour", keys), None); // another word
         assert_eq!(nearest("", keys), None);
+        assert_eq!(nearest("q", ["a", "b"]), None); // no letter left
+        assert_eq!(nearest("D", ["a", "d"]), Some("d"));
+        assert_eq!(nearest("aa", ["a", "d"]), Some("a"));
+    }
+
+    #[test]
+    fn those_that_come_equally_near_are_listed_and_else_all() {
+        let remedy = |written, names: &[&str]| {
+            super::remedy(written, names.iter().copied(), "the points are")
+        };
+        let said = remedy("p4", &["p1", "p2", "p3", "lug"]);
+        assert_eq!(said.as_deref(), Some("`p1`, `p2` and `p3` come nearest"));
+        let said = remedy("q", &["a", "b", "c"]);
+        assert_eq!(said.as_deref(), Some("the points are `a`, `b`, `c`"));
     }
 }

@@ -134,7 +134,7 @@ const ASSEMBLIES: &[(&str, &str, &str, &str)] = &[
         "a body on an unknown point",
         r#"points = ["a", "b"]"#,
         r#"points = ["a", "c"]"#,
-        "14:16 no point is called `c` | `a` and `b` come nearest",
+        "14:16 no point is called `c` | the points are `left`, `right`, `a`, `b`",
     ),
     (
         "a body of no points",
@@ -303,13 +303,13 @@ const SAID_OF_EVERY: &str = r#"4:5 the point `b` has one coordinate, and `a` has
 5:1 the body `beam` has a mass, and nothing says where | add `at` to the body: its centre of mass, one entry for each coordinate
 6:16 the point `a` stands twice in this body | take one out
 7:11 `kN` is a force; a mass is expected here | write it as in "320 kg"; units of a mass: kg g t lb
-9:17 no point is called `c` | `a` and `b` come nearest
+9:17 no point is called `c` | the points are `a`, `b`
 10:11 a member carries `tension` or `compression` alone, or both where `carries` is left out, not `both` | write one of `tension`, `compression`
 11:24 a number is expected before `rests` | a number is written as `2.85`, `1_250`, `28.5e6`, `5/8` or `1-1/2`
 12:1 a stop needs `along`, the direction that it blocks | add it with its sign: `along = ["+x"]`
-13:9 no point is called `d` | `a` and `b` come nearest
+13:9 no point is called `d` | the points are `a`, `b`
 16:8 no case is called `live` | the cases are `dead`
 17:8 no body is called `boom` | the bodies are `beam`
 20:11 no segment of this member is called `shank` | its segments are `1`
 21:1 a watch has no key `alnog` | `along` comes nearest
-23:14 no member is called `n` | `m` comes nearest"#;
+23:14 no member is called `n` | the members are `m`"#;

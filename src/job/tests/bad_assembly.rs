@@ -127,7 +127,7 @@ between = ["tt", "c"]
 segment = [{ length = "rest", section = { round = "20 mm" }, material = "steel-s355" }]
 "#,
         r#"6:12 no point is called `tt` | `t` comes nearest
-6:18 no point is called `c` | `a` and `b` and `t` come nearest"#,
+6:18 no point is called `c` | the points are `a`, `b`, `t`"#,
     ),
     (
         "points at one place",

@@ -173,7 +173,7 @@ segment = [{ name = "rod", length = "2 m", section = { round = "20 mm" }, materi
 [combination.x]
 factors = { b = 1, a = [] }
 without = ["H5"]"#,
-        r#"7:13 no case is called `b` | `a` comes nearest
+        r#"7:13 no case is called `b` | the cases are `a`
 7:24 this list of factors is empty | write the factors that are tried, such as `[0.0, 1.0]`
 8:12 no member is called `H5` | the members are `tie`"#,
     ),

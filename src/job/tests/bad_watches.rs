@@ -85,7 +85,7 @@ station = "m.5 m"
         r#"9:9 no point is called `aa` | `a` comes nearest
 10:15 no point is called `bb` | `b` comes nearest
 12:8 this job has no bodies, and so none called `c` | add `[body.c]`
-14:11 no member is called `n` | `m` comes nearest
+14:11 no member is called `n` | the members are `m`
 16:11 no segment of this member is called `shank` | its segments are `1`
 18:11 `m` is no station of a member | write the member, a dot and the station, as in "H4.end" or "H4.shank.end"
 20:11 this station lies outside the member, which is 2 m long | distances count from the member's start"#,
@@ -181,6 +181,6 @@ lose-each = ["n"]
 10:14 the member `m` stands in `without` and in `lose-each` | take one out
 12:13 this list names no member | name at least one member, or leave the key out
 14:11 a list of members is expected here, not a text | write them as in `["a", "b"]`, the members by their names
-16:14 no member is called `n` | `m` comes nearest"#,
+16:14 no member is called `n` | the members are `m`"#,
     ),
 ];

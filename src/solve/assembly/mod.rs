@@ -17,6 +17,7 @@ mod space;
 #[cfg(test)]
 mod tests;
 mod tie;
+mod twist;
 mod unknowns;
 
 pub use free::FreeMotion;

@@ -1,9 +1,9 @@
 //! Motions that nothing resists, in words: which body or point can move how.
 
-use super::space::{cross, dot, plus, size, times};
+use super::twist::{ROUNDING, Twist, common};
 use super::unknowns::Unknowns;
 use crate::model::{Assembly, Model, Place, Spatial};
-use crate::quantity::{Dimension, Length, Style, from_si};
+use crate::quantity::{Dimension, Length, Style};
 use crate::solve::system::Row;
 
 /// A motion of some of the bodies and points of an assembly.
@@ -52,69 +52,8 @@ pub enum Way {
     },
 }
 
-/// A velocity as of a stiff body: that of a place, and the rotation.
-#[derive(Debug, Clone, Copy)]
-struct Twist {
-    at: Spatial<f64>,
-    velocity: Spatial<f64>,
-    rotation: Spatial<f64>,
-}
-
-/// Shares of the largest movement below this are rounding.
-const ROUNDING: f64 = 1e-6;
-
 /// How many names a sentence holds.
 const NAMES: usize = 4;
-
-impl Twist {
-    fn velocity_of(&self, place: &Spatial<f64>) -> Spatial<f64> {
-        let arm = plus(place, -1.0, &self.at);
-        plus(&self.velocity, 1.0, &cross(&self.rotation, &arm))
-    }
-
-    /// The motion in words' terms; `points` are looked through for some that stay where they are,
-    /// and `length` is that over which a rotation counts.
-    fn way(&self, assembly: &Assembly, points: impl Iterator<Item = usize>, length: f64) -> Way {
-        let turning = size(&self.rotation);
-        let moving = size(&self.velocity);
-        if turning * length <= ROUNDING * moving.max(turning * length).max(f64::MIN_POSITIVE) {
-            return Way::Along(upward(&times(
-                1.0 / moving.max(f64::MIN_POSITIVE),
-                &self.velocity,
-            )));
-        }
-        let axis = times(1.0 / turning, &self.rotation);
-        let pitch = dot(&axis, &self.velocity);
-        let aside = plus(&self.velocity, -pitch, &axis);
-        let through = plus(&self.at, 1.0 / turning, &cross(&axis, &aside));
-        let on_axis = |&point: &usize| {
-            let place = assembly.points[point].at.map(|entry| entry.value);
-            let away = plus(&place, -1.0, &through);
-            size(&cross(&axis, &away)) <= ROUNDING * length.max(size(&away))
-        };
-        let mut on: Vec<usize> = points.filter(on_axis).collect();
-        if assembly.coordinates < 3 {
-            on.truncate(1);
-        } else if on.len() > 2 {
-            on.drain(1..on.len() - 1);
-        }
-        Way::About {
-            axis: upward(&axis),
-            through: through.map(from_si),
-            points: on,
-            along: pitch.abs() > ROUNDING * (turning * length).max(moving),
-        }
-    }
-}
-
-/// The one of a direction and its opposite whose last entry that is not 0 is positive.
-fn upward(direction: &Spatial<f64>) -> Spatial<f64> {
-    let tidy = direction.map(|entry| if entry.abs() < ROUNDING { 0.0 } else { entry });
-    match tidy.iter().rev().find(|entry| **entry != 0.0) {
-        Some(&last) if last < 0.0 => tidy.map(|entry| if entry == 0.0 { 0.0 } else { -entry }),
-        _ => tidy,
-    }
-}
 
 impl Motion {
     /// From a motion of the unknowns. `member_of` tells whose a station's unknown is.
@@ -248,32 +187,6 @@ impl Motion {
             _ => None,
         }
     }
-}
-
-/// The one motion that all of them share, if there is one.
-fn common(assembly: &Assembly, twists: &[(Moving, Twist, f64)]) -> Option<Way> {
-    let (_, first, length) = twists.first()?;
-    if twists.len() < 2 {
-        return None;
-    }
-    // The farthest that any of them lies from the first counts for a rotation.
-    let away = |twist: &Twist| size(&plus(&twist.at, -1.0, &first.at));
-    let reach = twists.iter().fold(*length, |most, (_, twist, length)| {
-        most.max(away(twist) + length)
-    });
-    let alike = |a: &Spatial<f64>, b: &Spatial<f64>, times: f64| {
-        size(&plus(a, -1.0, b)) * times <= ROUNDING * 10.0
-    };
-    let shares = |(what, twist, _): &(Moving, Twist, f64)| {
-        let turns =
-            matches!(what, Moving::Point(_)) || alike(&twist.rotation, &first.rotation, reach);
-        turns && alike(&twist.velocity, &first.velocity_of(&twist.at), 1.0)
-    };
-    let all = 0..assembly.points.len();
-    twists
-        .iter()
-        .all(shares)
-        .then(|| first.way(assembly, all, reach))
 }
 
 impl Way {

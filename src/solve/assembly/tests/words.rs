@@ -31,6 +31,68 @@ fn a_beam_moves_along_what_nothing_holds() {
 }
 
 #[test]
+fn points_that_members_keep_together_turn_as_one() {
+    // A frame of three bars on one pin.
+    let bars = [("sill", "4 m"), ("post", "3 m"), ("brace", "5 m")];
+    let bars = bars.map(|(name, length)| bar(name, length, "10 kN/mm", ""));
+    let pushed = drawn(2, &bars.concat())
+        .point("pin", [0.0; 3])
+        .point("foot", [4.0, 0.0, 0.0])
+        .point("head", [0.0, 3.0, 0.0])
+        .tie("sill", "pin", "foot")
+        .tie("post", "pin", "head")
+        .tie("brace", "foot", "head")
+        .fixed("pin", &[X, Y])
+        .force("foot", [0.0, -1.0, 0.0])
+        .pushed();
+    assert_eq!(
+        pushed,
+        "points `foot` and `head` together can turn about `pin`"
+    );
+}
+
+#[test]
+fn points_that_members_keep_together_turn_about_a_line() {
+    // Two tetrahedra on one face, of which two corners are held.
+    let corners = [
+        ("pin", [0.0; 3]),
+        ("foot", [4.0, 0.0, 0.0]),
+        ("far", [0.0, 6.0, 0.0]),
+        ("apex", [1.0, 1.0, 3.0]),
+        ("tip", [-2.0, 3.0, 1.0]),
+    ];
+    let (mut bars, mut ties) = (String::new(), Vec::new());
+    for (index, (to, end)) in corners.iter().enumerate() {
+        for (from, start) in &corners[..index] {
+            let apart = start
+                .iter()
+                .zip(end)
+                .map(|(a, b): (&f64, &f64)| (b - a).powi(2));
+            let length = format!("{} m", apart.sum::<f64>().sqrt());
+            let name = format!("{from}-{to}");
+            bars += &bar(&name, &length, "10 kN/mm", "");
+            ties.push((name, *from, *to));
+        }
+    }
+    let mut frame = drawn(3, &bars);
+    for (name, at) in corners {
+        frame = frame.point(name, at);
+    }
+    for (name, from, to) in ties {
+        frame = frame.tie(&name, from, to);
+    }
+    let pushed = frame
+        .fixed("pin", &[X, Y, Z])
+        .fixed("foot", &[Y, Z])
+        .force("apex", [0.0, -1.0, 0.0])
+        .pushed();
+    assert_eq!(
+        pushed,
+        "points `far`, `apex` and `tip` together can turn about the line through `pin` and `foot`"
+    );
+}
+
+#[test]
 fn a_moment_turns_a_body_of_one_point() {
     let pushed = drawn(2, &bar("a", "1 m", "1 kN/mm", ""))
         .point("p", [0.0; 3])
