@@ -2,8 +2,8 @@
 
 use super::unit::Powers;
 use super::{
-    Angle, Area, Density, Expansion, Force, ForcePerLength, Length, Mass, MassPerLength, Ratio,
-    Stress, TemperatureInterval, ThermodynamicTemperature, from_si,
+    Angle, Area, Density, Expansion, Force, ForcePerLength, Length, Mass, MassPerLength, Moment,
+    Ratio, Stress, TemperatureInterval, ThermodynamicTemperature, from_si,
 };
 
 /// What a value measures. It decides which units a literal may have and in which units a report
@@ -18,6 +18,8 @@ pub enum Dimension {
     Force,
     /// Line load, stiffness of a spring (N/m).
     ForcePerLength,
+    /// Moment (N m).
+    Moment,
     /// Stress, modulus, strength (Pa).
     Stress,
     /// Mass per volume (kg/m³).
@@ -40,11 +42,12 @@ pub enum Dimension {
 
 impl Dimension {
     /// Every dimension, in the order of the declaration.
-    pub const ALL: [Dimension; 13] = [
+    pub const ALL: [Dimension; 14] = [
         Dimension::Length,
         Dimension::Area,
         Dimension::Force,
         Dimension::ForcePerLength,
+        Dimension::Moment,
         Dimension::Stress,
         Dimension::Density,
         Dimension::MassPerLength,
@@ -63,6 +66,7 @@ impl Dimension {
             Dimension::Area => "an area",
             Dimension::Force => "a force",
             Dimension::ForcePerLength => "a force per length",
+            Dimension::Moment => "a moment",
             Dimension::Stress => "a stress",
             Dimension::Density => "a density",
             Dimension::MassPerLength => "a mass per length",
@@ -82,6 +86,7 @@ impl Dimension {
             Dimension::Area => "5.61 cm2",
             Dimension::Force => "62 kN",
             Dimension::ForcePerLength => "35 kN/mm",
+            Dimension::Moment => "4 kN m",
             Dimension::Stress => "345 MPa",
             Dimension::Density => "7850 kg/m3",
             Dimension::MassPerLength => "4.9 kg/m",
@@ -101,6 +106,7 @@ impl Dimension {
             Dimension::Area => Powers::AREA,
             Dimension::Force => Powers::FORCE,
             Dimension::ForcePerLength => Powers::FORCE_PER_LENGTH,
+            Dimension::Moment => Powers::MOMENT,
             Dimension::Stress => Powers::STRESS,
             Dimension::Density => Powers::DENSITY,
             Dimension::MassPerLength => Powers::MASS_PER_LENGTH,
@@ -121,6 +127,7 @@ impl Dimension {
             Dimension::Area => "mm2 cm2 m2 in2 ft2",
             Dimension::Force => "N kN MN lbf kip kgf tf tonf-us",
             Dimension::ForcePerLength => "N/mm kN/mm N/m kN/m lbf/in kip/in lbf/ft kip/ft",
+            Dimension::Moment => "N m, kN m, N mm, lbf ft, lbf in, kip ft, kip in",
             Dimension::Stress => {
                 "Pa kPa MPa GPa psi ksi Msi bar, or a force per area as in `N/mm2`"
             }
@@ -167,6 +174,7 @@ measures! {
     Area => Area,
     Force => Force,
     ForcePerLength => ForcePerLength,
+    Moment => Moment,
     Stress => Stress,
     Density => Density,
     MassPerLength => MassPerLength,

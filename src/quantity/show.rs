@@ -86,6 +86,7 @@ fn shown_in(units: Units, dimension: Dimension) -> (&'static str, Exact) {
         (Units::SI, Dimension::Area) => ("mm2", Exact::ratio(1.0, 1e6)),
         (Units::SI, Dimension::Force) => ("kN", Exact::ratio(1e3, 1.0)),
         (Units::SI, Dimension::ForcePerLength) => ("kN/mm", Exact::ratio(1e6, 1.0)),
+        (Units::SI, Dimension::Moment) => ("kN m", Exact::ratio(1e3, 1.0)),
         (Units::SI, Dimension::Stress) => ("MPa", Exact::ratio(1e6, 1.0)),
         (Units::SI, Dimension::Density) => ("kg/m3", Exact::ONE),
         (Units::SI, Dimension::MassPerLength) => ("kg/m", Exact::ONE),
@@ -97,6 +98,10 @@ fn shown_in(units: Units, dimension: Dimension) -> (&'static str, Exact) {
         (Units::US, Dimension::Area) => ("in2", Exact::ratio(64_516.0, 1e8)),
         (Units::US, Dimension::Force) => ("kip", Exact::ratio(POUND_FORCE, 1e10)),
         (Units::US, Dimension::ForcePerLength) => ("kip/in", Exact::ratio(POUND_FORCE, 254e6)),
+        (Units::US, Dimension::Moment) => (
+            "kip ft",
+            Exact::ratio(POUND_FORCE, 1e10).times(Exact::ratio(3048.0, 1e4)),
+        ),
         (Units::US, Dimension::Stress) => ("ksi", Exact::ratio(POUND_FORCE, 6_451_600.0)),
         (Units::US, Dimension::Density) => ("lb/ft3", Exact::ratio(453_592_370_000.0, CUBIC_FOOT)),
         (Units::US, Dimension::MassPerLength) => {
@@ -136,8 +141,8 @@ fn significant(value: f64, digits: usize) -> String {
 mod tests {
     use super::{Style, significant};
     use crate::quantity::{
-        Angle, Area, Density, Expansion, Force, ForcePerLength, Length, Mass, MassPerLength, Ratio,
-        Stress, TemperatureInterval, ThermodynamicTemperature,
+        Angle, Area, Density, Expansion, Force, ForcePerLength, Length, Mass, MassPerLength,
+        Moment, Ratio, Stress, TemperatureInterval, ThermodynamicTemperature,
     };
     use crate::quantity::{Dimension, Measure, Units, read};
     use proptest::prelude::*;
@@ -179,6 +184,9 @@ mod tests {
         assert_eq!(si.quantity(Dimension::Stress, 248.2e6), "248.2 MPa");
         assert_eq!(us.quantity(Dimension::Stress, 248.2e6), "36.00 ksi");
         assert_eq!(us.quantity(Dimension::Density, 7850.0), "490.1 lb/ft3");
+        // 1 kip ft is 1.356 kN m, from the same tables.
+        assert_eq!(si.quantity(Dimension::Moment, 4e3), "4.000 kN m");
+        assert_eq!(us.quantity(Dimension::Moment, 13.56e3), "10.00 kip ft");
         assert_eq!(si.quantity(Dimension::Temperature, 293.15), "20.00 degC");
         assert_eq!(us.quantity(Dimension::Temperature, 293.15), "68.00 degF");
         assert_eq!(si.quantity(Dimension::Temperature, 273.15), "0 degC");
@@ -238,6 +246,7 @@ mod tests {
             reads_back::<Area>(si, digits)?;
             reads_back::<Force>(si, digits)?;
             reads_back::<ForcePerLength>(si, digits)?;
+            reads_back::<Moment>(si, digits)?;
             reads_back::<Stress>(si, digits)?;
             reads_back::<Density>(si, digits)?;
             reads_back::<MassPerLength>(si, digits)?;

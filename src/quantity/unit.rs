@@ -70,7 +70,6 @@ impl Powers {
         match self {
             Powers::NONE => "a ratio",
             Powers::TEMPERATURE => "a temperature",
-            Powers::MOMENT => "a moment",
             Powers::VOLUME => "a volume",
             Powers::UNIT_WEIGHT => "a force per volume",
             _ => Dimension::ALL

@@ -35,7 +35,7 @@ pub struct MemberResult {
     /// How far a slack member is from being taut.
     pub slack_by: Option<Length>,
     /// Share of full restraint against the change of temperature, 1 for full; null where nothing
-    /// would expand.
+    /// would expand, and of a member between points, which the whole assembly restrains.
     pub restraint: Option<f64>,
     /// The misfit that a preload was found to need.
     pub misfit_found: Option<Length>,

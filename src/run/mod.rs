@@ -2,6 +2,8 @@
 
 mod materials;
 mod solving;
+#[cfg(test)]
+mod tests;
 mod words;
 
 use crate::check::{self, Observed};

@@ -120,11 +120,12 @@ impl Solving<'_> {
         let mut members = Vec::with_capacity(model.members.len());
         let mut residuals = Residuals::default();
         for (at, member) in model.members.iter().enumerate() {
-            if member.between.is_none() && combination.position(at).is_some() {
-                if let Some((solution, own)) = self.single(at, combination, &mut outcome) {
-                    residuals = residuals.worse(own);
-                    members.push((at, solution.member, solution.zero));
-                }
+            if member.between.is_none()
+                && combination.position(at).is_some()
+                && let Some((solution, own)) = self.single(at, combination, &mut outcome)
+            {
+                residuals = residuals.worse(own);
+                members.push((at, solution.member, solution.zero));
             }
         }
         let assembly = match &mut self.assembly {

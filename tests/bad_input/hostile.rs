@@ -123,7 +123,7 @@ fn a_product_of_lists_says_its_number() {
     );
     assert_eq!(
         said(job),
-        "21:14 the lists of factors multiply out to 1,048,576 combinations; a job may have 100,000 \
+        "21:14 the lists multiply out to 1,048,576 combinations; a job may have 100,000 \
          | shorten the lists, or spread them over several jobs"
     );
 }

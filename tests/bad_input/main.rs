@@ -3,6 +3,7 @@
 
 #![allow(clippy::unwrap_used)] // helpers of tests
 
+mod assemblies;
 mod files;
 mod hostile;
 mod make_ups;

@@ -67,11 +67,13 @@ const MEMBERS: &[(&str, &str)] = &[
     ),
     (
         r#"between = ["a", "b"]"#,
-        "4:1 `between` (members between points) is not read by this version | take it out; nothing else stands for it yet",
+        r#"2:9 the member `tie` lies between points, and so has no `start` | take it out; its points are held by a `hold`
+4:12 this job has no points, and so none called `a` | add it to `[point]`, as in `a = ["4.2 m", "3 m"]`
+4:17 this job has no points, and so none called `b` | add it to `[point]`, as in `b = ["4.2 m", "3 m"]`"#,
     ),
     (
         r#"carries = "tension""#,
-        "4:1 `carries` (one-way members) is not read by this version | take it out; nothing else stands for it yet",
+        "4:11 `carries` stands in a member `between` two points | take it out, or write `between`; a joint that parts is a `gap` segment",
     ),
     (
         r#"limit = { tention = "0.6 yield" }"#,
@@ -103,7 +105,7 @@ const MEMBERS: &[(&str, &str)] = &[
     ),
     (
         r#"limit = { reaction = "1 kN" }"#,
-        "4:11 `reaction` is a limit of a support; here is a limit of a member | move it there, or take it out",
+        "4:11 `reaction` is a limit of a support or a hold; here is a limit of a member | move it there, or take it out",
     ),
     (
         r#"limit = { displacement = "3 mm" }"#,

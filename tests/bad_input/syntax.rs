@@ -58,7 +58,7 @@ const SYNTAX: &[(&str, &str)] = &[
     ),
     (
         "x = +inf",
-        "4:1 a member has no key `x` | the keys of a member are `like`, `note`, `start`, `end`, `runs`, `datum`, `segment`, `support`, `load`, `limit`",
+        "4:1 a member has no key `x` | the keys of a member are `like`, `note`, `start`, `end`, `runs`, `datum`, `between`, `carries`, `segment`, `support`, `load`, `limit`",
     ),
     (
         "x = 1.",

@@ -128,7 +128,7 @@ material = "steel-s355""#,
 length = "rest"
 section = { round = "1 in" }
 material = "steel-s355""#,
-        "5:10 `rest` (members between points) is not read by this version | write the length itself",
+        "5:10 `rest` is what is left between two points, and the member `b` lies between none | write the length itself, or `between` with two points in the member",
     ),
     (
         r#"[[member.b.segment]]
@@ -253,35 +253,8 @@ const LOADS: &[(&str, &str)] = &[
     ),
 ];
 
-const LATER: &[(&str, &str)] = &[
-    (
-        "[point]",
-        "4:2 `point` (assemblies of members that share points) is not read by this version | take it out; nothing else stands for it yet",
-    ),
-    (
-        "[[hold]]",
-        "4:3 `hold` (assemblies of members that share points) is not read by this version | take it out; nothing else stands for it yet",
-    ),
-    (
-        "[[watch]]",
-        "4:3 `watch` (watched displacements) is not read by this version | take it out; nothing else stands for it yet",
-    ),
-    (
-        "[[load]]",
-        "4:3 `load` (loads on points and bodies) is not read by this version | loads stand in their member",
-    ),
-    (
-        "[body.x]",
-        "4:2 `body` (bodies that members carry) is not read by this version | take it out; nothing else stands for it yet",
-    ),
-    (
-        r#"[combination.a]
-lose-each = ["tie"]"#,
-        "5:1 `lose-each` (members taken out) is not read by this version | take it out; nothing else stands for it yet",
-    ),
-    (
-        r#"[material.x]
+const LATER: &[(&str, &str)] = &[(
+    r#"[material.x]
 modulus-at = []"#,
-        "5:1 `modulus-at` (laws of temperature) is not read by this version | take it out; nothing else stands for it yet",
-    ),
-];
+    "5:1 `modulus-at` (laws of temperature) is not read by this version | take it out; nothing else stands for it yet",
+)];

@@ -3,8 +3,8 @@
 use super::page::{Page, code};
 use lengthwise::catalogue::section::Thread;
 use lengthwise::quantity::{
-    self, Angle, Area, Density, Expansion, Force, ForcePerLength, Length, MassPerLength, Measure,
-    Ratio, Stress,
+    self, Angle, Area, Density, Expansion, Force, ForcePerLength, Length, Mass, MassPerLength,
+    Measure, Moment, Ratio, Stress,
 };
 use lengthwise::result::{ErrorEntry, JobStatus};
 use lengthwise::{catalogue, check_bytes, check_text, job};
@@ -123,6 +123,16 @@ const HOLES: &[(&str, &str)] = &[
     ),
     ("support", "[[member.a.support]]\n@"),
     ("load", "[[member.a.load]]\n@"),
+    ("body", "[body.a]\n@"),
+    ("hold", "[[hold]]\n@"),
+    ("load of the job", "[[load]]\n@"),
+    ("load of the job", "[[load]]\nbody = \"a\"\n@"),
+    ("load of the job", "[[load]]\npoint = \"a\"\n@"),
+    ("load of the job", "[[load]]\nhold = \"a\"\n@"),
+    ("watch", "[[watch]]\n@"),
+    ("watch", "[[watch]]\npoint = \"a\"\n@"),
+    ("watch", "[[watch]]\nbody = \"a\"\n@"),
+    ("limit of a hold", "[[hold]]\n[hold.limit]\n@"),
     ("limit of a member", "[member.a.limit]\n@"),
     (
         "limit of a segment",
@@ -265,6 +275,8 @@ fn the_units_on_the_page_are_read() {
             "length" => reads::<Length>,
             "area" => reads::<Area>,
             "force" => reads::<Force>,
+            "moment" => reads::<Moment>,
+            "mass" => reads::<Mass>,
             "force per length (line load, stiffness)" => reads::<ForcePerLength>,
             "stress" => reads::<Stress>,
             "density" => reads::<Density>,

@@ -1,6 +1,7 @@
 //! What acts on a member: loads and cases with their names resolved, laid on segments and layers.
 
 use super::Meaning;
+use super::assembly::{Span, takes};
 use super::coverage::{Cells, Cover, On};
 use super::forces::{Line, Sloped};
 use super::heat::Heat;
@@ -18,6 +19,7 @@ use crate::quantity::{Length, Ratio, from_si};
 /// `sound` names are checked all the same, and that materials give what acts on them.
 pub(super) fn actions<'w, 't>(
     whole: &Whole<'w, 't>,
+    span: &Span,
     outline: &Outline<'w, 't>,
     held: &Held,
     member: &Member,
@@ -26,6 +28,7 @@ pub(super) fn actions<'w, 't>(
 ) -> Option<Actions> {
     let mut laid = Laying {
         whole,
+        span,
         outline,
         held,
         member: sound.then_some(member),
@@ -47,6 +50,7 @@ pub(super) fn actions<'w, 't>(
 /// Actions on their way onto a member.
 pub(super) struct Laying<'a, 'w, 't> {
     pub(super) whole: &'a Whole<'w, 't>,
+    pub(super) span: &'a Span,
     pub(super) outline: &'a Outline<'w, 't>,
     held: &'a Held,
     /// The member without its actions; `None` where something about it is at fault.
@@ -93,6 +97,9 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         let Some(action) = &load.action else {
             return;
         };
+        if !takes(self.whole, load, action, self.meaning) {
+            return;
+        }
         match action {
             Action::Force(force) => self.point_force(load, force, false),
             Action::Down(force) => self.point_force(load, force, true),
@@ -135,51 +142,13 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         }
     }
 
-    /// The value of a load for each case that it acts in. Every load of a job with cases names
-    /// one, and none of a job without.
+    /// The value of a load for each case that it acts in.
     pub(super) fn by_case<T>(
         &mut self,
         load: &'w Load<'t>,
         values: &'w ByCase<'t, T>,
     ) -> Vec<(usize, &'w Written<T>)> {
-        match (values, &load.case) {
-            (_, Entry::Wrong) => Vec::new(),
-            (ByCase::One(value), Entry::Given(case)) => {
-                let case = self.meaning.case(case);
-                case.map(|case| (case, value)).into_iter().collect()
-            }
-            (ByCase::One(value), Entry::Absent) if self.meaning.job.cases.is_empty() => {
-                vec![(0, value)]
-            }
-            (ByCase::One(_), Entry::Absent) => {
-                let names = self.meaning.job.cases.iter().map(|case| case.name.value);
-                let help = remedy("", names.clone(), "").map_or(String::new(), |_| {
-                    let names: Vec<&str> = names.take(12).collect();
-                    format!("add `case`; the cases are `{}`", names.join("`, `"))
-                });
-                let message = "in a job with cases each load names its case";
-                self.meaning
-                    .r
-                    .problems
-                    .missing("case", &load.place, message, help);
-                Vec::new()
-            }
-            (ByCase::Each(_), Entry::Given(case)) => {
-                let message = "this load names a case, and its value is a table by case";
-                let problems = &mut self.meaning.r.problems;
-                problems.say(&case.place, message, "keep one of them");
-                Vec::new()
-            }
-            (ByCase::Each(each), Entry::Absent) => {
-                let mut resolved = Vec::with_capacity(each.len());
-                for (case, value) in each {
-                    if let Some(case) = self.meaning.case(case) {
-                        resolved.push((case, value));
-                    }
-                }
-                resolved
-            }
-        }
+        self.meaning.by_case(&load.case, &load.place, values)
     }
 
     /// What a load covers; `None` where the name of it is unknown, or a gap, which takes nothing.

@@ -1,5 +1,6 @@
 //! Cases, and combinations with their lists multiplied out.
 
+use super::lost::Lost;
 use super::{Meaning, name};
 use crate::job::nearest::remedy;
 use crate::job::written::combination::{self as written, Factors, purpose_named};
@@ -9,6 +10,8 @@ use std::ops::Range;
 
 /// A job may have as many combinations, lists multiplied out.
 const MOST: u128 = 100_000;
+/// They may take out as many members, each counted in each.
+const MOST_TAKEN_OUT: u128 = 10_000_000;
 
 /// The cases of a job; a nameless one that is always on where it has none.
 pub(super) fn cases(job: &Job<'_>) -> Vec<Case> {
@@ -57,6 +60,7 @@ impl Combinations {
             });
         }
         let mut sound = true;
+        let mut lost = Vec::with_capacity(job.combinations.len());
         for combination in &job.combinations {
             sound &= combination.sound;
             for (case, _) in &combination.factors {
@@ -65,13 +69,14 @@ impl Combinations {
             for (material, _) in &combination.modulus {
                 sound &= material_is_known(material, combination, meaning);
             }
+            lost.extend(Lost::of(combination, meaning));
         }
-        if !sound || !few_enough(meaning) {
+        if !sound || lost.len() < job.combinations.len() || !few_enough(meaning) {
             return None;
         }
         let mut all = Vec::new();
         let mut families = Vec::with_capacity(job.combinations.len());
-        for combination in &job.combinations {
+        for (combination, lost) in job.combinations.iter().zip(&lost) {
             let first = all.len();
             let family = name(&combination.name);
             let purpose = match &combination.purpose {
@@ -88,7 +93,15 @@ impl Combinations {
                 Entry::Absent => purpose_named(combination.name.value),
                 Entry::Wrong => return None,
             };
-            multiply_out(combination, &family, purpose, cases, meaning, &mut all);
+            multiply_out(
+                combination,
+                &family,
+                purpose,
+                lost,
+                cases,
+                meaning,
+                &mut all,
+            );
             families.push((family, purpose, first..all.len()));
         }
         Some(Combinations { all, families })
@@ -173,14 +186,7 @@ fn few_enough(meaning: &mut Meaning<'_, '_>) -> bool {
     let mut total = Some(0u128);
     let mut over = None;
     for combination in &meaning.job.combinations {
-        let mut lists = combination
-            .factors
-            .iter()
-            .map(|(_, factors)| &factors.value);
-        let product = lists.try_fold(1u128, |product, factors| match factors {
-            Factors::One(_) => Some(product),
-            Factors::Each(list) => product.checked_mul(list.len() as u128),
-        });
+        let product = becomes(combination);
         total = total
             .zip(product)
             .and_then(|(total, product)| total.checked_add(product));
@@ -189,16 +195,53 @@ fn few_enough(meaning: &mut Meaning<'_, '_>) -> bool {
         }
     }
     let Some(place) = over else {
-        return true;
+        return few_taken_out(meaning);
     };
     let number = total.map_or_else(|| "more than 10^38".to_owned(), grouped);
     let message = format!(
-        "the lists of factors multiply out to {number} combinations; a job may have {}",
+        "the lists multiply out to {number} combinations; a job may have {}",
         grouped(MOST)
     );
     let help = "shorten the lists, or spread them over several jobs";
     meaning.r.problems.say(&place, message, help);
     false
+}
+
+/// Whether combinations do not take out more members than can be listed for each of them.
+fn few_taken_out(meaning: &mut Meaning<'_, '_>) -> bool {
+    let mut total = 0u128;
+    for combination in &meaning.job.combinations {
+        let Some(without) = combination.without.given() else {
+            continue;
+        };
+        let many = becomes(combination).unwrap_or(MOST);
+        total += many * without.value.len() as u128;
+        if total > MOST_TAKEN_OUT {
+            let message = format!(
+                "combinations take out {} members, each counted in each; a job may have {}",
+                grouped(total),
+                grouped(MOST_TAKEN_OUT)
+            );
+            let help = "leave out of the job what most combinations take out";
+            meaning.r.problems.say(&without.place, message, help);
+            return false;
+        }
+    }
+    true
+}
+
+/// How many combinations one becomes; `None` where that is beyond counting.
+fn becomes(combination: &written::Combination<'_>) -> Option<u128> {
+    let mut lists = combination
+        .factors
+        .iter()
+        .map(|(_, factors)| &factors.value);
+    let lost = combination.lose_each.given();
+    let lost = lost.map_or(1, |lost| lost.value.len() as u128);
+    lists.try_fold(lost, |product, factors| match factors {
+        Factors::One(_) => Some(product),
+        Factors::Each(list) => product.checked_mul(list.len() as u128),
+    })
 }
 
 /// A whole number with a comma at every third digit.
@@ -214,11 +257,27 @@ fn grouped(number: u128) -> String {
     out
 }
 
+/// One of a list.
+struct Choice {
+    sets: Sets,
+    /// What it adds to the name of the combination.
+    named: String,
+}
+
+/// What a choice decides.
+enum Sets {
+    /// The factor of a case.
+    Factor(usize, f64),
+    /// The member that is taken out.
+    Without(usize),
+}
+
 /// Adds every choice of a combination's lists, the last list turning fastest.
 fn multiply_out(
     combination: &written::Combination<'_>,
     family: &Name,
     purpose: Option<Purpose>,
+    lost: &Lost,
     cases: &[Case],
     meaning: &Meaning<'_, '_>,
     all: &mut Vec<Combination>,
@@ -232,7 +291,7 @@ fn multiply_out(
         .map(|case| if case.always { 1.0 } else { 0.0 })
         .collect();
     let mut named = vec![false; cases.len()];
-    let mut lists: Vec<(usize, Vec<(f64, String)>)> = Vec::new();
+    let mut lists: Vec<Vec<Choice>> = Vec::new();
     for (case, written) in &combination.factors {
         let Some(index) = of_case(case) else {
             continue; // an unknown one has been reported
@@ -241,25 +300,42 @@ fn multiply_out(
         match &written.value {
             Factors::One(factor) => factors[index] = *factor,
             Factors::Each(list) => {
-                let choice = |&factor: &f64| (factor, chosen(case.value, factor));
-                lists.push((index, list.iter().map(choice).collect()));
+                let choice = |&factor: &f64| Choice {
+                    sets: Sets::Factor(index, factor),
+                    named: chosen(case.value, factor),
+                };
+                lists.push(list.iter().map(choice).collect());
             }
         }
+    }
+    if !lost.each.is_empty() {
+        let choice = |&member: &usize| Choice {
+            sets: Sets::Without(member),
+            named: format!("/without={}", meaning.job.members[member].name.value),
+        };
+        lists.push(lost.each.iter().map(choice).collect());
     }
     let shown = shown(cases, |index| named[index]);
     let modulus = modulus(combination, meaning);
     let mut choice = vec![0; lists.len()];
     let mut text = String::with_capacity(64);
     loop {
+        let mut without = lost.always.clone();
         let name = if lists.is_empty() {
             family.clone()
         } else {
             text.clear();
             text.push_str(family);
-            for ((index, list), &chosen) in lists.iter().zip(&choice) {
-                let (factor, named) = &list[chosen];
-                factors[*index] = *factor;
-                text.push_str(named);
+            for (list, &chosen) in lists.iter().zip(&choice) {
+                let choice = &list[chosen];
+                match choice.sets {
+                    Sets::Factor(case, factor) => factors[case] = factor,
+                    Sets::Without(member) => {
+                        let at = without.partition_point(|&other| other < member);
+                        without.insert(at, member);
+                    }
+                }
+                text.push_str(&choice.named);
             }
             Name::from(text.as_str())
         };
@@ -270,12 +346,12 @@ fn multiply_out(
             factors: factors.clone(),
             shown: shown.clone(),
             modulus: modulus.clone(),
-            without: Vec::new(),
+            without,
             place: combination.place.clone(),
         });
         // On to the next choice, as an odometer turns.
         let mut turned = false;
-        for (chosen, (_, list)) in choice.iter_mut().zip(&lists).rev() {
+        for (chosen, list) in choice.iter_mut().zip(&lists).rev() {
             *chosen += 1;
             if *chosen < list.len() {
                 turned = true;

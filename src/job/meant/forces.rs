@@ -1,12 +1,13 @@
 //! Line loads piece by piece, and what of a downward force acts along the axis.
 
 use super::actions::Laying;
+use super::assembly::Span;
 use super::coverage::On;
 use crate::catalogue::section::Along;
 use crate::job::written::load::Load;
 use crate::job::written::{ByCase, Entry};
 use crate::model::{LineLoad, Member, SegmentKind};
-use crate::quantity::ForcePerLength;
+use crate::quantity::{Angle, ForcePerLength};
 
 /// How a line load is directed.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -32,24 +33,34 @@ impl Sloped {
     };
 }
 
+impl Sloped {
+    /// Of a downward force on an axis at this angle above level.
+    pub(super) fn of(angle: Angle) -> Self {
+        let rise = angle.value.sin();
+        // cos(π/2) is not 0 in doubles; upright members carry nothing across.
+        let across = if rise.abs() == 1.0 {
+            0.0
+        } else {
+            angle.value.cos()
+        };
+        Sloped {
+            along: -rise,
+            across,
+        }
+    }
+}
+
 impl<'w, 't> Laying<'_, 'w, 't> {
     /// The parts of a unit weight; a member that does not say where down is, is reported.
     pub(super) fn slope(&mut self) -> Option<Sloped> {
+        match self.span {
+            Span::None => {}
+            Span::Wrong => return None,
+            Span::Given(reach) => return self.meaning.sloped(self.whole, &reach.direction),
+        }
         let runs = self.whole.runs.or(&self.meaning.job.default.runs);
         match runs {
-            Entry::Given(angle) => {
-                let rise = angle.value.value.sin();
-                // cos(π/2) is not 0 in doubles; upright members carry nothing across.
-                let across = if rise.abs() == 1.0 {
-                    0.0
-                } else {
-                    angle.value.value.cos()
-                };
-                Some(Sloped {
-                    along: -rise,
-                    across,
-                })
-            }
+            Entry::Given(angle) => Some(Sloped::of(angle.value)),
             Entry::Wrong => None,
             Entry::Absent => {
                 let message = format!(

@@ -52,7 +52,7 @@ impl<'w, 't> Meaning<'w, 't> {
                     return None;
                 }
                 Some(SegmentKind::Gap(Gap {
-                    width: written.length.given()?.value,
+                    width: written.own_length()?,
                     stiffness: stiffness.given().map(|written| written.value),
                 }))
             }

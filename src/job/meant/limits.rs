@@ -3,21 +3,30 @@
 use super::Meaning;
 use super::combinations::Combinations;
 use super::members::Meant;
+use super::own::Own;
 use super::reads::Common;
 use super::stress::allowed;
 use crate::job::written::Entry;
 use crate::job::written::limit::{Bound, Limits};
-use crate::job::written::segment::{Kind, Segment};
+use crate::job::written::segment::Kind;
 use crate::model::{
-    AreaUsed, Bounds, Limit, LimitKind, Member, Name, Place, Purpose, Reads, SegmentKind, Target,
+    AreaUsed, Assembly, Bounds, Limit, LimitKind, Member, Name, Place, Purpose, Reads, SegmentKind,
+    Target, Watch,
 };
 use crate::quantity::{Force, Length, MovementBound, StressLimit};
 use std::collections::HashSet;
 use std::ops::Neg;
 
+/// What limits stand on.
+pub(super) struct Objects<'m, 'w, 't> {
+    pub(super) meant: &'m [Meant<'w, 't>],
+    pub(super) assembly: Option<&'m Assembly>,
+    pub(super) watches: &'m [Option<Watch>],
+}
+
 /// All limits of a job in the order of the file.
 pub(super) fn limits<'w, 't>(
-    meant: &[Meant<'w, 't>],
+    on: &Objects<'_, 'w, 't>,
     combinations: Option<&Combinations>,
     meaning: &mut Meaning<'w, 't>,
 ) -> Vec<Limit> {
@@ -27,9 +36,11 @@ pub(super) fn limits<'w, 't>(
         limits: Vec::new(),
         unread: HashSet::new(),
     };
-    for (index, meant) in meant.iter().enumerate() {
+    for (index, meant) in on.meant.iter().enumerate() {
         laying.of_member(index, meant);
     }
+    laying.of_holds(on.assembly);
+    laying.of_watches(on.watches);
     let mut limits = laying.limits;
     limits.sort_by_key(|limit| limit.place.start); // stable: members and segments in order within
     limits
@@ -49,14 +60,15 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         let of_member = meant.whole.limits.or(&self.meaning.job.default.limits);
         let member = &meant.member;
         for table in tables(of_member) {
-            let common = self.common(table);
+            let common = self.common(&table.names, &table.since, &table.source);
             if let Some(common) = common {
                 self.on_member(index, table, &common, meant, member);
+                self.carries(index, table, &common, meant);
             }
         }
         for (at, segment) in meant.outline.segments.iter().enumerate() {
             for table in tables(&segment.limits) {
-                let common = self.common(table);
+                let common = self.common(&table.names, &table.since, &table.source);
                 if let Some(common) = common {
                     self.on_segment(index, at, table, &common, meant, member);
                 }
@@ -66,7 +78,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
             };
             for (number, layer) in layers.iter().enumerate() {
                 for table in tables(&layer.limits) {
-                    let common = self.common(table);
+                    let common = self.common(&table.names, &table.since, &table.source);
                     if let Some(common) = common {
                         self.stresses(index, at, number, table, &common, member);
                     }
@@ -76,7 +88,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         let supports = meant.whole.supports.given();
         for (number, support) in supports.iter().flat_map(|all| all.value.iter().enumerate()) {
             for table in tables(&support.limits) {
-                let common = self.common(table);
+                let common = self.common(&table.names, &table.since, &table.source);
                 if let Some(common) = common {
                     let written = supports.map_or(0, |all| all.value.len());
                     // Of a member with faults the supports may not be known.
@@ -196,7 +208,13 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         self.gap(table, target, &on, common);
     }
 
-    fn gap(&mut self, table: &Limits<'t>, target: Target, on: &dyn Fn() -> Name, common: &Common) {
+    pub(super) fn gap(
+        &mut self,
+        table: &Limits<'t>,
+        target: Target,
+        on: &dyn Fn() -> Name,
+        common: &Common,
+    ) {
         if let Entry::Given(gap) = &table.gap {
             let (min, max) = gap.value;
             let kind = LimitKind::Gap { min, max };
@@ -281,12 +299,19 @@ impl<'w, 't> Laying<'_, 'w, 't> {
         }
     }
 
-    fn push(&mut self, kind: LimitKind, target: Target, on: Name, common: &Common, place: &Place) {
+    pub(super) fn push(
+        &mut self,
+        kind: LimitKind,
+        target: Target,
+        on: Name,
+        common: &Common,
+        place: &Place,
+    ) {
         let reads = match &common.only {
             Some(only) => Reads::Only(only.clone()),
             None => Reads::Purpose(purpose_of(&kind)),
         };
-        self.caution_if_unread(&reads, &on, place);
+        self.caution_if_unread(&reads, &target, &on, place);
         self.limits.push(Limit {
             kind,
             target,
@@ -299,46 +324,7 @@ impl<'w, 't> Laying<'_, 'w, 't> {
     }
 }
 
-/// The limits that a segment or a layer has of its own.
-#[derive(Debug, Clone, Copy, Default)]
-struct Own {
-    tension: bool,
-    compression: bool,
-    force: bool,
-}
-
-impl Own {
-    /// Of a segment, and of a layer of it.
-    fn of(segment: &Segment<'_>, layer: Option<usize>) -> Self {
-        let own = Own::among(&segment.limits);
-        let layer = layer.map_or(Own::default(), |layer| Own::of_layer(segment, layer));
-        Own {
-            tension: own.tension || layer.tension,
-            compression: own.compression || layer.compression,
-            force: own.force,
-        }
-    }
-
-    fn of_layer(segment: &Segment<'_>, layer: usize) -> Self {
-        match &segment.kind {
-            Kind::Solid { layers, .. } => layers
-                .get(layer)
-                .map_or(Own::default(), |layer| Own::among(&layer.limits)),
-            _ => Own::default(),
-        }
-    }
-
-    fn among(limits: &Entry<Vec<Limits<'_>>>) -> Self {
-        let any = |is: fn(&Limits<'_>) -> bool| tables(limits).iter().any(is);
-        Own {
-            tension: any(|limits| limits.tension.is_written()),
-            compression: any(|limits| limits.compression.is_written()),
-            force: any(|limits| limits.force.is_written()),
-        }
-    }
-}
-
-fn tables<'e, 't>(limits: &'e Entry<Vec<Limits<'t>>>) -> &'e [Limits<'t>] {
+pub(super) fn tables<'e, 't>(limits: &'e Entry<Vec<Limits<'t>>>) -> &'e [Limits<'t>] {
     limits.given().map_or(&[], |limits| &limits.value)
 }
 
@@ -359,7 +345,7 @@ fn purpose_of(kind: &LimitKind) -> Purpose {
     }
 }
 
-fn signed<Q: Copy + Neg<Output = Q>, T: Copy>(
+pub(super) fn signed<Q: Copy + Neg<Output = Q>, T: Copy>(
     bound: Bound<T>,
     value: impl Fn(T) -> Q,
 ) -> Bounds<Q> {
@@ -386,7 +372,7 @@ fn movement_limit(bound: Bound<MovementBound>, length: Length) -> Bounds<Length>
     })
 }
 
-fn joined(member: &Name, part: &Name) -> Name {
+pub(super) fn joined(member: &Name, part: &Name) -> Name {
     let mut name = String::with_capacity(member.len() + 1 + part.len());
     name.push_str(member);
     name.push('.');

@@ -1,20 +1,22 @@
 //! Members: what `like` and `[default]` add, and how the parts of a member come together.
 
 use super::actions::actions;
+use super::assembly::{self, Span};
+use super::lengths::rest;
 use super::lookup::Lookup;
 use super::materials::arrows;
+use super::names::Root;
 use super::outline::{Outline, place_of};
 use super::points::points;
 use super::supports::{self, Held};
 use super::{Meaning, name};
-use crate::job::nearest::remedy;
 use crate::job::written::limit::Limits;
 use crate::job::written::load::Load;
 use crate::job::written::member::Member as WrittenMember;
 use crate::job::written::segment::Segment as WrittenSegment;
 use crate::job::written::support::Support as WrittenSupport;
 use crate::job::written::{Entry, Written};
-use crate::model::{Actions, Member, Name, Place, Segment, SegmentKind};
+use crate::model::{Actions, Between, Carries, Member, Name, Place, Segment, SegmentKind};
 use crate::quantity::from_si;
 use crate::quantity::{Angle, ThermodynamicTemperature};
 
@@ -23,10 +25,14 @@ use crate::quantity::{Angle, ThermodynamicTemperature};
 pub(super) struct Whole<'w, 't> {
     pub(super) name: &'w Written<&'t str>,
     pub(super) place: &'w Place,
+    /// The member as it stands itself, without what it takes over.
+    pub(super) own: &'w WrittenMember<'t>,
     pub(super) start: &'w Entry<()>,
     pub(super) end: &'w Entry<()>,
     pub(super) runs: &'w Entry<Angle>,
     pub(super) datum: &'w Entry<ThermodynamicTemperature>,
+    pub(super) between: &'w Entry<[Written<&'t str>; 2]>,
+    pub(super) carries: &'w Entry<Carries>,
     pub(super) segments: &'w Entry<Vec<WrittenSegment<'t>>>,
     pub(super) supports: &'w Entry<Vec<WrittenSupport<'t>>>,
     pub(super) loads: &'w Entry<Vec<Load<'t>>>,
@@ -47,18 +53,26 @@ pub(super) struct Meant<'w, 't> {
 /// All members of a job whose `like` leads somewhere.
 pub(super) fn members<'w, 't>(meaning: &mut Meaning<'w, 't>) -> Vec<Meant<'w, 't>> {
     let job = meaning.job;
-    let names = Lookup::new(job.members.iter().map(|member| member.name.value).collect());
     let mut wholes: Vec<State<'w, 't>> = job.members.iter().map(|_| State::Open).collect();
     for index in 0..job.members.len() {
-        follow(index, &names, &mut wholes, meaning);
+        follow(index, &mut wholes, meaning);
     }
-    wholes
+    let wholes: Vec<Whole<'w, 't>> = wholes
         .into_iter()
         .filter_map(|state| match state {
             State::Done(whole) => whole,
             State::Open | State::OnTheWay => None,
         })
-        .map(|whole| meant(whole, meaning))
+        .collect();
+    let spans: Vec<Span> = wholes
+        .iter()
+        .map(|whole| assembly::span(whole, meaning))
+        .collect();
+    meaning.space.up = assembly::up(&wholes, &spans, meaning);
+    wholes
+        .into_iter()
+        .zip(&spans)
+        .map(|(whole, span)| meant(whole, span, meaning))
         .collect()
 }
 
@@ -71,12 +85,7 @@ enum State<'w, 't> {
 }
 
 /// Follows `like` to the far end of the chain and comes back with what each member takes over.
-fn follow<'w, 't>(
-    from: usize,
-    names: &Lookup<&'t str>,
-    states: &mut [State<'w, 't>],
-    meaning: &mut Meaning<'w, 't>,
-) {
+fn follow<'w, 't>(from: usize, states: &mut [State<'w, 't>], meaning: &mut Meaning<'w, 't>) {
     let job = meaning.job;
     let mut chain: Vec<usize> = Vec::new();
     let mut next = Some(from);
@@ -108,12 +117,8 @@ fn follow<'w, 't>(
             Entry::Absent => {}
             Entry::Wrong => base = Err(()),
             Entry::Given(like) => {
-                next = names.find(like.value);
+                next = meaning.find(Root::Member, like);
                 if next.is_none() {
-                    let message = format!("no member is called `{}`", like.value);
-                    let help = remedy(like.value, names.texts(), "the members are");
-                    let problems = &mut meaning.r.problems;
-                    problems.unknown("member", &like.place, message, help);
                     base = Err(());
                 }
             }
@@ -133,10 +138,13 @@ fn whole<'w, 't>(own: &'w WrittenMember<'t>, base: Option<Whole<'w, 't>>) -> Who
     Whole {
         name: &own.name,
         place: &own.place,
+        own,
         start: either(&own.start, base.map(|base| base.start)),
         end: either(&own.end, base.map(|base| base.end)),
         runs: either(&own.runs, base.map(|base| base.runs)),
         datum: either(&own.datum, base.map(|base| base.datum)),
+        between: either(&own.between, base.map(|base| base.between)),
+        carries: either(&own.carries, base.map(|base| base.carries)),
         segments: either(&own.segments, base.map(|base| base.segments)),
         supports: either(&own.supports, base.map(|base| base.supports)),
         loads: either(&own.loads, base.map(|base| base.loads)),
@@ -145,7 +153,11 @@ fn whole<'w, 't>(own: &'w WrittenMember<'t>, base: Option<Whole<'w, 't>>) -> Who
 }
 
 /// One member: its outline, then what it is made of, how it is held, and what acts on it.
-fn meant<'w, 't>(whole: Whole<'w, 't>, meaning: &mut Meaning<'w, 't>) -> Meant<'w, 't> {
+fn meant<'w, 't>(
+    whole: Whole<'w, 't>,
+    span: &Span,
+    meaning: &mut Meaning<'w, 't>,
+) -> Meant<'w, 't> {
     let written: &'w [WrittenSegment<'t>] = match whole.segments {
         Entry::Given(segments) => &segments.value,
         _ => &[],
@@ -159,7 +171,9 @@ fn meant<'w, 't>(whole: Whole<'w, 't>, meaning: &mut Meaning<'w, 't>) -> Meant<'
             .problems
             .missing("segment", whole.place, message, help);
     }
-    let mut outline = Outline::of(written);
+    let rest = rest(&whole, written, span, meaning);
+    let mut outline = Outline::of(written, rest);
+    assembly::has_no_gaps(&whole, &outline, meaning);
     names_differ(&whole, &outline, meaning);
     let kinds: Vec<Option<SegmentKind>> = written
         .iter()
@@ -172,6 +186,7 @@ fn meant<'w, 't>(whole: Whole<'w, 't>, meaning: &mut Meaning<'w, 't>) -> Meant<'
     let cut = outline.stations();
     let held = supports::supports(&whole, &outline, meaning);
     let mut sound = !written.is_empty() && cut.is_some() && held.supports.is_some();
+    sound &= *span != Span::Wrong && !whole.carries.is_wrong();
     let segments = kinds.into_iter().enumerate().map(|(index, kind)| {
         sound &= kind.is_some();
         Segment {
@@ -184,8 +199,8 @@ fn meant<'w, 't>(whole: Whole<'w, 't>, meaning: &mut Meaning<'w, 't>) -> Meant<'
         }
     });
     let segments = segments.collect();
-    let mut member = member(&whole, segments, cut, &held, meaning);
-    let actions = actions(&whole, &outline, &held, &member, sound, meaning);
+    let mut member = member(&whole, span, segments, cut, &held, meaning);
+    let actions = actions(&whole, span, &outline, &held, &member, sound, meaning);
     sound &= actions.is_some();
     member.actions = actions.unwrap_or_default();
     if sound {
@@ -208,6 +223,7 @@ const NOTHING: SegmentKind = SegmentKind::Solid {
 /// What is known of a member on which nothing acts yet.
 fn member<'w, 't>(
     whole: &Whole<'w, 't>,
+    span: &Span,
     segments: Vec<Segment>,
     cut: Option<(Vec<crate::model::Station>, Vec<crate::model::Piece>)>,
     held: &Held,
@@ -215,6 +231,21 @@ fn member<'w, 't>(
 ) -> Member {
     let (stations, pieces) = cut.unwrap_or_default();
     let job = meaning.job;
+    let (runs, between) = match span {
+        Span::Given(reach) => {
+            let between = Between {
+                start: reach.start,
+                end: reach.end,
+                direction: reach.direction,
+                rise: meaning.space.rise(&reach.direction),
+            };
+            (meaning.space.runs(&reach.direction), Some(between))
+        }
+        Span::None | Span::Wrong => {
+            let runs = whole.runs.or(&job.default.runs).given();
+            (runs.map(|runs| runs.value), None)
+        }
+    };
     let job_datum = job
         .heading
         .as_ref()
@@ -222,14 +253,10 @@ fn member<'w, 't>(
     Member {
         name: name(whole.name),
         place: whole.place.clone(),
-        runs: whole
-            .runs
-            .or(&job.default.runs)
-            .given()
-            .map(|runs| runs.value),
+        runs,
         datum: whole.datum.given().or(job_datum).map(|datum| datum.value),
-        between: None,
-        carries: None,
+        between,
+        carries: whole.carries.given().map(|carries| carries.value),
         segments,
         stations,
         pieces,
@@ -286,6 +313,10 @@ fn cuts<'w, 't>(
         for station in [&load.at, &load.from, &load.to] {
             outline.cut(station, meaning);
         }
+    }
+    let watched = meaning.watched.remove(whole.name.value);
+    for station in watched.into_iter().flatten() {
+        outline.cut(station, meaning);
     }
     let limits = whole.limits.or(&meaning.job.default.limits);
     for limits in limits.given().map_or(&[][..], |all| &all.value) {

@@ -3,16 +3,22 @@
 //! it is left out in silence, since the fault itself has been reported.
 
 mod actions;
+mod assembly;
+mod by_case;
 mod combinations;
 mod coverage;
 mod forces;
 mod heat;
 mod layers;
+mod lengths;
 mod limits;
 mod lookup;
+mod lost;
 mod materials;
 mod members;
+mod names;
 mod outline;
+mod own;
 mod points;
 mod reads;
 mod stress;
@@ -21,7 +27,10 @@ mod supports;
 use super::written::{Entry, Job, Reader, Written};
 use crate::model::{Heading, Model, Name, Remark};
 use crate::quantity::Units;
+use assembly::{Space, Stations};
 use materials::Materials;
+use names::Names;
+use std::cell::OnceCell;
 
 /// What all parts of this phase share.
 struct Meaning<'w, 't> {
@@ -29,13 +38,25 @@ struct Meaning<'w, 't> {
     r: &'w mut Reader<'t>,
     remarks: Vec<Remark>,
     materials: Materials<'w>,
+    names: Names<'t>,
+    /// Where points lie, and which way is up.
+    space: Space,
+    /// The stations that watches name.
+    watched: Stations<'w, 't>,
+    /// Where each line of the text begins; found when the first message names one.
+    lines: OnceCell<Vec<usize>>,
 }
 
-impl<'t> Meaning<'_, 't> {
+impl Meaning<'_, '_> {
     /// The number of the line in which a place begins, for messages that name two places.
     fn line(&self, at: usize) -> usize {
-        let head = self.r.text.get(..at).unwrap_or(self.r.text);
-        1 + head.bytes().filter(|byte| *byte == b'\n').count()
+        let lines = self.lines.get_or_init(|| {
+            let breaks = self.r.text.match_indices('\n');
+            std::iter::once(0)
+                .chain(breaks.map(|(at, _)| at + 1))
+                .collect()
+        });
+        lines.partition_point(|&start| start <= at)
     }
 }
 
@@ -43,16 +64,29 @@ impl<'t> Meaning<'_, 't> {
 pub(super) fn model<'t>(job: &Job<'t>, r: &mut Reader<'t>) -> Option<Model> {
     let mut remarks = Vec::new();
     let materials = Materials::of(job, r, &mut remarks);
+    let space = Space::of(job, r);
     let mut meaning = Meaning {
         job,
         r,
         remarks,
         materials,
+        names: Names::of(job),
+        space,
+        watched: assembly::stations(job),
+        lines: OnceCell::new(),
     };
+    names::differ(&mut meaning);
     let cases = combinations::cases(job);
     let meant = members::members(&mut meaning);
     let combinations = combinations::Combinations::of(&cases, &mut meaning);
-    let limits = limits::limits(&meant, combinations.as_ref(), &mut meaning);
+    let assembly = assembly::assembly(&meant, &mut meaning);
+    let watches = assembly::watches(&meant, &mut meaning);
+    let objects = limits::Objects {
+        meant: &meant,
+        assembly: assembly.as_ref(),
+        watches: &watches,
+    };
+    let limits = limits::limits(&objects, combinations.as_ref(), &mut meaning);
     if !meaning.r.problems.is_empty() {
         return None;
     }
@@ -87,8 +121,8 @@ pub(super) fn model<'t>(job: &Job<'t>, r: &mut Reader<'t>) -> Option<Model> {
             .into_iter()
             .map(|meant| meant.sound.then_some(meant.member))
             .collect::<Option<_>>()?,
-        assembly: None,
-        watches: Vec::new(),
+        assembly,
+        watches: watches.into_iter().collect::<Option<_>>()?,
         limits,
         tolerances: std::mem::take(&mut r.tolerances),
         remarks,

@@ -3,7 +3,7 @@
 use super::Meaning;
 use super::lookup::Lookup;
 use crate::job::nearest::remedy;
-use crate::job::written::segment::{Kind, Segment as WrittenSegment};
+use crate::job::written::segment::{Extent, Kind, Segment as WrittenSegment};
 use crate::job::written::station::Station as WrittenStation;
 use crate::job::written::{Entry, Written};
 use crate::model::{Name, Piece, Place, Station};
@@ -18,6 +18,8 @@ pub(super) struct Outline<'w, 't> {
     pub(super) names: Lookup<Name>,
     /// Where segments begin and end, one more than there are; `None` where a length is at fault.
     pub(super) bounds: Option<Vec<f64>>,
+    /// The length of the segment that takes the rest, in metres.
+    rest: Option<f64>,
     /// Where, beyond the bounds, the member is cut: rising, and how each was written.
     cuts: Vec<(f64, &'t str)>,
     /// The station of each bound.
@@ -34,7 +36,7 @@ enum Spot {
 }
 
 impl<'w, 't> Outline<'w, 't> {
-    pub(super) fn of(segments: &'w [WrittenSegment<'t>]) -> Self {
+    pub(super) fn of(segments: &'w [WrittenSegment<'t>], rest: Option<f64>) -> Self {
         let names = segments
             .iter()
             .enumerate()
@@ -47,16 +49,17 @@ impl<'w, 't> Outline<'w, 't> {
         let mut x = 0.0;
         bounds.push(x);
         for segment in segments {
-            let Some(length) = segment.length.given() else {
+            let Some(length) = length_in(segment, rest) else {
                 break;
             };
-            x += length.value.value;
+            x += length;
             bounds.push(x);
         }
         Outline {
             segments,
             names: Lookup::new(names),
             bounds: (bounds.len() == segments.len() + 1).then_some(bounds),
+            rest,
             cuts: Vec::new(),
             station_of_bound: Vec::new(),
             xs: Vec::new(),
@@ -68,10 +71,11 @@ impl<'w, 't> Outline<'w, 't> {
         self.bounds.as_ref()?.last().copied()
     }
 
-    /// The length of a segment as it was written.
+    /// The length of a segment as it was written, or what is left for it.
     pub(super) fn length_of(&self, segment: usize) -> f64 {
-        let written = self.segments.get(segment).and_then(|s| s.length.given());
-        written.map_or(0.0, |length| length.value.value)
+        let segment = self.segments.get(segment);
+        let length = segment.and_then(|segment| length_in(segment, self.rest));
+        length.unwrap_or(0.0)
     }
 
     pub(super) fn is_gap(&self, segment: usize) -> bool {
@@ -241,6 +245,14 @@ impl<'w, 't> Outline<'w, 't> {
                 .copied()
                 .unwrap_or_default(),
         )
+    }
+}
+
+/// The length of a segment in metres; `None` where it is at fault.
+fn length_in(segment: &WrittenSegment<'_>, rest: Option<f64>) -> Option<f64> {
+    match segment.length.given()?.value {
+        Extent::Length(length) => Some(length.value),
+        Extent::Rest => rest,
     }
 }
 

@@ -58,6 +58,9 @@ fn needed_at(
     {
         return Some("where a support stands");
     }
+    if member.between.is_some() {
+        return Some("where it meets the point that holds it");
+    }
     let actions = &member.actions;
     let none = crate::quantity::Force::default();
     if actions

@@ -3,10 +3,9 @@
 use super::combinations::Combinations;
 use super::limits::Laying;
 use crate::job::nearest::remedy;
-use crate::job::written::Written;
 use crate::job::written::combination::purpose_named;
-use crate::job::written::limit::Limits;
-use crate::model::{Name, Place, Purpose, Reads, Remark};
+use crate::job::written::{Entry, Written};
+use crate::model::{Name, Place, Purpose, Reads, Remark, Target};
 
 /// What all limits of one table have in common.
 pub(super) struct Common {
@@ -17,8 +16,13 @@ pub(super) struct Common {
 }
 
 impl<'t> Laying<'_, '_, 't> {
-    /// What `in`, `since` and `source` of a table say; `None` where one is at fault.
-    pub(super) fn common(&mut self, table: &Limits<'t>) -> Option<Common> {
+    /// What `in`, `since` and `source` of a limit say; `None` where one is at fault.
+    pub(super) fn common(
+        &mut self,
+        names: &Entry<Vec<Written<&'t str>>>,
+        since: &Entry<&'t str>,
+        source: &Entry<&'t str>,
+    ) -> Option<Common> {
         let Some(combinations) = self.combinations else {
             // They are at fault; what else is wrong with the limit is looked for all the same.
             return Some(Common {
@@ -27,8 +31,8 @@ impl<'t> Laying<'_, '_, 't> {
                 source: None,
             });
         };
-        let mut sound = !(table.names.is_wrong() || table.since.is_wrong());
-        let only = table.names.given().map(|names| {
+        let mut sound = !(names.is_wrong() || since.is_wrong());
+        let only = names.given().map(|names| {
             let mut only = Vec::new();
             for name in &names.value {
                 let known = only.len();
@@ -42,7 +46,7 @@ impl<'t> Laying<'_, '_, 't> {
             only.dedup();
             only
         });
-        let since = table.since.given().and_then(|since| {
+        let since = since.given().and_then(|since| {
             let index = self.one(since, combinations);
             sound &= index.is_some();
             index
@@ -50,7 +54,7 @@ impl<'t> Laying<'_, '_, 't> {
         sound.then(|| Common {
             only,
             since,
-            source: table.source.given().map(|source| Name::from(source.value)),
+            source: source.given().map(|source| Name::from(source.value)),
         })
     }
 
@@ -98,7 +102,13 @@ impl<'t> Laying<'_, '_, 't> {
     }
 
     /// A limit that no combination reads gets a caution, once for all that it holds.
-    pub(super) fn caution_if_unread(&mut self, reads: &Reads, on: &Name, place: &Place) {
+    pub(super) fn caution_if_unread(
+        &mut self,
+        reads: &Reads,
+        target: &Target,
+        on: &Name,
+        place: &Place,
+    ) {
         let Some(combinations) = self.combinations else {
             return;
         };
@@ -117,9 +127,8 @@ impl<'t> Laying<'_, '_, 't> {
             Reads::Purpose(Purpose::Service) => "of the purpose \"service\"",
             Reads::Purpose(Purpose::Strength) => "of the purpose \"strength\"",
         };
-        let member = on.split('.').next().unwrap_or(on);
         self.meaning.remarks.push(Remark {
-            about: format!("member.{member}"),
+            about: about(target, on),
             text: format!(
                 "no combination reads this limit on `{on}`: there is none {purpose}, so it is \
                  not checked"
@@ -128,6 +137,19 @@ impl<'t> Laying<'_, '_, 't> {
             caution: true,
         });
     }
+}
+
+/// The table that a limit belongs to: `member.H4`, `hold.guide`, `hold.2`.
+fn about(target: &Target, on: &str) -> String {
+    let root = match target {
+        Target::Hold { .. } => "hold",
+        Target::Watch { .. } => "watch",
+        _ => "member",
+    };
+    // What has no name of its own is called by its number, `hold.2`.
+    let numbered = on.strip_prefix(root).and_then(|on| on.strip_prefix('.'));
+    let name = numbered.unwrap_or(on).split('.').next().unwrap_or(on);
+    format!("{root}.{name}")
 }
 
 /// Adds the combinations that a name of `in` covers: one, all of a family, or all of a purpose.

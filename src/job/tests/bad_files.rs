@@ -17,7 +17,7 @@ const BAD: &[Bad] = &[
     (
         "an unknown key",
         "title = 1",
-        "1:1 a job file has no key `title` | the keys of a job file are `job`, `case`, `combination`, `material`, `default`, `member`",
+        "1:1 a job file has no key `title` | the keys of a job file are `job`, `case`, `combination`, `material`, `default`, `member`, `point`, `body`, `hold`, `load`, `watch`",
     ),
     (
         "no member",
@@ -28,21 +28,6 @@ const BAD: &[Bad] = &[
         "a number for all members",
         "member = 3",
         "1:10 `member` is a table by name, not a bare number | write a header for each name: `[member.NAME]`",
-    ),
-    (
-        "tables of a later version",
-        r#"[point]
-a = 1
-[[hold]]
-[[watch]]
-[[load]]
-[body.x]
-"#,
-        r#"1:2 `point` (assemblies of members that share points) is not read by this version | take it out; nothing else stands for it yet
-3:3 `hold` (assemblies of members that share points) is not read by this version | take it out; nothing else stands for it yet
-4:3 `watch` (watched displacements) is not read by this version | take it out; nothing else stands for it yet
-5:3 `load` (loads on points and bodies) is not read by this version | loads stand in their member
-6:2 `body` (bodies that members carry) is not read by this version | take it out; nothing else stands for it yet"#,
     ),
     (
         "the heading",

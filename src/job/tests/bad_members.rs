@@ -25,17 +25,6 @@ stat = "fixed"
         "4:1 a member has no key `stat` | `start` comes nearest",
     ),
     (
-        "keys of a later version",
-        r#"[member.tie]
-start = "fixed"
-segment = [{ name = "rod", length = "2 m", section = { round = "20 mm" }, material = "steel-s355" }]
-between = ["a"]
-carries = "tension"
-"#,
-        r#"4:1 `between` (members between points) is not read by this version | take it out; nothing else stands for it yet
-5:1 `carries` (one-way members) is not read by this version | take it out; nothing else stands for it yet"#,
-    ),
-    (
         "an end that is neither",
         r#"[member.tie]
 start = "fixed"

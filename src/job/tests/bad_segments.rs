@@ -66,12 +66,12 @@ segment = [{ length = "2 mm ± 2 mm", section = { round = "20 mm" }, material = 
         r#"3:23 `length` must be more than 0 | write it as in "2.85 m""#,
     ),
     (
-        "lengths between points come later",
+        "what is left of no distance",
         r#"[member.m]
 start = "fixed"
 segment = [{ length = "rest", section = { round = "20 mm" }, material = "steel-s355" }]
 "#,
-        "3:23 `rest` (members between points) is not read by this version | write the length itself",
+        "3:23 `rest` is what is left between two points, and the member `m` lies between none | write the length itself, or `between` with two points in the member",
     ),
     (
         "a material that comes near two",

@@ -1,6 +1,7 @@
 //! Jobs that were damaged: whatever the text, reading ends in a model or in located problems.
 
 use super::good::{SMALL, WHOLE};
+use super::good_assembly::BEAM;
 use crate::job::{Source, read, render};
 use proptest::prelude::*;
 
@@ -48,6 +49,19 @@ const BITS: &[&str] = &[
     "\\u0000",
     "\"\"\"",
     "[member.H4]\n",
+    "[point]\n",
+    "[[hold]]\n",
+    "[[load]]\n",
+    "[[watch]]\n",
+    "\"rest\"",
+    "\"+x\"",
+    "[0, 1]",
+    "[\"0 m\", \"3 m\"]",
+    "[\"0 m\"]",
+    "between = [\"left\", \"b\"]\n",
+    "carries = \"tension\"\n",
+    "runs = \"up\"\n",
+    "like = \"alone\"\n",
 ];
 
 /// What is done to a job: a stretch of it is taken out, and a bit or another stretch put in.
@@ -86,14 +100,14 @@ fn ends_well(text: &str) {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(1500))]
+    #![proptest_config(ProptestConfig::with_cases(3000))]
 
     #[test]
     fn damaged_jobs_end_well(
-        cuts in prop::collection::vec((0usize..3000, 0usize..12, 0usize..80), 1..5),
-        whole in any::<bool>(),
+        cuts in prop::collection::vec((0usize..3000, 0usize..12, 0usize..90), 1..5),
+        job in prop::sample::select(vec![SMALL, WHOLE, BEAM]),
     ) {
-        ends_well(&damaged(if whole { WHOLE } else { SMALL }, &cuts));
+        ends_well(&damaged(job, &cuts));
     }
 
     #[test]
@@ -113,6 +127,12 @@ fn texts_that_once_were_hard_end_well() {
         "[[member.m]]",
         "[member.m.segment]",
         "[[case]]",
+        "[point]",
+        "[[point]]",
+        "[hold]",
+        "point.a = [\"1 m\"]\n[member.m]\nbetween = [\"a\", \"a\"]",
+        "[body.a]\n[[hold]]\n[[load]]\n[[watch]]",
+        "[member.m]\nbetween = [\"a\", \"b\"]\nsegment = []\n[point]\na = [\"0 m\"]\nb = [\"1e-99 m\"]",
         "member.m = { segment = [1, \"x\", {}, []] }",
         "\n\n  [member.m]\r\nsegment = [{ gap = \"1 mm\" }]\r\nload = [{ misfit = \"1 mm\" }]\r\n",
     ] {

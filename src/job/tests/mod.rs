@@ -1,6 +1,8 @@
 //! Reading whole jobs. Expected values are worked by hand from the job's own numbers.
 
+mod bad_assembly;
 mod bad_files;
+mod bad_holds;
 mod bad_loads;
 mod bad_members;
 mod bad_segments;
@@ -9,9 +11,11 @@ mod draw;
 mod follow_ups;
 mod fuzz;
 mod good;
+mod good_assembly;
 mod good_combinations;
 mod good_limits;
 mod good_members;
+mod good_spaces;
 
 use super::{Source, read};
 use std::fmt::Write;

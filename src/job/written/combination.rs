@@ -1,5 +1,6 @@
-//! `[combination.NAME]`: factors on cases.
+//! `[combination.NAME]`: factors on cases, and which members are taken out.
 
+use super::assembly::names;
 use super::fields::{Entry, Fields, Keys, Value, Written, named};
 use super::{Reader, value};
 use crate::job::nearest::remedy;
@@ -8,7 +9,7 @@ use toml::de::DeValue;
 
 pub(crate) const KEYS: Keys = Keys {
     table: "combination",
-    keys: &["purpose", "factors", "modulus"],
+    keys: &["purpose", "factors", "modulus", "without", "lose-each"],
 };
 
 /// A combination as written, its lists not multiplied out.
@@ -21,6 +22,10 @@ pub(crate) struct Combination<'t> {
     pub(crate) factors: Vec<(Written<&'t str>, Written<Factors>)>,
     /// By material.
     pub(crate) modulus: Vec<(Written<&'t str>, f64)>,
+    /// The members that are taken out.
+    pub(crate) without: Entry<Vec<Written<&'t str>>>,
+    /// The members of which each is taken out in a combination of its own.
+    pub(crate) lose_each: Entry<Vec<Written<&'t str>>>,
     /// Whether its factors are whole: without them it cannot be multiplied out.
     pub(crate) sound: bool,
 }
@@ -40,6 +45,8 @@ impl<'t> Combination<'t> {
             purpose: Entry::Wrong,
             factors: Vec::new(),
             modulus: Vec::new(),
+            without: Entry::Wrong,
+            lose_each: Entry::Wrong,
             sound: false,
         };
         let Some(mut fields) = Fields::of(table, KEYS, r) else {
@@ -69,7 +76,6 @@ impl<'t> Combination<'t> {
             combination.factors = read;
             sound.then_some(())
         });
-        combination.sound = factors != Some(None);
         if let Some(value) = fields.get("modulus") {
             let help = "write a factor for each material: `modulus = { concrete-c40 = 0.33 }`";
             for (material, value) in named(value, "modulus", help, r).unwrap_or_default() {
@@ -83,6 +89,10 @@ impl<'t> Combination<'t> {
                 }
             }
         }
+        combination.without = fields.entry("without", r, names("member"));
+        combination.lose_each = fields.entry("lose-each", r, names("member"));
+        let lost = [&combination.without, &combination.lose_each];
+        combination.sound = factors != Some(None) && !lost.into_iter().any(Entry::is_wrong);
         fields.finish(r);
         combination
     }

@@ -299,6 +299,9 @@ fn shape(table: &str) -> &'static str {
         "limit of a gap" => "write it as in `{ min = \"3 mm\" }`",
         "load" => "write it as in `{ at = \"end\", force = \"62 kN\" }`",
         "support" => "write it as in `{ at = \"end\", spring = \"35 kN/mm\" }`",
+        "hold" => "write it as in `{ point = \"a\", along = [\"y\"] }`",
+        "load of the job" => "write it as in `{ point = \"a\", force = [\"0 kN\", \"-25 kN\"] }`",
+        "watch" => "write it as in `{ point = \"a\", along = \"y\", limit = \"4 mm\" }`",
         _ => "write its keys in { } or under a header",
     }
 }

@@ -3,27 +3,6 @@
 
 /// The table in which it stands (`""` for any), the key, and what it is about.
 const LATER: &[(&str, &str, &str)] = &[
-    (
-        "job file",
-        "point",
-        "assemblies of members that share points",
-    ),
-    ("job file", "body", "bodies that members carry"),
-    (
-        "job file",
-        "hold",
-        "assemblies of members that share points",
-    ),
-    ("job file", "watch", "watched displacements"),
-    (
-        "job file",
-        "load",
-        "loads on points and bodies; loads stand in their member",
-    ),
-    ("member", "between", "members between points"),
-    ("member", "carries", "one-way members"),
-    ("combination", "without", "members taken out"),
-    ("combination", "lose-each", "members taken out"),
     ("material", "thermal-strain", "laws of temperature"),
     ("material", "modulus-at", "laws of temperature"),
     ("material", "yield-at", "laws of temperature"),
@@ -58,10 +37,8 @@ const LATER: &[(&str, &str, &str)] = &[
     ("section", "stock", "stock sizes; write `round` or `bar`"),
     ("limit of a member", "strength", "clauses of standards"),
     ("limit of a member", "buckling", "buckling checks"),
-    ("limit of a member", "slack", "one-way members"),
     ("limit of a segment", "strength", "clauses of standards"),
     ("limit of a segment", "buckling", "buckling checks"),
-    ("limit of a segment", "slack", "one-way members"),
     ("segment", "column", "columns of buckling checks"),
     ("member", "column", "columns of buckling checks"),
 ];

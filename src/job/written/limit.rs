@@ -1,4 +1,4 @@
-//! `limit` on members, segments, layers and supports.
+//! `limit` on members, segments, layers, supports and holds.
 
 use super::fields::{Entry, Fields, Keys, Value, Written, unknown_key};
 use super::station::{Station, station};
@@ -18,6 +18,7 @@ pub(crate) const OF_MEMBER: Keys = Keys {
         "force",
         "elongation",
         "displacement",
+        "slack",
         "in",
         "since",
         "source",
@@ -52,6 +53,10 @@ pub(crate) const OF_SUPPORT: Keys = Keys {
     table: "limit of a support",
     keys: &["reaction", "in", "source"],
 };
+pub(crate) const OF_HOLD: Keys = Keys {
+    table: "limit of a hold",
+    keys: &["reaction", "in", "source"],
+};
 pub(crate) const OF_STOP: Keys = Keys {
     table: "limit of a stop",
     keys: &["reaction", "gap", "bears", "in", "source"],
@@ -74,6 +79,9 @@ pub(crate) enum Stands {
     Gap,
     Layer,
     Support,
+    /// A hold without a stop.
+    Hold,
+    /// A stop, of a support or of a hold.
     Stop,
 }
 
@@ -86,6 +94,7 @@ impl Stands {
             Stands::Gap => OF_GAP,
             Stands::Layer => OF_LAYER,
             Stands::Support => OF_SUPPORT,
+            Stands::Hold => OF_HOLD,
             Stands::Stop => OF_STOP,
         }
     }
@@ -99,6 +108,7 @@ pub(crate) struct Limits<'t> {
     pub(crate) force: Entry<Bound<Force>>,
     pub(crate) elongation: Entry<Bound<MovementBound>>,
     pub(crate) displacement: Entry<Vec<Displacement<'t>>>,
+    pub(crate) slack: Entry<()>,
     pub(crate) reaction: Entry<Bound<Force>>,
     pub(crate) gap: Entry<(Option<Length>, Option<Length>)>,
     pub(crate) bears: Entry<()>,
@@ -148,6 +158,7 @@ impl<'t> Limits<'t> {
             force: Entry::Absent,
             elongation: Entry::Absent,
             displacement: Entry::Absent,
+            slack: Entry::Absent,
             reaction: Entry::Absent,
             gap: Entry::Absent,
             bears: Entry::Absent,
@@ -163,6 +174,7 @@ impl<'t> Limits<'t> {
                 "force" => limits.force = fields.entry(key, r, force_bound),
                 "elongation" => limits.elongation = fields.entry(key, r, movement_bound),
                 "displacement" => limits.displacement = fields.entry(key, r, displacements),
+                "slack" => limits.slack = fields.entry(key, r, slack),
                 "reaction" => limits.reaction = fields.entry(key, r, force_bound),
                 "gap" => limits.gap = fields.entry(key, r, gap),
                 "bears" => limits.bears = fields.entry(key, r, bears),
@@ -218,7 +230,8 @@ fn elsewhere<'t>(fields: &Fields<'t>, value: &'t Value<'t>, known: Keys, r: &mut
             "force" | "elongation" => "a member or a segment",
             "displacement" => "a member",
             "since" => "an elongation or a displacement",
-            "reaction" => "a support",
+            "slack" => "a member",
+            "reaction" => "a support or a hold",
             "gap" | "bears" => "a stop or a gap segment",
             _ => {
                 unknown_key(name, &key.span(), &fields.place, known, r);
@@ -231,7 +244,8 @@ fn elsewhere<'t>(fields: &Fields<'t>, value: &'t Value<'t>, known: Keys, r: &mut
     }
 }
 
-fn names<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Vec<Written<&'t str>>> {
+/// The names of combinations and purposes that `in` says.
+pub(crate) fn names<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Vec<Written<&'t str>>> {
     let mut names = Vec::new();
     let mut add = |value: &'t Value<'t>, r: &mut Reader<'t>| {
         let name = value::text(value, r)?;
@@ -260,7 +274,8 @@ fn names<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Vec<Written<&'t
     Some(names)
 }
 
-fn bound<'t, T>(
+/// A size, or a pair with a bound for each sign; `size` is the number whose sign counts.
+pub(crate) fn bound<'t, T>(
     value: &'t Value<'t>,
     r: &mut Reader<'t>,
     read: impl Fn(&'t Value<'t>, &mut Reader<'t>) -> Option<T>,
@@ -350,6 +365,16 @@ fn bears<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<()> {
         r.problems.say(&value.span(), message, help);
     }
     bears.then_some(())
+}
+
+fn slack<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<()> {
+    let slack = value::boolean(value, r)?;
+    if slack {
+        let message = "`slack = true` is no limit";
+        let help = "write `slack = false` for a member that must carry; else leave it out";
+        r.problems.say(&value.span(), message, help);
+    }
+    (!slack).then_some(())
 }
 
 fn area<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<AreaUsed> {

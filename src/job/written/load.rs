@@ -201,7 +201,7 @@ fn places_fit(fields: &Fields<'_>, action: &str, r: &mut Reader<'_>) -> bool {
 }
 
 /// A value, or a table of values by case.
-fn by_case<'t, T>(
+pub(crate) fn by_case<'t, T>(
     value: &'t Value<'t>,
     r: &mut Reader<'t>,
     read: impl Fn(&'t Value<'t>, &mut Reader<'t>) -> Option<T>,

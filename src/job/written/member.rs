@@ -6,7 +6,8 @@ use super::load::Load;
 use super::segment::Segment;
 use super::support::Support;
 use super::{Reader, value};
-use crate::model::Place;
+use crate::job::nearest::remedy;
+use crate::model::{Carries, Place};
 use crate::quantity::{self, Angle, ThermodynamicTemperature};
 use std::f64::consts::FRAC_PI_2;
 use toml::de::DeValue;
@@ -18,7 +19,8 @@ const DIRECTIONS: &str =
 pub(crate) const KEYS: Keys = Keys {
     table: "member",
     keys: &[
-        "like", "note", "start", "end", "runs", "datum", "segment", "support", "load", "limit",
+        "like", "note", "start", "end", "runs", "datum", "between", "carries", "segment",
+        "support", "load", "limit",
     ],
 };
 pub(crate) const DEFAULT: Keys = Keys {
@@ -38,6 +40,9 @@ pub(crate) struct Member<'t> {
     pub(crate) end: Entry<()>,
     pub(crate) runs: Entry<Angle>,
     pub(crate) datum: Entry<ThermodynamicTemperature>,
+    /// The points at its start and at its end.
+    pub(crate) between: Entry<[Written<&'t str>; 2]>,
+    pub(crate) carries: Entry<Carries>,
     pub(crate) segments: Entry<Vec<Segment<'t>>>,
     pub(crate) supports: Entry<Vec<Support<'t>>>,
     pub(crate) loads: Entry<Vec<Load<'t>>>,
@@ -71,6 +76,8 @@ impl<'t> Member<'t> {
             limits: fields.entry("limit", r, |value, r| {
                 Limits::read(value, Stands::Member, r)
             }),
+            between: fields.entry("between", r, between),
+            carries: fields.entry("carries", r, carries),
         };
         fields.finish(r);
         member
@@ -85,6 +92,8 @@ impl<'t> Member<'t> {
             end: Entry::Wrong,
             runs: Entry::Wrong,
             datum: Entry::Wrong,
+            between: Entry::Wrong,
+            carries: Entry::Wrong,
             segments: Entry::Wrong,
             supports: Entry::Wrong,
             loads: Entry::Wrong,
@@ -159,6 +168,55 @@ fn fixed<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<()> {
     let help = "write \"fixed\"; leave it out for a free end; springs and stops are a `support`";
     r.problems.say(&value.span(), message, help);
     None
+}
+
+/// The names of two points.
+fn between<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<[Written<&'t str>; 2]> {
+    let help = "write the names of the points at its start and at its end, as in `[\"a\", \"b\"]`";
+    let list = match value.get_ref() {
+        DeValue::Array(list) => list,
+        other => {
+            let message = format!("`between` names two points, and here is {}", kind_of(other));
+            r.problems.say(&value.span(), message, help);
+            return None;
+        }
+    };
+    if list.len() != 2 {
+        let message = format!("`between` names two points, and here are {}", list.len());
+        r.problems.say(&value.span(), message, help);
+        return None;
+    }
+    let mut names = list.iter().map(|value| {
+        value::text(value, r).map(|name| Written {
+            value: name,
+            place: value.span(),
+        })
+    });
+    let (start, end) = (names.next().flatten(), names.next().flatten());
+    let (start, end) = (start?, end?);
+    if start.value == end.value {
+        let message = format!("this member goes from the point `{}` to itself", end.value);
+        let help = "name another point at one of its ends";
+        r.problems.say(&end.place, message, help);
+        return None;
+    }
+    Some([start, end])
+}
+
+fn carries<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<Carries> {
+    match value::text(value, r)? {
+        "tension" => Some(Carries::Tension),
+        "compression" => Some(Carries::Compression),
+        other => {
+            let message = format!(
+                "a member carries `tension` or `compression` alone, or both where `carries` is \
+                 left out, not `{other}`"
+            );
+            let help = remedy(other, ["tension", "compression"], "write one of");
+            r.problems.say(&value.span(), message, help);
+            None
+        }
+    }
 }
 
 /// The direction from start to end as an angle above level.

@@ -1,6 +1,7 @@
 //! A job as written: each key and value with its place, read table by table. What is wrong with a
 //! value by itself is found here; what values mean together is the next phase.
 
+pub(crate) mod assembly;
 pub(crate) mod case;
 pub(crate) mod combination;
 pub(crate) mod fields;
@@ -35,11 +36,17 @@ pub(crate) const KEYS: Keys = Keys {
         "material",
         "default",
         "member",
+        "point",
+        "body",
+        "hold",
+        "load",
+        "watch",
     ],
 };
 
 /// Every kind of table with the keys that its reader asks for. Tables whose keys are names
-/// (`case`, `combination`, `material`, `member`, factors, values by case) are not among them.
+/// (`case`, `combination`, `material`, `member`, `point`, factors, values by case) are not among
+/// them.
 pub(super) const TABLES: &[Keys] = &[
     KEYS,
     heading::KEYS,
@@ -61,12 +68,17 @@ pub(super) const TABLES: &[Keys] = &[
     section::TEE,
     support::KEYS,
     load::KEYS,
+    assembly::body::KEYS,
+    assembly::hold::KEYS,
+    assembly::load::KEYS,
+    assembly::watch::KEYS,
     limit::OF_MEMBER,
     limit::OF_SEGMENT,
     limit::OF_PART,
     limit::OF_GAP,
     limit::OF_LAYER,
     limit::OF_SUPPORT,
+    limit::OF_HOLD,
     limit::OF_STOP,
     limit::GAP,
     limit::DISPLACEMENT,
@@ -108,6 +120,7 @@ pub(crate) struct Job<'t> {
     pub(crate) materials: Vec<material::Material<'t>>,
     pub(crate) default: member::Default<'t>,
     pub(crate) members: Vec<member::Member<'t>>,
+    pub(crate) assembly: assembly::Assembly<'t>,
 }
 
 impl<'t> Job<'t> {
@@ -116,7 +129,9 @@ impl<'t> Job<'t> {
         let heading = fields
             .get("job")
             .and_then(|value| heading::Heading::read(value, r));
+        let assembly = assembly::Assembly::read(&mut fields, r);
         let mut job = Job {
+            assembly,
             heading,
             cases: Vec::new(),
             combinations: Vec::new(),
@@ -166,7 +181,12 @@ fn tables<'t>(
     let Some(value) = fields.get(key) else {
         return Vec::new();
     };
-    let help = "write a header for each name: `[".to_owned() + key + ".NAME]`";
+    let help = match key {
+        "point" => {
+            "write a line for each below `[point]`, as in `a = [\"4.2 m\", \"3 m\"]`".to_owned()
+        }
+        _ => "write a header for each name: `[".to_owned() + key + ".NAME]`",
+    };
     let tables = named(value, key, &help, r);
     if tables.is_none() {
         r.problems.lost(key);

@@ -1,7 +1,6 @@
 //! `[[member.NAME.segment]]` and its layers.
 
 use super::fields::{Entry, Fields, Keys, Value, list};
-use super::later::refusal;
 use super::limit::{Limits, Stands};
 use super::section::{dimension, section};
 use super::{Reader, value};
@@ -46,9 +45,27 @@ pub(crate) struct Segment<'t> {
     pub(crate) place: Place,
     pub(crate) name: Entry<&'t str>,
     /// Its length; the width of a gap.
-    pub(crate) length: Entry<Length>,
+    pub(crate) length: Entry<Extent>,
     pub(crate) kind: Kind<'t>,
     pub(crate) limits: Entry<Vec<Limits<'t>>>,
+}
+
+/// How long a segment is.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub(crate) enum Extent {
+    Length(Length),
+    /// What is left of the distance between the member's points.
+    Rest,
+}
+
+impl Segment<'_> {
+    /// Its length, where it is written and sound.
+    pub(crate) fn own_length(&self) -> Option<Length> {
+        match self.length.given()?.value {
+            Extent::Length(length) => Some(length),
+            Extent::Rest => None,
+        }
+    }
 }
 
 /// What a segment is made of, as written.
@@ -109,7 +126,9 @@ impl<'t> Segment<'t> {
         let place = fields.place.clone();
         let name = fields.entry("name", r, value::part_name);
         let (length, kind, stands) = if fields.has("gap") {
-            let width = fields.entry("gap", r, value::positive("gap"));
+            let width = fields.entry("gap", r, |value, r| {
+                value::positive("gap")(value, r).map(Extent::Length)
+            });
             let stiffness = fields.entry("stiffness", r, value::positive("stiffness"));
             alone(&fields, "gap", &["name", "gap", "stiffness", "limit"], r);
             (width, Kind::Gap { stiffness }, Stands::Gap)
@@ -199,15 +218,12 @@ impl<'t> Layer<'t> {
     }
 }
 
-fn length<'t>(fields: &mut Fields<'t>, r: &mut Reader<'t>) -> Entry<Length> {
+fn length<'t>(fields: &mut Fields<'t>, r: &mut Reader<'t>) -> Entry<Extent> {
     fields.required("length", "\"2.85 m\"", r, |value, r| {
         if matches!(value.get_ref(), DeValue::String(text) if text == "rest") {
-            let about = "members between points; write the length itself";
-            let (message, help) = refusal("rest", about);
-            r.problems.say(&value.span(), message, help);
-            return None;
+            return Some(Extent::Rest);
         }
-        value::positive("length")(value, r)
+        value::positive("length")(value, r).map(Extent::Length)
     })
 }
 

@@ -32,7 +32,15 @@ pub(crate) fn station<'t>(value: &'t Value<'t>, r: &mut Reader<'t>) -> Option<St
         r.problems.say(&value.span(), message, STATIONS);
         return None;
     };
-    let text = text.as_ref();
+    station_in(text, value, r)
+}
+
+/// The station that a text, or a part of one, says.
+pub(crate) fn station_in<'t>(
+    text: &'t str,
+    value: &'t Value<'t>,
+    r: &mut Reader<'t>,
+) -> Option<Station<'t>> {
     if let Some(station) = named(text) {
         return Some(station);
     }

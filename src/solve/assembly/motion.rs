@@ -368,9 +368,9 @@ pub(super) fn list(names: &[String]) -> String {
         [] => String::new(),
         [only] => only.clone(),
         [few @ .., last] if names.len() <= NAMES + 1 => format!("{} and {last}", few.join(", ")),
-        [first @ ..] => format!(
+        many => format!(
             "{} and {} more",
-            first[..NAMES].join(", "),
+            many[..NAMES].join(", "),
             names.len() - NAMES
         ),
     }

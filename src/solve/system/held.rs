@@ -1,21 +1,21 @@
 //! The system in one set of states, held and factored: every acting part pulls and pushes.
 
 use super::choice::Couplings;
-use super::dense::Dense;
+use super::factor::{Factored, Springs};
 use super::rigid::{Elimination, Workspace};
 use super::singular::free_directions;
 use super::tableau::work;
 use super::twofold::Twofold;
 use super::{Loads, Row, System};
 
-/// A pivot smaller than this beside its diagonal is looked at: the motion may be free.
-const SUSPICIOUS: f64 = 1e-7;
-
 /// A residual of so many roundings of its terms needs no more refinement.
 const STILL: f64 = 8.0 * f64::EPSILON;
 
 /// Refinement that goes on for so long would not end.
 const ROUNDS: usize = 10;
+
+/// Of so many pushed motions the one pushed most is looked for; beyond it any of them tells enough.
+const MIXED: usize = 32;
 
 /// Which part a row belongs to.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord)]
@@ -35,11 +35,9 @@ pub(super) struct Held {
     unknowns: usize,
     elimination: Elimination,
     springs: Vec<(Part, f64)>,
-    factor: Dense,
-    pinned: Vec<usize>,
+    factored: Factored,
     /// Motions that nothing resists.
     pub(super) motions: Vec<Row>,
-    pub(super) condition: f64,
 }
 
 /// Displacements and forces in one set of states.
@@ -71,45 +69,39 @@ impl Held {
         }
         let rows: Vec<&[(usize, f64)]> = rigid.iter().map(|&part| system.row(part)).collect();
         let elimination = Elimination::of(&rows, unknowns);
-        let size = elimination.free().len();
 
         let mut workspace = Workspace::new(unknowns);
-        let mut entries = Vec::new();
-        let mut starts = vec![0];
-        for &(part, _) in &springs {
-            elimination.reduce_row(system.row(part), &mut workspace, &mut entries);
-            starts.push(entries.len());
+        let mut reduced = Springs::default();
+        for &(part, stiffness) in &springs {
+            elimination.reduce_row(system.row(part), &mut workspace, &mut reduced.entries);
+            reduced.ends.push(reduced.entries.len());
+            reduced.stiffness.push(stiffness);
         }
-        let row = |spring: usize| &entries[starts[spring]..starts[spring + 1]];
-        let stiff = || (0..springs.len()).map(|spring| (springs[spring].1, row(spring)));
-
-        let mut made = Held {
-            factor: Dense::of(size, stiff(), &[]),
+        let places: Vec<[f64; 3]> = elimination
+            .free()
+            .iter()
+            .map(|&unknown| system.places[unknown])
+            .collect();
+        let factored = Factored::of(&reduced, &places);
+        let motions = factored
+            .motions
+            .iter()
+            .map(|motion| elimination.expand_motion(motion))
+            .collect();
+        Held {
             acts,
             rigid,
             unknowns,
             elimination,
-            springs: Vec::new(),
-            pinned: Vec::new(),
-            motions: Vec::new(),
-            condition: 1.0,
-        };
-        made.condition = made.factor.growth();
-        if made.condition > 1.0 / SUSPICIOUS {
-            let free = free_directions(size, (0..springs.len()).map(row));
-            if !free.pins.is_empty() {
-                made.factor = Dense::of(size, stiff(), &free.pins);
-            }
-            made.condition = made.factor.growth().min(free.least.powi(-2));
-            made.pinned = free.pins;
-            let mut all = vec![0.0; unknowns];
-            for motion in free.motions {
-                made.elimination.expand_motion(&motion, &mut all);
-                made.motions.push(largest_to_one(&all));
-            }
+            springs,
+            factored,
+            motions,
         }
-        made.springs = springs;
-        made
+    }
+
+    /// See [`super::Answer::condition`].
+    pub(super) fn condition(&self) -> f64 {
+        self.factored.condition
     }
 
     /// Displacements and forces under loads, free motions at 0 in their pinned unknown; or the
@@ -146,7 +138,7 @@ impl Held {
             for (x, &unknown) in correction.iter_mut().zip(free) {
                 *x = unbalanced[unknown].value();
             }
-            for &pin in &self.pinned {
+            for &pin in &self.factored.pinned {
                 correction[pin] = 0.0;
             }
             let largest = correction
@@ -160,7 +152,7 @@ impl Held {
                 break;
             }
             worst = largest;
-            self.factor.solve(&mut correction);
+            self.factored.solve(&mut correction);
             for (sum, &more) in left.iter_mut().zip(&correction) {
                 *sum = sum.plus(more);
             }
@@ -245,16 +237,14 @@ impl Held {
             .collect()
     }
 
-    /// Of all free motions the one along which the loads push most, for its size.
+    /// Of the free motions that are pushed the mixture that is pushed most, for its size.
     pub(super) fn pushed_motion(&self, loads: &Loads) -> Row {
         // The forces less what is square to all motions: a projection on a basis made square.
         let mut square: Vec<Vec<f64>> = Vec::new();
         let mut along = vec![0.0; self.unknowns];
         let dot = |a: &[f64], b: &[f64]| a.iter().zip(b).map(|(a, b)| a * b).sum::<f64>();
-        for motion in &self.motions {
-            if work(motion, loads).abs() <= loads.zero.force.value {
-                continue;
-            }
+        let pushed = |motion: &&Row| work(motion, loads).abs() > loads.zero.force.value;
+        for motion in self.motions.iter().filter(pushed).take(MIXED) {
             let mut rest = vec![0.0; self.unknowns];
             for &(unknown, share) in motion {
                 rest[unknown] = share;

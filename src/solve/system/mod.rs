@@ -9,11 +9,14 @@
 
 mod choice;
 mod dense;
+mod factor;
 mod held;
 mod lemke;
+mod order;
 mod prepared;
 mod rigid;
 mod singular;
+mod sparse;
 mod split;
 mod tableau;
 #[cfg(test)]

@@ -308,7 +308,7 @@ impl Prepared {
             free,
             undecided_rigid,
             undecided_one_way,
-            condition: held.condition,
+            condition: held.condition(),
         }
     }
 }

@@ -101,20 +101,20 @@ impl Elimination {
         &self.free
     }
 
-    /// A row over the unknowns that are left, by their places among them.
+    /// Adds a row over the unknowns that are left, by their rising places among them.
     pub(super) fn reduce_row(
         &self,
         row: &[(usize, f64)],
         workspace: &mut Workspace,
         reduced: &mut Vec<(usize, f64)>,
     ) {
+        let from = reduced.len();
         if row.iter().all(|entry| self.removed_by[entry.0] == NONE) {
             reduced.extend(row.iter().map(|&(u, b)| (self.place[u], b)));
-            return;
+        } else {
+            self.substitute(row, workspace);
+            workspace.drain(|unknown, b| reduced.push((self.place[unknown], b)));
         }
-        self.substitute(row, workspace);
-        let from = reduced.len();
-        workspace.drain(|unknown, b| reduced.push((self.place[unknown], b)));
         reduced[from..].sort_unstable_by_key(|entry| entry.0);
     }
 
@@ -170,23 +170,28 @@ impl Elimination {
         }
     }
 
-    /// A motion of all unknowns from one of those that are left; entries that are 0 are left out.
-    pub(super) fn expand_motion(&self, left: &[f64], all: &mut [f64]) {
-        for (&unknown, &value) in self.free.iter().zip(left) {
-            all[unknown] = value;
-        }
-        for step in self.steps.iter().rev() {
-            let (mut sum, mut size) = (0.0, 0.0_f64);
-            for &(other, coefficient) in &step.others {
-                sum -= coefficient * all[other];
-                size += (coefficient * all[other]).abs();
+    /// A motion of all unknowns from one of those that are left, its largest entry 1 in size.
+    pub(super) fn expand_motion(&self, left: &[(usize, f64)]) -> Vec<(usize, f64)> {
+        let mut all: BTreeMap<usize, f64> = left
+            .iter()
+            .map(|&(place, share)| (self.free[place], share))
+            .collect();
+        if !self.steps.is_empty() {
+            for step in self.steps.iter().rev() {
+                let (mut sum, mut size) = (0.0, 0.0_f64);
+                for (other, coefficient) in &step.others {
+                    let term = coefficient * all.get(other).copied().unwrap_or(0.0);
+                    sum -= term;
+                    size += term.abs();
+                }
+                if sum.abs() > CANCELLED * size {
+                    all.insert(step.unknown, sum);
+                }
             }
-            all[step.unknown] = if sum.abs() > CANCELLED * size {
-                sum
-            } else {
-                0.0
-            };
         }
+        let largest = all.values().fold(0.0_f64, |most, x| most.max(x.abs()));
+        let entries = all.into_iter();
+        entries.map(|(unknown, x)| (unknown, x / largest)).collect()
     }
 
     /// Moves forces on removed unknowns to those that are left. On a removed unknown stays what its

@@ -21,11 +21,13 @@ pub(super) fn free_directions<'r>(
     rows: impl Iterator<Item = &'r [(usize, f64)]>,
 ) -> FreeDirections {
     let mut table: Vec<f64> = Vec::new();
+    let mut count = 0;
     for row in rows {
         let largest = row
             .iter()
             .fold(0.0_f64, |most, entry| most.max(entry.1.abs()));
         if largest > 0.0 {
+            count += 1;
             let from = table.len();
             table.resize(from + size, 0.0);
             for &(unknown, b) in row {
@@ -33,7 +35,6 @@ pub(super) fn free_directions<'r>(
             }
         }
     }
-    let count = if size == 0 { 0 } else { table.len() / size };
     let mut columns: Vec<usize> = (0..size).collect();
     let mut rank = 0;
     let mut least = 1.0_f64;

@@ -86,8 +86,8 @@ mod tests {
 
     #[test]
     fn a_twofold_factor_counts_with_both_halves() {
-        let third = Twofold::from(1.0 / 3.0).plus(1.0 / 3.0 * f64::EPSILON / 4.0);
-        // 1/3 in doubles is too small by a quarter of epsilon times 1/3 · 1; three of them make 1.
-        assert_eq!(third.times(3.0).plus(-1.0).value().abs() < 1e-31, true);
+        // 1/3 in doubles is too small by 2⁻⁵⁴/3; with that as its lower half three of them make 1.
+        let third = Twofold::from(1.0 / 3.0).plus(2.0_f64.powi(-54) / 3.0);
+        assert!(third.times(3.0).plus(-1.0).value().abs() < 1e-31);
     }
 }

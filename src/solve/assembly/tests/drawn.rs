@@ -5,6 +5,7 @@ use crate::model::{
     MomentOnBody, MovementOfHold, Name, Point, Spatial, WeightOfBody,
 };
 use crate::quantity::{Length, Style, from_si};
+use crate::result::{CombinationResult, Residuals};
 use crate::solve::{AssemblySolution, PreparedAssembly, SolveError};
 
 /// A model whose members have no supports, with an assembly around them.
@@ -206,11 +207,37 @@ impl Drawn {
         prepared.solve(&model.combinations[0])
     }
 
+    /// The solution, which must prove itself.
     pub(super) fn solve(&self) -> AssemblySolution {
         match self.try_solve() {
-            Ok(solution) => solution,
+            Ok(solution) => {
+                let residuals = self.residuals(&solution);
+                assert!(residuals.prove(), "{residuals:?}");
+                solution
+            }
             Err(errors) => panic!("{errors:?}"),
         }
+    }
+
+    fn residuals(&self, solution: &AssemblySolution) -> Residuals {
+        let model = self.model();
+        let combination = &model.combinations[0];
+        let members = solution.members.iter();
+        let result = CombinationResult {
+            name: combination.name.clone(),
+            purpose: None,
+            factors: Default::default(),
+            without: Vec::new(),
+            members: members.map(|(_, member)| member.clone()).collect(),
+            points: solution.points.clone(),
+            holds: solution.holds.clone(),
+            bodies: solution.bodies.clone(),
+            watches: Vec::new(),
+            totals: Some(solution.totals.clone()),
+            residuals: Residuals::default(),
+            checks: Vec::new(),
+        };
+        crate::proof::assembly(&model, combination, &result)
     }
 
     /// The words of the motion that is pushed.

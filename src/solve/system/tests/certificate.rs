@@ -185,3 +185,48 @@ fn every_outcome_of_random_systems_proves_itself() {
     assert_eq!(wrong, 0);
     assert!(solved > 5_000 && pushed > 2_000 && contradicted > 1_000 && free > 1_000);
 }
+
+/// Coefficients of any size and stiffness from 1 to 10⁹ beside rigid parts: states, signs and laws
+/// hold as well.
+#[test]
+fn states_among_far_apart_stiffness_prove_themselves() {
+    let (mut solved, mut open) = (0, 0);
+    for seed in 0..5_000 {
+        let mut draw = Draw(seed);
+        let unknowns = 2 + draw.below(7);
+        let mut sketch = Sketch::of(unknowns);
+        for part in 0..2 * unknowns + 4 {
+            let mut row = Row::new();
+            for unknown in 0..unknowns {
+                if draw.below(3) != 0 {
+                    row.push((unknown, 2.0 * draw.share() - 1.0));
+                }
+            }
+            let stiffness = 10.0_f64.powf(9.0 * draw.share());
+            sketch = match part % 4 {
+                0 => sketch.elastic(row, stiffness, 0.01 * draw.share()),
+                1 => sketch.one_way(row, None, 0.01 * draw.share()),
+                _ => sketch.one_way(row, Some(stiffness), 0.01 * draw.share()),
+            };
+        }
+        for unknown in 0..unknowns {
+            let force = draw.whole(9);
+            sketch = sketch.force(unknown, force);
+        }
+        let sketch = sketch.ready();
+        let outcome = Prepared::of(sketch.system.clone()).solve(&sketch.loads);
+        let proof = match &outcome {
+            Ok(answer) => {
+                solved += 1;
+                open += answer.acts.iter().filter(|acts| !**acts).count();
+                proves(&sketch, answer)
+            }
+            Err(failure) => proves_failure(&sketch, failure),
+        };
+        proof.unwrap_or_else(|why| panic!("seed {seed}: {why}\n{outcome:?}"));
+    }
+    assert!(
+        solved > 1_000 && open > 5_000,
+        "{solved} solved, {open} open"
+    );
+}

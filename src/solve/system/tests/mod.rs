@@ -3,6 +3,8 @@
 mod by_hand;
 mod certificate;
 mod draw;
+mod enumeration;
+mod extremes;
 
 use super::{Elastic, Loads, OneWay, Row, System};
 use crate::quantity::from_si;
