@@ -37,7 +37,7 @@ impl Root {
 
 /// So many names are looked through for the nearest in one job: a file that is nothing but unknown
 /// names would take hours otherwise.
-const LOOKED_THROUGH: usize = 2_000_000;
+const LOOKED_THROUGH: usize = 1_000_000;
 
 /// The names of a job by what bears them.
 pub(super) struct Names<'t> {

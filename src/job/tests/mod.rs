@@ -3,10 +3,13 @@
 mod bad_assembly;
 mod bad_files;
 mod bad_holds;
+mod bad_job_loads;
 mod bad_loads;
 mod bad_members;
+mod bad_one_way;
 mod bad_segments;
 mod bad_tables;
+mod bad_watches;
 mod draw;
 mod follow_ups;
 mod fuzz;
