@@ -192,7 +192,7 @@ impl Breaks {
                 let before = index.checked_sub(1).and_then(|index| bytes.get(index));
                 // An axis at the end stays with its quantity.
                 let is_axis = bytes.len() == index + 2;
-                !is_axis && !(digit(before) && digit(bytes.get(index + 1)))
+                !(is_axis || digit(before) && digit(bytes.get(index + 1)))
             }
             Breaks::Names => character == ' ',
         };
