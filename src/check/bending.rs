@@ -3,7 +3,7 @@
 use super::Observed;
 use super::caution::Look;
 use crate::model::{Between, Body, Combination, Member, Model, Remark, SegmentKind};
-use crate::quantity::{Dimension, Force, Length, STANDARD_GRAVITY, Style, Units, from_si};
+use crate::quantity::{Dimension, Force, Length, STANDARD_GRAVITY, from_si};
 use std::collections::BTreeSet;
 
 /// What acts across a member in some combination.
@@ -101,7 +101,7 @@ fn between_points(look: &Look, between: &Between) -> Option<Remark> {
     look.caution(
         format!(
             "weight or loads of {force} in `{combination}` act across it: they go to its two ends, and bend it by up to about {} between them (as a beam on two supports), which no check here looks at",
-            shown(look.style, moment),
+            look.style.quantity(Dimension::Moment, moment),
         ),
         None,
     )
@@ -167,17 +167,4 @@ fn weight_of(model: &Model, member: &Member, segment: usize, layer: usize) -> Fo
     };
     let mass = per_length.map_or(0.0, |per_length| (per_length * segment.length).value);
     from_si(mass * STANDARD_GRAVITY)
-}
-
-/// A moment in kN m or kip ft.
-fn shown(style: Style, moment: f64) -> String {
-    const FOOT: f64 = 0.3048;
-    let (per_unit_of_length, unit) = match style.units {
-        Units::SI => (moment, "kN m"),
-        Units::US => (moment / FOOT, "kip ft"),
-    };
-    format!(
-        "{} {unit}",
-        style.number(Dimension::Force, per_unit_of_length)
-    )
 }

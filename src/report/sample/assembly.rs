@@ -153,10 +153,11 @@ fn job(combinations: Vec<CombinationResult>) -> JobResult {
         range("H1.elongation", Unit::Metre, 0.0036, 2, 0.00216, 0),
         range("H1.force_max", Unit::Newton, 144e3, 2, 84250.0, 0),
         range("H1.force_min", Unit::Newton, 140e3, 2, 81000.0, 0),
+        range("left.displacement.x", Unit::Metre, 0.0, 0, 0.0, 0),
         range("lug.displacement.y", Unit::Metre, -0.0021, 0, -0.0065, 2),
-        range("left.displacement.y", Unit::Metre, 0.0, 0, 0.0, 0),
         range("left.reaction.y", Unit::Newton, 144e3, 2, 0.0, 1),
         range("hold.1.reaction.y", Unit::Newton, 144e3, 2, 0.0, 1),
+        range("kerb.gap", Unit::Metre, 0.0031, 0, 0.0, 2),
         range("beam.rotation", Unit::Radian, 0.0, 0, -0.0135, 2),
     ];
     JobResult {

@@ -14,13 +14,8 @@ use std::io::{self, Write};
 const AXES: [&str; 3] = ["x", "y", "z"];
 
 /// Writes what an engineer looks for first: reactions, forces of members, movements.
-pub(super) fn write(
-    out: &mut dyn Write,
-    combination: &CombinationResult,
-    style: &Style,
-    layout: &Layout,
-) -> io::Result<()> {
-    let page = Page::of(combination, style);
+pub(super) fn write(out: &mut dyn Write, page: &Page, layout: &Layout) -> io::Result<()> {
+    let combination = page.combination;
     let mut tables = |heading: &str, tables: Vec<Table>| {
         if tables.is_empty() {
             return Ok(());
@@ -51,16 +46,17 @@ pub(super) fn write(
 
 /// How the quantities of an assembly are shown: the style, and the largest of each kind, beside
 /// which what rounding leaves is shown as 0.
-struct Page<'a> {
+pub(super) struct Page<'a> {
+    combination: &'a CombinationResult,
     style: &'a Style,
     coordinates: usize,
-    force: f64,
-    movement: f64,
+    pub(super) force: f64,
+    pub(super) movement: f64,
     rotation: f64,
 }
 
 impl<'a> Page<'a> {
-    fn of(combination: &CombinationResult, style: &'a Style) -> Self {
+    pub(super) fn of(combination: &'a CombinationResult, style: &'a Style) -> Self {
         let members = || combination.members.iter();
         let forces = members().flat_map(|of| [of.force_max.value, of.force_min.value]);
         let holds = combination.holds.iter();
@@ -72,6 +68,7 @@ impl<'a> Page<'a> {
         let rotations = bodies.flat_map(|body| body.rotation.spatial());
         let coordinates = combination.points.first();
         Page {
+            combination,
             style,
             coordinates: coordinates.map_or(0, |point| point.displacement.len()),
             force: largest(forces.chain(reactions.map(|force| force.value))),

@@ -6,7 +6,7 @@ use super::words::{counted, paint, title, verdict, wrapped};
 use super::{Layout, largest, number, ratio, settled, with_unit};
 use crate::model::{AreaUsed, Name};
 use crate::quantity::{Dimension, Length, Measure, Style, from_si};
-use crate::result::{CheckResult, Governing, JobResult, Unit, Verdict};
+use crate::result::{CheckResult, Governing, JobResult, JobStatus, Unit, Verdict};
 use std::collections::{BTreeMap, BTreeSet, HashMap};
 use std::io::{self, Write};
 
@@ -168,8 +168,12 @@ fn write_loss(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io::Resu
         Some(used) => format!("utilisation {}, ", ratio(&style, Some(used))),
         None => String::new(),
     };
+    let losses = match job.status {
+        JobStatus::Error => "losses that were solved",
+        _ => "losses",
+    };
     let text = format!(
-        "Of the losses, that of {} governs (combination {}): {} on {}, {used}{}.",
+        "Of the {losses}, that of {} governs (combination {}): {} on {}, {used}{}.",
         loss.without.join(" and "),
         loss.name,
         named(check),

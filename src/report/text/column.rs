@@ -190,7 +190,9 @@ impl Breaks {
                 let digit = |byte: Option<&u8>| byte.is_some_and(u8::is_ascii_digit);
                 let bytes = text.as_bytes();
                 let before = index.checked_sub(1).and_then(|index| bytes.get(index));
-                !(digit(before) && digit(bytes.get(index + 1)))
+                // An axis at the end stays with its quantity.
+                let is_axis = bytes.len() == index + 2;
+                !(is_axis || digit(before) && digit(bytes.get(index + 1)))
             }
             Breaks::Names => character == ' ',
         };
@@ -286,6 +288,10 @@ mod tests {
         assert_eq!(
             pieces(Breaks::Names, "H4.lower thread.1.25 m"),
             "H4.|lower |thread.|1.25 |m"
+        );
+        assert_eq!(
+            pieces(Breaks::Names, "anchor.reaction.y"),
+            "anchor.|reaction.y"
         );
         assert_eq!(pieces(Breaks::Never, "concrete c40/50"), "concrete c40/50");
     }

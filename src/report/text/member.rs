@@ -1,22 +1,27 @@
 //! One member in one combination: its segments, supports and stations.
 
 use super::column::Column;
-use super::segments;
 use super::table::Table;
 use super::words::{title, wrapped};
-use super::{Layout, largest, optional, settled, with_unit};
+use super::{Layout, assembly, largest, optional, segments, settled, with_unit};
 use crate::quantity::{Force, Length, Measure, Style, from_si};
 use crate::result::{MemberResult, MemberState, SegmentResult, SupportResult, SupportWord};
 use std::io::{self, Write};
 
-/// Writes the tables and totals of a member.
+/// Writes the tables and totals of a member, of an assembly or by itself.
 pub(super) fn write(
     out: &mut dyn Write,
     member: &MemberResult,
+    assembly: Option<&assembly::Page>,
     style: &Style,
     layout: &Layout,
 ) -> io::Result<()> {
-    let page = Page::of(member, style);
+    let mut page = Page::of(member, style);
+    if let Some(assembly) = assembly {
+        // What cancels in a member was as large as what goes through the whole.
+        page.force = page.force.max(assembly.force);
+        page.movement = page.movement.max(assembly.movement);
+    }
     title(out, &format!("Member {}", member.name), '-', layout.width)?;
     for sentence in page.sentences(member) {
         wrapped(out, "", &sentence, layout.width)?;

@@ -113,16 +113,19 @@ fn write_combination(
 ) -> io::Result<()> {
     writeln!(out)?;
     title(out, &combination_title(combination), '=', layout.width)?;
-    if !combination.points.is_empty() {
-        assembly::write(out, combination, &layout.style(job), layout)?;
+    let style = layout.style(job);
+    let assembly =
+        (!combination.points.is_empty()).then(|| assembly::Page::of(combination, &style));
+    if let Some(assembly) = &assembly {
+        assembly::write(out, assembly, layout)?;
     }
     for member in &combination.members {
         writeln!(out)?;
-        member::write(out, member, &layout.style(job), layout)?;
+        member::write(out, member, assembly.as_ref(), &style, layout)?;
     }
     if !combination.checks.is_empty() {
         writeln!(out)?;
-        checks::write_checks(out, &combination.checks, &layout.style(job), layout)?;
+        checks::write_checks(out, &combination.checks, &style, layout)?;
     }
     writeln!(out)?;
     wrapped(out, "", &residuals(&combination.residuals), layout.width)

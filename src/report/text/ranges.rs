@@ -31,6 +31,12 @@ impl<'a> Range<'a> {
             least_in: row.min_in.as_ref(),
         }
     }
+
+    /// Whether it is 0 in every combination, what rounding leaves beside `scale` counted as that.
+    fn is_nothing_beside(&self, scale: f64) -> bool {
+        let is_nothing = |value: Option<f64>| value.is_some_and(|si| settled(si, scale) == 0.0);
+        is_nothing(self.most) && is_nothing(self.least)
+    }
 }
 
 /// Writes the ranges of an assembly: reactions and forces of members first, then what moves.
@@ -40,87 +46,83 @@ pub(super) fn write(out: &mut dyn Write, job: &JobResult, layout: &Layout) -> io
         return Ok(());
     }
     let style = layout.style(job);
-    let said_by_hold = points_of_one_hold(job);
-    let is_said = |range: &Range| {
-        let point = range.of.rsplit_once(REACTION).map(|(point, _)| point);
-        point.is_some_and(|point| said_by_hold.contains(point))
-    };
-    let mut ranges = ranges(&job.envelope);
-    ranges.retain(|range| !is_said(range));
-    let (reactions, rest): (Vec<Range>, Vec<Range>) = ranges
-        .into_iter()
-        .partition(|range| range.unit == Unit::Newton && !range.of.ends_with(FORCE));
-    let (forces, movements): (Vec<Range>, Vec<Range>) = rest
-        .into_iter()
-        .partition(|range| range.unit == Unit::Newton);
-    let mut left_out = 0;
-    for (heading, mut rows) in [
-        ("Reactions over all combinations", reactions),
-        ("Member forces N over all combinations", forces),
-        ("Movements over all combinations", movements),
-    ] {
-        let scales = Scales::of(&rows);
+    let held_once = held_once(job);
+    let ranges = ranges(&job.envelope).into_iter();
+    let told = |range: &Range| !held_once.contains(point_of_reaction(range.of));
+    let kinds = ranges.filter(told).map(|range| (kind(&range), range));
+    let mut tables: [Vec<Range>; 4] = Default::default();
+    for (kind, range) in kinds {
+        tables[kind as usize].push(range);
+    }
+    let headings = [
+        "Reactions over all combinations",
+        "Member forces N over all combinations",
+        "Movements over all combinations",
+        "Rotations over all combinations",
+    ];
+    for (heading, mut rows) in headings.into_iter().zip(tables) {
         let all = rows.len();
-        rows.retain(|row| !scales.is_nothing(row));
-        left_out += all - rows.len();
+        let scale = largest(rows.iter().flat_map(|row| [row.most, row.least]).flatten());
+        rows.retain(|row| !row.is_nothing_beside(scale));
+        let left_out = all - rows.len();
         if rows.is_empty() {
             continue;
         }
         writeln!(out)?;
         title(out, heading, '-', layout.width)?;
-        table(&rows, &scales, &style).write(out, layout)?;
-    }
-    if left_out > 0 {
-        let text = format!(
-            "Left out: {left_out} that are 0 in every combination. The CSV table `envelope` holds them all."
-        );
-        writeln!(out)?;
-        wrapped(out, "", &text, layout.width)?;
+        table(&rows, scale, &style).write(out, layout)?;
+        if left_out > 0 {
+            let text = format!("Left out: {} 0 in all of them.", counted_are(left_out));
+            wrapped(out, "", &text, layout.width)?;
+        }
     }
     Ok(())
 }
 
-/// The points that one hold holds: what all holds together put on them is what that one does, and
-/// its own rows say it.
-fn points_of_one_hold(job: &JobResult) -> HashSet<&str> {
+/// `1 that is`, `2 that are`.
+fn counted_are(count: usize) -> String {
+    let verb = if count == 1 { "is" } else { "are" };
+    format!("{count} that {verb}")
+}
+
+const FORCE: &str = ".force_max";
+
+/// The tables in their order.
+#[derive(Clone, Copy)]
+enum Kind {
+    Reaction,
+    Force,
+    Movement,
+    Rotation,
+}
+
+fn kind(range: &Range) -> Kind {
+    match range.unit {
+        Unit::Newton if range.of.ends_with(FORCE) => Kind::Force,
+        Unit::Newton => Kind::Reaction,
+        Unit::Radian => Kind::Rotation,
+        _ => Kind::Movement,
+    }
+}
+
+/// Points on which one hold alone acts: its reaction is that of the point, and is told once.
+fn held_once(job: &JobResult) -> HashSet<&str> {
+    let holds = job.combinations.first().map_or(&[][..], |each| &each.holds);
     let mut times: HashMap<&str, usize> = HashMap::new();
-    let first = job.combinations.first();
-    for hold in first.iter().flat_map(|combination| &combination.holds) {
+    for hold in holds {
         *times.entry(&hold.point).or_default() += 1;
     }
-    let once = times.into_iter().filter(|&(_, times)| times == 1);
+    let once = times.into_iter().filter(|(_, times)| *times == 1);
     once.map(|(point, _)| point).collect()
 }
 
-/// The largest size of each unit in a table, beside which rounding shows as 0.
-struct Scales([(Unit, f64); 3]);
-
-impl Scales {
-    fn of(rows: &[Range]) -> Self {
-        let scale = |unit: Unit| {
-            let same = rows.iter().filter(move |row| row.unit == unit);
-            largest(same.flat_map(|row| [row.most, row.least]).flatten())
-        };
-        Scales([Unit::Newton, Unit::Metre, Unit::Radian].map(|unit| (unit, scale(unit))))
-    }
-
-    fn settled(&self, value: f64, unit: Unit) -> f64 {
-        let scale = self.0.iter().find(|(known, _)| *known == unit);
-        settled(value, scale.map_or(0.0, |scale| scale.1))
-    }
-
-    /// Whether a row is 0 in every combination.
-    fn is_nothing(&self, row: &Range) -> bool {
-        [row.most, row.least]
-            .iter()
-            .all(|value| value.is_some_and(|value| self.settled(value, row.unit) == 0.0))
-    }
+/// The point of `a.reaction.x`; of any other address nothing that is a point's name.
+fn point_of_reaction(address: &str) -> &str {
+    let point = address
+        .rsplit_once('.')
+        .and_then(|(reaction, _)| reaction.strip_suffix(".reaction"));
+    point.unwrap_or_default()
 }
-
-/// Of a watch.
-const VALUE: &str = ".value";
-const REACTION: &str = ".reaction.";
-const FORCE: &str = ".force_max";
 
 /// The rows of the envelope; the largest and the least force of a member come together.
 fn ranges(envelope: &[Envelope]) -> Vec<Range<'_>> {
@@ -142,37 +144,22 @@ fn is_least_of(address: &str, largest: &str) -> bool {
     member.is_some() && member == address.strip_suffix(".force_min")
 }
 
-/// An address without the quantity that its table's heading names.
-fn shown(address: &str) -> &str {
-    let of_member = address.strip_suffix(FORCE);
-    of_member
-        .or_else(|| address.strip_suffix(VALUE))
-        .unwrap_or(address)
-}
-
-fn table(rows: &[Range], scales: &Scales, style: &Style) -> Table {
-    let value = |value: Option<f64>, unit: Unit| match value {
-        Some(value) => checks::value(style, unit, scales.settled(value, unit)),
+/// A table of ranges of one unit.
+fn table(rows: &[Range], scale: f64, style: &Style) -> Table {
+    let unit = rows.first().map_or(Unit::None, |row| row.unit);
+    let value = |value: Option<f64>| match value {
+        Some(value) => checks::value(style, unit, settled(value, scale)),
         None => "undecided".to_owned(),
     };
     let name = |name: Option<&Name>| name.map_or(String::new(), |name| name.to_string());
-    Table::of([Column::names(
-        "result",
-        rows.iter().map(|row| shown(row.of)),
-    )])
-    .block([
-        Column::number(
-            "largest",
-            None,
-            rows.iter().map(|row| value(row.most, row.unit)),
-        ),
-        Column::combinations(rows.iter().map(|row| name(row.most_in))).headed_as("in combination"),
-        Column::number(
-            "least",
-            None,
-            rows.iter().map(|row| value(row.least, row.unit)),
-        ),
-        Column::combinations(rows.iter().map(|row| name(row.least_in))).headed_as("in combination"),
-        Column::words("unit", rows.iter().map(|row| checks::unit(style, row.unit))),
+    let shown_in = Some(checks::unit(style, unit));
+    let address = |row: &Range| row.of.strip_suffix(FORCE).unwrap_or(row.of).to_owned();
+    let most_in = rows.iter().map(|row| name(row.most_in));
+    let least_in = rows.iter().map(|row| name(row.least_in));
+    Table::of([Column::names("result", rows.iter().map(address))]).block([
+        Column::number("largest", shown_in, rows.iter().map(|row| value(row.most))),
+        Column::combinations(most_in).headed_as("in combination"),
+        Column::number("least", shown_in, rows.iter().map(|row| value(row.least))),
+        Column::combinations(least_in).headed_as("in combination"),
     ])
 }
