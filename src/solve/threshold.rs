@@ -17,6 +17,11 @@ impl Threshold {
     /// Rounding of sums stays two orders below this, and no clearance is drawn to this accuracy.
     const RELATIVE: f64 = 1e-12;
 
+    /// The length that counts as none where lengths of this size, and no others, come together.
+    pub(super) fn beside(lengths: Length) -> Length {
+        lengths * Self::RELATIVE
+    }
+
     /// From the sum of the sizes of forces and of lengths that come together in one member.
     pub(super) fn relative_to(forces: Force, lengths: Length) -> Self {
         Threshold {

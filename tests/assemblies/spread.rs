@@ -170,3 +170,78 @@ fn random_assemblies_ten_to_the_ninth_apart() {
     }
     assert!(compared >= 250, "{compared}");
 }
+
+/// A part that is soft beside the force lets much count as a touch for the states; a clearance is
+/// told as it is all the same, since the bodies do not move.
+#[test]
+fn a_small_clearance_beside_a_soft_member_is_told() {
+    let job = r#"
+        [point]
+        pin = ["0 m", "0 m"]
+        tip = ["3 m", "0 m"]
+        eye = ["1 m", "0 m"]
+        above = ["1 m", "3 m"]
+        [body.lever]
+        points = ["pin", "tip", "eye"]
+        [member.soft]
+        between = ["above", "eye"]
+        segment = [{ length = "rest", stiffness = "1 N/m" }]
+        [[hold]]
+        points = ["pin", "above"]
+        [[hold]]
+        name = "below"
+        point = "tip"
+        along = ["-y"]
+        stop = "0 mm"
+        [[hold]]
+        name = "over"
+        point = "tip"
+        along = ["+y"]
+        stop = "0.0001 mm"
+        [[load]]
+        point = "tip"
+        force = ["0 N", "-5000 kN"]
+    "#;
+    let result = solved("soft.toml", job);
+    let holds = &result.combinations[0].holds;
+    let hold = |name: &str| holds.iter().find(|hold| &*hold.name == name).unwrap();
+    assert_eq!(hold("below").bears, Some(true));
+    assert_eq!(hold("over").bears, Some(false));
+    assert_relative_eq!(hold("over").gap.unwrap().value, 1e-7, max_relative = 1e-12);
+    assert!(result.combinations[0].residuals.largest() <= ROUNDING);
+}
+
+/// What floats beside an open gap carries nothing at all, and no rounding of what moves it.
+#[test]
+fn a_run_beside_an_open_gap_carries_exactly_nothing() {
+    let job = format!(
+        r#"{HEAD}
+        [point]
+        left = ["0 m"]
+        right = ["3 m"]
+        [member.rod]
+        between = ["left", "right"]
+        segment = [
+          {{ length = "0.7 m", section = {{ area = "3 cm2" }}, material = "m" }},
+          {{ name = "play", gap = "0.3 mm" }},
+          {{ length = "rest", section = {{ area = "3 cm2" }}, material = "m" }},
+        ]
+        load = [{{ misfit = "-0.13 mm" }}]
+        [[hold]]
+        name = "ends"
+        points = ["left", "right"]
+        [[load]]
+        hold = "ends"
+        movement = ["0.11 mm"]
+        "#
+    );
+    let result = solved("gap.toml", &job);
+    let rod = &result.combinations[0].members[0];
+    assert_eq!(rod.force_max.value, 0.0);
+    assert_eq!(rod.force_min.value, 0.0);
+    assert_relative_eq!(
+        rod.segments[1].gap.unwrap().value,
+        0.43e-3,
+        max_relative = 1e-12
+    );
+}

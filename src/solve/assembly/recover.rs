@@ -50,18 +50,43 @@ impl Answered<'_> {
                 Carrying::No(slack_by) => self.slack(loaded, slack_by),
             },
             (_, spans) => {
-                let force = |(span, inside): (&Span, &super::tie::Condensed)| match span.part {
-                    Part::Elastic(part) => self.answer.elastic[part],
-                    Part::Gap(part) => -self.answer.one_way[part],
-                    Part::Within(_) => span
-                        .stiffness
-                        .map_or(Force::default(), |stiffness| stiffness * -inside.rest),
-                    Part::OneWay(..) | Part::GapWithin => Force::default(),
+                let force = |(at, (span, inside)): (usize, (&Span, &super::tie::Condensed))| {
+                    match span.part {
+                        Part::Elastic(part) => self
+                            .beside_gap(at, &loaded)
+                            .unwrap_or(self.answer.elastic[part]),
+                        Part::Gap(part) => -self.answer.one_way[part],
+                        Part::Within(_) => span
+                            .stiffness
+                            .map_or(Force::default(), |stiffness| stiffness * -inside.rest),
+                        Part::OneWay(..) | Part::GapWithin => Force::default(),
+                    }
                 };
-                let forces: Vec<Force> = spans.iter().zip(&loaded.spans).map(force).collect();
+                let forces: Vec<Force> = spans
+                    .iter()
+                    .zip(&loaded.spans)
+                    .enumerate()
+                    .map(force)
+                    .collect();
                 self.walk(&loaded, &forces)
             }
         }
+    }
+
+    /// N at the start of a run beside a gap, from what the gap carries and what acts between: an
+    /// open one carries nothing, and the run then exactly what acts on it.
+    fn beside_gap(&self, at: usize, loaded: &Loaded) -> Option<Force> {
+        let carried = |at: usize| match self.tie.spans.get(at)?.part {
+            Part::Gap(part) => Some(-self.answer.one_way[part]),
+            _ => None,
+        };
+        let pieces = &self.tie.spans[at].pieces;
+        let loads = &loaded.prepared.chain.loads;
+        if let Some(before) = at.checked_sub(1).and_then(carried) {
+            return Some(before - loads[pieces.start]);
+        }
+        let after = carried(at + 1)?;
+        Some(after + loads[pieces.end] + loaded.spans[at].load)
     }
 
     fn carrying(&self, carries: Carries, span: &Span, loaded: &Loaded) -> Carrying {

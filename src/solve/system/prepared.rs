@@ -8,8 +8,10 @@ use super::choice::{amounts, tipping};
 use super::held::{Held, Part, Settled, stretch};
 use super::split::{Split, split};
 use super::tableau::{Tableau, work};
-use super::{Answer, Failure, FreeMotion, Loads, Row, System};
-use crate::quantity::from_si;
+use super::twofold::Twofold;
+use super::{Answer, Failure, FreeMotion, Loads, OneWay, Row, System};
+use crate::quantity::{Length, from_si};
+use crate::solve::Threshold;
 
 /// Sets of states whose factors are kept, beside the base.
 const KEPT: usize = 8;
@@ -256,13 +258,48 @@ impl Prepared {
                 .zip(&acts)
                 .map(|(force, &acts)| from_si(if acts { force.max(0.0) } else { 0.0 }))
                 .collect(),
-            clearance: standing.clearance.into_iter().map(from_si).collect(),
+            clearance: self.clearances(&standing.clearance, &acts, &settled.displacements, loads),
             acts,
             free,
             undecided_rigid,
             undecided_one_way,
             condition: held.condition(),
         }
+    }
+}
+
+impl Prepared {
+    /// How far every part is from acting. What counts as a touch for the states may be a clearance
+    /// all the same, where a soft part lets the threshold be wide: it is told as it is, but for
+    /// the rounding of what it is the difference of.
+    fn clearances(
+        &self,
+        decided: &[f64],
+        acts: &[bool],
+        displacements: &[Twofold],
+        loads: &Loads,
+    ) -> Vec<Length> {
+        let parts = self.system.one_way.iter().zip(&loads.one_way_rest);
+        let clearance =
+            |((part, &rest), (&decided, &acts)): ((&OneWay, &Length), (&f64, &bool))| {
+                if acts || decided > 0.0 {
+                    return from_si(decided);
+                }
+                let open = -stretch(&part.row, displacements).plus(-rest.value).value();
+                let sizes = part.row.iter().map(|&(unknown, b)| {
+                    let moved = displacements[unknown].value();
+                    (b * moved).abs()
+                });
+                let size = rest.abs() + from_si(sizes.sum());
+                let open: Length = from_si(open);
+                if open > Threshold::beside(size) {
+                    open
+                } else {
+                    Length::default()
+                }
+            };
+        let decisions = decided.iter().zip(acts);
+        parts.zip(decisions).map(clearance).collect()
     }
 }
 
